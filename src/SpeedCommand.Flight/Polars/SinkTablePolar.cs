@@ -87,6 +87,11 @@ public sealed class SinkTablePolar : IPolar
     /// <inheritdoc/>
     public IPolar WithAddedDrag(double zeroLiftDragIncrement)
     {
+        if (double.IsNaN(WingAreaM2))
+        {
+            throw new InvalidOperationException("a drag coefficient means nothing without a wing area");
+        }
+
         var perCube = zeroLiftDragIncrement * StandardAtmosphere.SeaLevelDensityKgPerM3 * WingAreaM2
             / (2 * ReferenceMassKg * StandardAtmosphere.StandardGravityMps2);
         var points = _points.Select(point => point with { SinkMps = point.SinkMps + perCube * Math.Pow(point.AirspeedMps, 3) });
