@@ -66,12 +66,12 @@ public static class GliderFile
     {
         if (referenceMassKg > maxMassKg)
         {
-            places.Fault(top.Find("referenceMass")!, $"expected at most maxMass ({top.Find("maxMass")!.Text}), found '{top.Find("referenceMass")!.Text}'");
+            places.FaultFound(top.Find("referenceMass")!, "at most maxMass");
         }
 
         if (emptyMassKg >= referenceMassKg)
         {
-            places.Fault(top.Find("emptyMass")!, $"expected less than referenceMass ({top.Find("referenceMass")!.Text}), found '{top.Find("emptyMass")!.Text}'");
+            places.FaultFound(top.Find("emptyMass")!, "less than referenceMass");
         }
     }
 

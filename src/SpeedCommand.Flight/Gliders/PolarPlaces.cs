@@ -78,7 +78,7 @@ internal static class PolarPlaces
         var clMax = places.Number(polar, "clMax", 0.2, 5, isRequired: false);
         if (k1 <= -2 * Math.Sqrt(cd0 * k2))
         {
-            places.Fault(polar.Find("k1")!, "expected a k1 that keeps the drag positive at every lift (above -2 √(cd0 k2))");
+            places.FaultFound(polar.Find("k1")!, "a k1 that keeps the drag positive at every lift, above -2 √(cd0 k2)");
         }
 
         return places.HasFault ? null : new DragPolar(wingAreaM2, referenceMassKg, cd0, k1, k2, clMax);
@@ -101,7 +101,7 @@ internal static class PolarPlaces
         var max = places.Quantity(polar, "maxAirspeed", QuantityKind.Speed, LimitPlaces.SlowestMps, LimitPlaces.FastestMps);
         if (max <= min)
         {
-            places.Fault(polar.Find("maxAirspeed")!, "expected above minAirspeed");
+            places.FaultFound(polar.Find("maxAirspeed")!, "above minAirspeed");
         }
 
         var slowest = Math.Max(min, Math.Min(max, -b / (2 * a)));
@@ -129,7 +129,7 @@ internal static class PolarPlaces
             var sinkMps = places.Quantity(element, "sink", QuantityKind.Speed, 0.05, 50);
             if (points.Count > 0 && airspeedMps <= points[^1].AirspeedMps)
             {
-                places.Fault(element.Find("airspeed")!, $"expected an airspeed above that of the entry before, found '{element.Find("airspeed")!.Text}'");
+                places.FaultFound(element.Find("airspeed")!, "an airspeed above that of the entry before");
             }
 
             points.Add(new(airspeedMps, sinkMps, double.IsNaN(sinkMps) ? 0 : RoundingMps(element.Find("sink")!.Text)));

@@ -31,7 +31,8 @@ public static class Descent
 
         var sum = default(DescentResult);
         var topM = plan.FromM;
-        foreach (var endM in plan.Winds.Select(wind => wind.UpToM).Where(m => m < plan.FromM && m > plan.ToM).OrderDescending().Append(plan.ToM))
+        var layers = plan.Winds.Select(wind => wind.UpToM).Where(topOfLayerM => topOfLayerM < plan.FromM && topOfLayerM > plan.ToM);
+        foreach (var endM in layers.OrderDescending().Append(plan.ToM))
         {
             if (!TryLayer(targets, column, plan, topM, endM, ref sum))
             {

@@ -1,5 +1,4 @@
 using MathNet.Numerics.LinearRegression;
-using SpeedCommand.Flight.Atmosphere;
 
 namespace SpeedCommand.Flight.Polars;
 
@@ -26,13 +25,13 @@ public sealed record DragPolarFit(DragPolar Polar, IReadOnlyList<double> Residua
         var sinks = points.Select(point => point.SinkMps).ToArray();
         var coefficients = MultipleRegression.QR(rows, sinks, intercept: false);
         var (cube, linear, inverse) = (coefficients[0] / Math.Pow(unit, 3), coefficients[1] / unit, coefficients[2] * unit);
-        var loading = 2 * referenceMassKg * StandardAtmosphere.StandardGravityMps2 / (StandardAtmosphere.SeaLevelDensityKgPerM3 * wingAreaM2);
-        if (!(cube > 0 && inverse > 0 && linear > -2 * Math.Sqrt(cube * inverse) && loading > 0))
+        var unitLift = DragPolar.UnitLiftSpeedSquared(referenceMassKg, wingAreaM2);
+        if (!(cube > 0 && inverse > 0 && linear > -2 * Math.Sqrt(cube * inverse) && unitLift > 0))
         {
             return null;
         }
 
-        var polar = new DragPolar(wingAreaM2, referenceMassKg, cube * loading, linear, inverse / loading, loading / (unit * unit));
+        var polar = new DragPolar(wingAreaM2, referenceMassKg, cube * unitLift, linear, inverse / unitLift, unitLift / (unit * unit));
         var residuals = points.Select(point =>
             (cube * point.AirspeedMps * point.AirspeedMps + linear) * point.AirspeedMps + inverse / point.AirspeedMps - point.SinkMps);
         return new(polar, [.. residuals]);

@@ -1,5 +1,3 @@
-using SpeedCommand.Flight.Atmosphere;
-
 namespace SpeedCommand.Flight.Polars;
 
 /// <summary>
@@ -92,8 +90,7 @@ public sealed class SinkTablePolar : IPolar
             throw new InvalidOperationException("a drag coefficient means nothing without a wing area");
         }
 
-        var perCube = zeroLiftDragIncrement * StandardAtmosphere.SeaLevelDensityKgPerM3 * WingAreaM2
-            / (2 * ReferenceMassKg * StandardAtmosphere.StandardGravityMps2);
+        var perCube = zeroLiftDragIncrement / DragPolar.UnitLiftSpeedSquared(ReferenceMassKg, WingAreaM2);
         var points = _points.Select(point => point with { SinkMps = point.SinkMps + perCube * Math.Pow(point.AirspeedMps, 3) });
         return new SinkTablePolar([.. points], ReferenceMassKg, WingAreaM2);
     }

@@ -102,10 +102,11 @@ public sealed class SpeedTargets
     /// <param name="target">The target.</param>
     /// <param name="loading">The loading the target was made for.</param>
     /// <returns>The setting's name; null without flaps or without a target.</returns>
-    public string? FlapSettingAt(in TargetSpeed target, in Loading loading) =>
-        target.IsKnown && _glider.Polar is FlappedPolar flapped
-            ? flapped.SettingAt(target.EquivalentAirspeedMps / Math.Sqrt(loading.LoadFactor * loading.MassKg / _glider.ReferenceMassKg))?.Name
-            : null;
+    public string? FlapSettingAt(in TargetSpeed target, in Loading loading)
+    {
+        var scale = Math.Sqrt(loading.LoadFactor * loading.MassKg / _glider.ReferenceMassKg);
+        return target.IsKnown && _glider.Polar is FlappedPolar flapped ? flapped.SettingAt(target.EquivalentAirspeedMps / scale)?.Name : null;
+    }
 
     /// <summary>The speed of the flattest glide over the ground.</summary>
     /// <param name="air">The air.</param>

@@ -32,6 +32,19 @@ public sealed class ClimbPlan
     /// <summary>The plan from the ground to the top, at least every 5 m.</summary>
     public IReadOnlyList<ClimbPlanStep> Steps { get; }
 
+    /// <summary>What to do at a height.</summary>
+    /// <param name="heightM">Height above the landing height, m.</param>
+    /// <returns>The step at or just below it; null below the ground or above the top.</returns>
+    public ClimbPlanStep? At(double heightM)
+    {
+        if (!(heightM >= 0 && heightM <= Steps[^1].HeightM))
+        {
+            return null;
+        }
+
+        return Steps.Last(step => step.HeightM <= heightM);
+    }
+
     /// <summary>Works out the plan.</summary>
     /// <param name="targets">The glider's targets; it needs limits.</param>
     /// <param name="air">The air, taken the same at every height.</param>

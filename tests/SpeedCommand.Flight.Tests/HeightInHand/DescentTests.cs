@@ -27,7 +27,7 @@ public sealed class DescentTests
         var result = Fly(Standard, new(fromM, toM, DescentSpeed.MinSink, ReferenceGlider.Straight));
         Close.Relative(timeS, result.TimeS, Tolerance);
         Close.Relative(fromM - toM, result.HeightM, 1e-9);
-        Assert.True(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(fromM), ReferenceGlider.Straight, toM, 0, out var live));
+        Assert.True(Estimate(fromM, toM, 0, out var live));
         Close.Relative(timeS, live.EnduranceS, Tolerance);
     }
 
@@ -71,7 +71,8 @@ public sealed class DescentTests
     [Fact]
     public void TryFly_WindByLayer_TheSumOfTheLayers()
     {
-        var plan = new DescentPlan(2600, 400, DescentSpeed.BestGlide, ReferenceGlider.Straight) { Winds = [new(1000, 4), new(1810, 9), new(2000, -3)] };
+        WindLayer[] winds = [new(1000, 4), new(1810, 9), new(2000, -3)];
+        var plan = new DescentPlan(2600, 400, DescentSpeed.BestGlide, ReferenceGlider.Straight) { Winds = winds };
         var whole = Fly(Standard, plan);
         var (time, distance) = (0.0, 0.0);
         foreach (var (top, end, wind) in new[] { (1000.0, 400.0, 4.0), (1810, 1000, 9), (2000, 1810, -3), (2600, 2000, -3) })
@@ -93,8 +94,11 @@ public sealed class DescentTests
     }
 
     [Fact]
-    public void TryFly_RisingAirStrongerThanTheSink_ForEver() =>
-        Assert.Equal(double.PositiveInfinity, Fly(Standard, new(2000, 1000, DescentSpeed.MinSink, ReferenceGlider.Straight) { AirMps = 1 }).TimeS);
+    public void TryFly_RisingAirStrongerThanTheSink_ForEver()
+    {
+        var plan = new DescentPlan(2000, 1000, DescentSpeed.MinSink, ReferenceGlider.Straight) { AirMps = 1 };
+        Assert.Equal(double.PositiveInfinity, Fly(Standard, plan).TimeS);
+    }
 
     [Theory]
     [InlineData(300, 3000)]
@@ -110,17 +114,19 @@ public sealed class DescentTests
         new(3000, 300, DescentSpeed.MinSink, ReferenceGlider.Straight),
         out _));
 
-    [Theory] // altitude m, offset K, humidity, headwind m/s, floor m
-    [InlineData(2500, 15, double.NaN, 6, 400)]
-    [InlineData(9000, -10, double.NaN, -8, 300)]
-    [InlineData(1200, 8, double.NaN, 15, 350)]
-    [InlineData(400, 0, double.NaN, 0, 300)]
-    public void TryEstimate_OffsetAirAndWind_AsTheFineSum(double altitudeM, double offsetK, double humidity, double headwindMps, double floorM)
+    [Theory] // altitude m, offset K, headwind m/s, floor m
+    [InlineData(2500, 15, 6, 400)]
+    [InlineData(9000, -10, -8, 300)]
+    [InlineData(1200, 8, 15, 350)]
+    [InlineData(400, 0, 0, 300)]
+    public void TryEstimate_OffsetAirAndWind_AsTheFineSum(double altitudeM, double offsetK, double headwindMps, double floorM)
     {
         StandardAtmosphere.TryAt(altitudeM, out var state);
-        Assert.True(Air.TryMeasured(state.PressurePa, state.TemperatureK + offsetK, humidity, out var air, out _));
-        Assert.True(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, air, ReferenceGlider.Straight with { LoadFactor = 1.4 }, floorM, headwindMps, out var live));
-        var plan = new DescentPlan(altitudeM, floorM, DescentSpeed.MinSink, ReferenceGlider.Straight) { Winds = [new(32_000, headwindMps)] };
+        Assert.True(Air.TryMeasured(state.PressurePa, state.TemperatureK + offsetK, double.NaN, out var air, out _));
+        var circling = ReferenceGlider.Straight with { LoadFactor = 1.4 };
+        Assert.True(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, air, circling, floorM, headwindMps, out var live));
+        WindLayer[] winds = [new(32_000, headwindMps)];
+        var plan = new DescentPlan(altitudeM, floorM, DescentSpeed.MinSink, ReferenceGlider.Straight) { Winds = winds };
         Close.Relative(Fly(new StandardColumn(offsetK), plan).TimeS, live.EnduranceS, 1e-5);
         Close.Relative(Fly(new StandardColumn(offsetK), plan with { Speed = DescentSpeed.BestGlide }).DistanceM, live.RangeM, 1e-5);
     }
@@ -128,14 +134,14 @@ public sealed class DescentTests
     [Fact]
     public void TryEstimate_BelowTheFloor_NothingInHand()
     {
-        Assert.True(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(250), ReferenceGlider.Straight, 300, 0, out var live));
+        Assert.True(Estimate(250, 300, 0, out var live));
         Assert.Equal(new LiveHeight(0, 0), live);
     }
 
     [Fact]
     public void TryEstimate_WindFasterThanTheGlider_EnduranceWithoutRange()
     {
-        Assert.True(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(2000), ReferenceGlider.Straight, 300, 400, out var live));
+        Assert.True(Estimate(2000, 300, 400, out var live));
         Assert.True(live.EnduranceS > 0);
         Assert.True(double.IsNaN(live.RangeM));
     }
@@ -144,8 +150,15 @@ public sealed class DescentTests
     public void TryEstimate_NoAirOrNoFloor_Refuses()
     {
         Assert.False(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, default, ReferenceGlider.Straight, 300, 0, out _));
-        Assert.False(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(2000), ReferenceGlider.Straight, double.NaN, 0, out _));
-        Assert.False(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(2000), default, 300, 0, out _));
+        Assert.False(Estimate(2000, double.NaN, 0, out _));
+        var air = ReferenceGlider.StandardAirAt(2000);
+        Assert.False(LiveHeight.TryEstimate(ReferenceGlider.Unlimited, air, default, 300, 0, out _));
+    }
+
+    private static bool Estimate(double altitudeM, double floorM, double headwindMps, out LiveHeight live)
+    {
+        var air = ReferenceGlider.StandardAirAt(altitudeM);
+        return LiveHeight.TryEstimate(ReferenceGlider.Unlimited, air, ReferenceGlider.Straight, floorM, headwindMps, out live);
     }
 
     private static DescentResult Fly(IAirColumn column, DescentPlan plan)

@@ -6,7 +6,7 @@ namespace SpeedCommand.Flight.Tests.Polars;
 
 public sealed class FlappedPolarTests
 {
-    private static readonly DragPolar Slow = new(10.8, 480, 0.0115, -0.0060, 0.0150, 1.6);
+    private static readonly DragPolar Slow = new(10.8, 480, 0.0115, -0.0030, 0.0150, 1.6);
     private static readonly DragPolar Fast = new(10.8, 480, 0.0085, 0.0010, 0.0200, 1.0);
     private static readonly FlappedPolar Both = new([new("+10", Slow), new("-5", Fast)]);
 

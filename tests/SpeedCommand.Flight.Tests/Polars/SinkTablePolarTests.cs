@@ -5,9 +5,11 @@ namespace SpeedCommand.Flight.Tests.Polars;
 
 public sealed class SinkTablePolarTests
 {
+    private static readonly Gen<double> Digits = Gen.OneOf(Gen.Const(0.001), Gen.Const(0.01), Gen.Const(0.05));
+
     /// <summary>Handbook tables: a drag polar read off every 5 to 20 km/h and rounded to a centimetre per second, or finer or coarser.</summary>
     private static readonly Gen<(DragPolar True, SinkPoint[] Points)> Tables = Gen.Select(
-        Gen.Double[0.008, 0.014], Gen.Double[-0.004, 0.002], Gen.Double[0.012, 0.03], Gen.Int[6, 20], Gen.OneOf(Gen.Const(0.001), Gen.Const(0.01), Gen.Const(0.05)),
+        Gen.Double[0.008, 0.014], Gen.Double[-0.004, 0.002], Gen.Double[0.012, 0.03], Gen.Int[6, 20], Digits,
         (cd0, k1, k2, count, digit) =>
         {
             var polar = new DragPolar(11, 350, cd0, k1, k2);
@@ -31,25 +33,24 @@ public sealed class SinkTablePolarTests
             Close.Absolute(point.SinkMps + curve.ResidualsMps[i], curve.SinkMps(point.AirspeedMps), 1e-12);
         }
 
-        var (before, step) = (curve.SlopeAt(21), 45.0 / 2000);
-        for (var i = 1; i <= 2000; i++)
+        const double Step = 45.0 / 2000;
+        for (var i = 1; i < 2000; i++)
         {
-            var v = 21 + i * step * (1 - 1e-12);
-            var slope = curve.SlopeAt(v);
-            Assert.True(slope > before, $"the slope falls at {v}");
-            Close.Absolute(curve.SinkMps(v) - curve.SinkMps(v - step), (slope + before) / 2 * step, 1e-5);
-            before = slope;
+            var (v, before) = (21 + i * Step, 21 + (i - 1) * Step);
+            Assert.True(curve.SlopeAt(v) > curve.SlopeAt(before), $"the slope falls at {v}");
+            // The trapezium rule holds only where the slope does not jump; a kink of 1 % of the slope would show.
+            Close.Absolute(curve.SinkMps(v) - curve.SinkMps(before), (curve.SlopeAt(v) + curve.SlopeAt(before)) / 2 * Step, 1e-5);
         }
     }, iter: 300);
 
     [Fact]
-    public void Curve_FineTable_CloseToTheTruth() => Tables.Where(table => table.Points is { Length: >= 12 } points && points[0].RoundingMps < 0.002).Sample(table =>
+    public void Curve_FineTable_CloseToTheTruth() => Tables.Where(table => table.Points.Length >= 8 && IsFine(table)).Sample(table =>
     {
         var curve = new SinkTablePolar(table.Points, 350, 11);
         for (var m = -0.2; m < 4; m += 0.1)
         {
             var (expected, actual) = (table.True.BestRatioAirspeedMps(m, 0, 21, 66), curve.BestRatioAirspeedMps(m, 0, 21, 66));
-            Close.Relative(expected, actual, 0.02);
+            Close.Relative(expected, actual, 0.01);
         }
     }, iter: 100);
 
@@ -126,7 +127,7 @@ public sealed class SinkTablePolarTests
     });
 
     [Fact]
-    public void DragPolarFit_RoundedPoints_ResidualsOfTheSizeOfTheRounding() => Tables.Where(table => table.Points[0].RoundingMps < 0.01).Sample(table =>
+    public void DragPolarFit_RoundedPoints_ResidualsOfTheSizeOfTheRounding() => Tables.Where(IsFine).Sample(table =>
     {
         var fit = DragPolarFit.Of(table.Points, 350, 11)!;
         var rms = Math.Sqrt(fit.ResidualsMps.Average(residual => residual * residual));
@@ -140,4 +141,6 @@ public sealed class SinkTablePolarTests
         Assert.Null(DragPolarFit.Of([new(20, 1, 0), new(30, 0.8, 0)], 350, 11));
         Assert.Null(DragPolarFit.Of([new(20, 0.5, 0), new(30, 2, 0), new(40, 2.1, 0)], 350, 11));
     }
+
+    private static bool IsFine((DragPolar True, SinkPoint[] Points) table) => table.Points[0].RoundingMps < 0.001;
 }

@@ -19,7 +19,11 @@ public sealed class ClimbPlanTests
         Assert.All(plan.Steps, step => Close.Relative(classic.Speed.IndicatedAirspeedMps, step.Speed.IndicatedAirspeedMps, 1e-3));
     }
 
-    [Fact] // Cochrane, "MacCready theory with uncertain lift and limited altitude", Technical Soaring 23 (1999): slower and less choosy when low
+    /// <summary>
+    /// The finding of Cochrane, "MacCready theory with uncertain lift and limited altitude", Technical Soaring 23 (1999), from
+    /// memory: fly slower, and take weaker climbs, the lower the glider is.
+    /// </summary>
+    [Fact]
     public void Make_DearLanding_SlowerAndLessChoosyWhenLow()
     {
         var plan = Make(Weak);
@@ -63,8 +67,22 @@ public sealed class ClimbPlanTests
     [InlineData(1.5, 1, 0, 1200, 5400)]
     [InlineData(1.5, 1, 9000, double.NaN, 5400)]
     [InlineData(1.5, 1, 9000, 1200, 0)]
-    public void Make_ImpossibleProspect_Null(double mean, double spread, double spacing, double top, double cost) =>
-        Assert.Null(ClimbPlan.Make(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(1000), ReferenceGlider.Straight, new(mean, spread, spacing, top, cost)));
+    public void Make_ImpossibleProspect_Null(double mean, double spread, double spacing, double top, double cost)
+    {
+        var prospect = new ClimbProspect(mean, spread, spacing, top, cost);
+        Assert.Null(ClimbPlan.Make(ReferenceGlider.Unlimited, ReferenceGlider.StandardAirAt(1000), ReferenceGlider.Straight, prospect));
+    }
+
+    [Fact]
+    public void At_Height_StepAtOrBelow()
+    {
+        var plan = Make(Weak);
+        Assert.Equal(plan.Steps[40], plan.At(plan.Steps[40].HeightM + 1));
+        Assert.Equal(plan.Steps[^1], plan.At(1200));
+        Assert.Null(plan.At(-1));
+        Assert.Null(plan.At(1201));
+        Assert.Null(plan.At(double.NaN));
+    }
 
     private static ClimbPlan Make(ClimbProspect prospect)
     {
