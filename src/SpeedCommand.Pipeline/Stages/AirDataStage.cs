@@ -59,7 +59,7 @@ internal sealed class AirDataStage(FlightSettings settings)
         }
 
         var air = Air;
-        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed))
+        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed, out _))
         {
             _trueAirspeedMps = airspeed.Mps;
             return airspeed.Mps * airspeed.Mps / (2 * StandardAtmosphere.StandardGravityMps2);
@@ -74,7 +74,7 @@ internal sealed class AirDataStage(FlightSettings settings)
     public double SetIndicated(long timeUs, double indicatedMps)
     {
         var calibrated = settings.Glider.AirspeedCorrection.ToCalibrated(new IndicatedAirspeed(indicatedMps));
-        return SetImpact(timeUs, AirspeedConversion.ImpactPressurePa(calibrated));
+        return AirspeedConversion.TryImpactPressure(calibrated, out var impactPa) ? SetImpact(timeUs, impactPa) : double.NaN;
     }
 
     /// <summary>Indicated and true airspeed; false when either input is silent or the glider stands.</summary>
@@ -84,7 +84,7 @@ internal sealed class AirDataStage(FlightSettings settings)
         trueAirspeed = default;
         if (!IsAirspeedFresh(nowUs) || !IsStaticFresh(nowUs)
             || !AirspeedConversion.TryCalibrated(_impactPa.Value, out var calibrated)
-            || !AirspeedConversion.TryTrue(_impactPa.Value, Air, out trueAirspeed))
+            || !AirspeedConversion.TryTrue(_impactPa.Value, Air, out trueAirspeed, out _))
         {
             return false;
         }
