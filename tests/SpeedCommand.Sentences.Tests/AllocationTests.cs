@@ -1,3 +1,5 @@
+using SpeedCommand.Sentences.GnssSentences;
+
 namespace SpeedCommand.Sentences.Tests;
 
 public sealed class AllocationTests
@@ -7,7 +9,10 @@ public sealed class AllocationTests
         + "noise$YXXDR,P,612.4,P,IMPACT*62\r\n"
         + "$WIXDR,C,-12.3,C,OAT,P,0.91234,B,BARO,H,45.2,P,RH*09\r\n"
         + "$YXXDR,P,95461.2,P,STATIC*75\r\n"
-        + "$YXXDR,P,9546\r\n");
+        + "$YXXDR,P,9546\r\n"
+        + "$GPGGA,123519,4807.038,N,01131.000,E,1,08,0.9,545.4,M,46.9,M,,*47\r\n"
+        + "$GPRMC,123519,A,4807.038,N,01131.000,E,022.4,084.4,230394,003.1,W*6A\r\n"
+        + "$GPVTG,054.7,T,034.4,M,005.5,N,010.2,K*48\r\n");
 
     [Fact]
     public void BytesToReadings_TenThousandLines_AllocateNothing()
@@ -25,8 +30,9 @@ public sealed class AllocationTests
 
         var allocated = GC.GetAllocatedBytesForCurrentThread() - before;
         Assert.Equal(0, allocated);
-        Assert.Equal(5 * 2_001, sink.LineCount);
+        Assert.Equal(8 * 2_001, sink.LineCount);
         Assert.Equal(4 * 2_001, sink.ReadingCount);
+        Assert.Equal(3 * 2_001, sink.FixCount);
     }
 
     [Fact]
@@ -55,6 +61,8 @@ public sealed class AllocationTests
 
         public int ReadingCount { get; private set; }
 
+        public int FixCount { get; private set; }
+
         public void OnLine(ReadOnlySpan<byte> line)
         {
             LineCount++;
@@ -64,6 +72,10 @@ public sealed class AllocationTests
                 {
                     ReadingCount += double.IsFinite(reading.Value) ? 1 : 0;
                 }
+
+                FixCount += RmcSentence.TryRead(sentence, out _) ? 1 : 0;
+                FixCount += GgaSentence.TryRead(sentence, out _) ? 1 : 0;
+                FixCount += VtgSentence.TryRead(sentence, out _) ? 1 : 0;
             }
         }
     }

@@ -1,3 +1,5 @@
+using SpeedCommand.Sentences.GnssSentences;
+
 namespace SpeedCommand.Sentences.Tests;
 
 /// <summary>Seeded noise on valid input. A failure names its seed and round, and comes again.</summary>
@@ -41,6 +43,8 @@ public sealed class NoisyLineTests
             {
                 Assert.True(double.IsFinite(reading.Value), $"seed {Seed}, round {round}: {WireText.Text(line)}");
             }
+
+            AssertOnTheGlobe(sentence, $"seed {Seed}, round {round}: {WireText.Text(line)}");
         }
 
         // Some mutations hit only what stands before the '$', so a good part must pass; and most must not.
@@ -76,6 +80,26 @@ public sealed class NoisyLineTests
         }
 
         Assert.Equal(sent, sink.Accepted);
+    }
+
+    private static void AssertOnTheGlobe(Sentence sentence, string message)
+    {
+        if (RmcSentence.TryRead(sentence, out var rmc))
+        {
+            Assert.False(Math.Abs(rmc.LatitudeRad) > Math.PI / 2 || Math.Abs(rmc.LongitudeRad) > Math.PI, message);
+            Assert.False(double.IsInfinity(rmc.GroundSpeedMps) || rmc.TimeOfDayS is < 0 or >= 86401, message);
+        }
+
+        if (GgaSentence.TryRead(sentence, out var gga))
+        {
+            Assert.False(Math.Abs(gga.LatitudeRad) > Math.PI / 2 || Math.Abs(gga.LongitudeRad) > Math.PI, message);
+            Assert.False(double.IsInfinity(gga.AltitudeM) || gga.TimeOfDayS is < 0 or >= 86401, message);
+        }
+
+        if (VtgSentence.TryRead(sentence, out var vtg))
+        {
+            Assert.False(double.IsInfinity(vtg.GroundSpeedMps) || double.IsInfinity(vtg.TrackRad), message);
+        }
     }
 
     private static byte[] Mutate(string text, Random random)
