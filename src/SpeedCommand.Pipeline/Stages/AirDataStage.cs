@@ -1,6 +1,5 @@
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
-using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Pipeline.Stages;
 
