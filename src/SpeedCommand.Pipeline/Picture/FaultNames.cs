@@ -12,6 +12,7 @@ public static class FaultNames
         new(Faults.StaticRange, "static-range"),
         new(Faults.AirspeedRange, "airspeed-range"),
         new(Faults.TemperatureRange, "temperature-range"),
+        new(Faults.LoadRange, "load-range"),
         new(Faults.BadLines, "bad-lines"),
         new(Faults.NoLimits, "no-limits"),
         new(Faults.RecorderStopped, "recorder-stopped"),

@@ -25,12 +25,15 @@ public enum Faults
     /// <summary>A temperature outside the range of weather came in lately.</summary>
     TemperatureRange = 1 << 5,
 
+    /// <summary>A load factor or bank outside the range of a glider came in lately.</summary>
+    LoadRange = 1 << 6,
+
     /// <summary>Lines came in lately that no valid sentence could be read from.</summary>
-    BadLines = 1 << 6,
+    BadLines = 1 << 7,
 
     /// <summary>The glider file has no limits, or none for this altitude: the speed to fly is not shown.</summary>
-    NoLimits = 1 << 7,
+    NoLimits = 1 << 8,
 
     /// <summary>The flight is no longer being recorded; set by the service, never by the pipeline.</summary>
-    RecorderStopped = 1 << 8,
+    RecorderStopped = 1 << 9,
 }
