@@ -89,8 +89,8 @@ public ref struct XdrReadings
     }
 
     /// <summary>
-    /// Room for every reading one sentence can hold: 80 characters less "$--XDR", and the shortest measurement, ",G,1,,IAS" or
-    /// ",H,1,P,RH", takes 9.
+    /// Room for every reading one sentence can hold: 80 characters less "$--XDR" (the checksum may be missing), and the
+    /// shortest measurement, ",G,1,,IAS" or ",H,1,P,RH", takes 9.
     /// </summary>
     [InlineArray((SentenceReader.MaxLength - 6) / 9)]
     private struct Room
