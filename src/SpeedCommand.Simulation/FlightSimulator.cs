@@ -98,11 +98,8 @@ public sealed class FlightSimulator
     private void FlyLeg(FlightLeg leg, ISimulatedFlightSink sink)
     {
         var startUs = _timeUs;
-        var startM = _state.AlongM;
-        var isBelow = _state.HeightM < leg.ToHeightM;
-        while (!((_timeUs - startUs) / 1e6 >= leg.ForS
-            || _state.AlongM - startM >= leg.ForM
-            || (isBelow ? _state.HeightM >= leg.ToHeightM : _state.HeightM <= leg.ToHeightM)))
+        var start = _state;
+        while (!IsOver(leg, startUs, start))
         {
             if (_timeUs / 1e6 > LongestS)
             {
@@ -112,6 +109,12 @@ public sealed class FlightSimulator
             Step(leg, sink);
         }
     }
+
+    private bool IsOver(FlightLeg leg, long startUs, in GliderState start) =>
+        (_timeUs - startUs) / 1e6 >= leg.ForS
+        || _state.AlongM - start.AlongM >= leg.ForM
+        || (start.HeightM < leg.ToHeightM ? _state.HeightM >= leg.ToHeightM : _state.HeightM <= leg.ToHeightM)
+        || Math.Abs(_state.HeadingRad - start.HeadingRad) >= leg.TurnRad;
 
     private void Step(FlightLeg leg, ISimulatedFlightSink sink)
     {

@@ -5,8 +5,12 @@ namespace SpeedCommand.Desk.Commands;
 /// <summary>Runs the command line and turns every foreseeable failure into one line on standard error and an exit status.</summary>
 internal static class DeskProgram
 {
-    public static int Run(RootCommand root, string[] args)
+    public static int Run(string[] args)
     {
+        var root = new RootCommand("SpeedCommand at the desk: simulates flights. Advisory only; not a flight instrument.")
+        {
+            SimulateCommand.Create(),
+        };
         var parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)
         {

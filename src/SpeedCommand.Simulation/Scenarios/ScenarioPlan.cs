@@ -37,6 +37,7 @@ internal static class ScenarioPlan
             fields.Quantity("for", QuantityKind.Duration, double.NaN, 0),
             fields.Quantity("distance", QuantityKind.Length, double.NaN, 0),
             fields.Quantity("toHeight", QuantityKind.Length, double.NaN),
+            fields.Quantity("turn", QuantityKind.Angle, double.NaN, 0),
             fields.Quantity("airspeed", QuantityKind.Speed, double.NaN, 1),
             fields.Quantity("expectedClimb", QuantityKind.Speed, double.NaN, 0),
             fields.Quantity("bank", QuantityKind.Angle, 0),
@@ -44,7 +45,7 @@ internal static class ScenarioPlan
         fields.RejectUnknown();
         if (Ends.Count(fields.Has) != 1)
         {
-            fields.Problem("expected one of for, distance, toHeight");
+            fields.Problem("expected one of for, distance, toHeight, turn");
         }
 
         if (fields.Has("airspeed") == fields.Has("expectedClimb"))
@@ -60,7 +61,7 @@ internal static class ScenarioPlan
         return leg;
     }
 
-    private static readonly string[] Ends = ["for", "distance", "toHeight"];
+    private static readonly string[] Ends = ["for", "distance", "toHeight", "turn"];
 
     /// <summary>Steeper turns are aerobatics, where the small-angle polar no longer holds.</summary>
     private const double MaxBankRad = Math.PI / 3 + 1e-9;
