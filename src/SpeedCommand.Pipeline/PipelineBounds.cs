@@ -1,3 +1,5 @@
+using SpeedCommand.Flight.Atmosphere;
+
 namespace SpeedCommand.Pipeline;
 
 /// <summary>Every bound of the pipeline, with its reason.</summary>
@@ -27,8 +29,8 @@ public static class PipelineBounds
     /// <summary>Indicated airspeeds sent by a board, m/s; the same range as impact pressure.</summary>
     public const double MaxIndicatedMps = 111;
 
-    /// <summary>Sensed air temperatures, K: -90 °C to +60 °C, the records of weather and the coldest air of the stratosphere.</summary>
-    public const double MinTemperatureK = 183.15, MaxTemperatureK = 333.15;
+    /// <summary>Sensed air temperatures, K: -90 °C to +58 °C, the range the air's own formulas are stated for.</summary>
+    public const double MinTemperatureK = Air.LowestTemperatureK, MaxTemperatureK = Air.HighestTemperatureK;
 
     /// <summary>Load factors, g: beyond any glider's structure.</summary>
     public const double MaxLoadFactor = 10;

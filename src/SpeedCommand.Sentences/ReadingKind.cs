@@ -1,6 +1,8 @@
 namespace SpeedCommand.Sentences;
 
-/// <summary>What a sensor reading measures, with its unit. The ranges are those of the field's meaning; they are not checked here.</summary>
+/// <summary>
+/// What a sensor reading measures, with its unit. Any finite value can come out of a sentence: ranges are not checked here.
+/// </summary>
 public enum ReadingKind
 {
     /// <summary>Static pressure, pascal, absolute.</summary>
@@ -21,7 +23,7 @@ public enum ReadingKind
     /// <summary>Relative humidity over water as a fraction: 0 is dry, 1 is saturated.</summary>
     RelativeHumidity,
 
-    /// <summary>Load factor, in units of g: 1 in steady straight flight, positive when the pilot is pressed into the seat.</summary>
+    /// <summary>Load factor, g: 1 in steady straight flight, positive when the pilot is pressed into the seat.</summary>
     LoadFactor,
 
     /// <summary>Bank angle, radians, positive with the right wing down.</summary>

@@ -71,7 +71,7 @@ public static class SentenceReader
         return checksum == SentenceChecksum.Of(content) ? SentenceFault.None : SentenceFault.WrongChecksum;
     }
 
-    /// <summary>Two characters of talker and three letters of type; or P and more, which is proprietary and has no type.</summary>
+    /// <summary>Two characters of talker, three letters of type; or P and more, which is proprietary and has no type.</summary>
     private static bool TryDivide(ReadOnlySpan<byte> address, out int talkerLength)
     {
         talkerLength = address.Length;

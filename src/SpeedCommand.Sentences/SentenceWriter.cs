@@ -6,7 +6,7 @@ namespace SpeedCommand.Sentences;
 /// </summary>
 public static class SentenceWriter
 {
-    /// <summary>Most digits after the point that can be asked for: beyond them a double of a pressure has nothing more to say.</summary>
+    /// <summary>Most digits after the point: beyond them the double of a pressure has nothing more to say.</summary>
     public const int MaxDecimals = 9;
 
     /// <summary>Writes an XDR sentence with one or more measurements, pressures in pascal.</summary>
@@ -48,7 +48,9 @@ public static class SentenceWriter
 
     /// <summary>Writes any sentence from its characters between '$' and '*'.</summary>
     /// <param name="destination">82 bytes hold any sentence. What it holds after a failure is not defined.</param>
-    /// <param name="content">Address and fields, such as "IIVTG,084.4,T,,M,022.4,N,041.5,K,A": printable ASCII without '$' and '*'.</param>
+    /// <param name="content">
+    /// Address and fields, such as "IIVTG,084.4,T,,M,022.4,N,041.5,K,A": printable ASCII without '$' and '*'.
+    /// </param>
     /// <param name="written">Bytes written, line end included; 0 when it failed.</param>
     /// <returns>False when the sentence exceeds 82 characters or the destination.</returns>
     /// <exception cref="ArgumentException">The content has another character.</exception>

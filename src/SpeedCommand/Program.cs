@@ -1,1 +1,4 @@
-return 0;
+using System.CommandLine;
+using SpeedCommand.Commands;
+
+return await CommandTree.Build().InvokeAsync(args).ConfigureAwait(false);

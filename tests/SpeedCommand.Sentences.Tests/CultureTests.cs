@@ -23,7 +23,8 @@ public sealed class CultureTests : IDisposable
     public void Dispose() => CultureInfo.CurrentCulture = _before;
 
     [Fact]
-    public void CurrentCulture_IsIndeedACommaCulture() => Assert.Equal("\u22121,5", (-1.5).ToString("F1", CultureInfo.CurrentCulture));
+    public void CurrentCulture_IsIndeedACommaCulture() =>
+        Assert.Equal("\u22121,5", (-1.5).ToString("F1", CultureInfo.CurrentCulture));
 
     [Fact]
     public void TryWriteXdr_CommaCulture_WritesPointsAndComesBack()
@@ -34,7 +35,8 @@ public sealed class CultureTests : IDisposable
         var line = WireText.Text(buffer.AsSpan(0, written));
         Assert.Equal(WireText.Signed("YXXDR,P,-1612.4,P,IMPACT,C,-12.3,C,OAT") + "\r\n", line);
 
-        Assert.Equal(SentenceFault.None, SentenceReader.TryRead(buffer.AsSpan(0, written - 2), ChecksumRule.Required, out var sentence));
+        var sent = buffer.AsSpan(0, written - 2);
+        Assert.Equal(SentenceFault.None, SentenceReader.TryRead(sent, ChecksumRule.Required, out var sentence));
         var readings = new XdrReadings(sentence);
         Assert.True(readings.MoveNext());
         Assert.Equal(new Reading(ReadingKind.ImpactPressurePa, -1612.4), readings.Current);

@@ -35,7 +35,8 @@ public sealed class SentenceWriterTests
             var line = Write(new XdrMeasurement(kind, InSi(kind, sent), decimals));
             Assert.Equal(sent, decimal.Parse(line.Split(',')[2], CultureInfo.InvariantCulture));
 
-            Assert.Equal(SentenceFault.None, SentenceReader.TryRead(WireText.Bytes(line[..^2]), ChecksumRule.Required, out var sentence));
+            var bytes = WireText.Bytes(line[..^2]);
+            Assert.Equal(SentenceFault.None, SentenceReader.TryRead(bytes, ChecksumRule.Required, out var sentence));
             var readings = new XdrReadings(sentence);
             Assert.True(readings.MoveNext());
             Assert.Equal(kind, readings.Current.Kind);
@@ -61,7 +62,8 @@ public sealed class SentenceWriterTests
         const int Length = 30;
         for (var size = 0; size < 40; size++)
         {
-            var fits = SentenceWriter.TryWriteXdr(new byte[size], "YX"u8, [new(ReadingKind.StaticPressurePa, 95461.2, 1)], out var written);
+            var fits = SentenceWriter.TryWriteXdr(
+                new byte[size], "YX"u8, [new(ReadingKind.StaticPressurePa, 95461.2, 1)], out var written);
             Assert.Equal((size >= Length, size >= Length ? Length : 0), (fits, written));
         }
     }

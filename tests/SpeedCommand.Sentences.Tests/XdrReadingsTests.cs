@@ -54,11 +54,12 @@ public sealed class XdrReadingsTests
     public void Enumerate_BadAndUnknownBetweenGoodOnes_DoNotSpoilThem()
     {
         var (readings, unknown, bad) = Read("YXXDR,C,8.0,C,OAT,P,,P,IMPACT,P,1,B,BARO,H,40,P,RH,G,1");
-        Assert.Equal([ReadingKind.OutsideAirTemperatureK, ReadingKind.RelativeHumidity], readings.Select(reading => reading.Kind));
+        Assert.Equal([ReadingKind.OutsideAirTemperatureK, ReadingKind.RelativeHumidity],
+            readings.Select(reading => reading.Kind));
         Assert.Equal((1, 2), (unknown, bad));
     }
 
-    /// <summary>XDR lines of other makers' devices, the first from memory; ids that are not ours are none of our business.</summary>
+    /// <summary>XDR lines as other devices send them, the first from memory; foreign ids are none of our business.</summary>
     [Theory]
     [InlineData("$HCXDR,A,171,D,PITCH,A,-37,D,ROLL,G,367,,MAGX,G,2420,,MAGY,G,-8984,,MAGZ*41", 0, 5)]
     [InlineData("$WIXDR,C,-12.3,C,OAT,P,0.91234,B,BARO,H,45.2,P,RH*09", 2, 1)]
@@ -90,7 +91,8 @@ public sealed class XdrReadingsTests
         var content = "YXXDR" + string.Concat(Enumerable.Repeat(",G,7,,IAS,H,5,P,RH", 4));
         var (readings, _, _) = ReadLine("$" + content, ChecksumRule.Optional);
         Assert.Equal(8, readings.Count);
-        Assert.All(readings.Where(reading => reading.Kind == ReadingKind.RelativeHumidity), reading => Assert.Equal(0.05, reading.Value));
+        Assert.All(readings.Where(reading => reading.Kind == ReadingKind.RelativeHumidity),
+            reading => Assert.Equal(0.05, reading.Value));
     }
 
     private static (List<Reading> Readings, int Unknown, int Bad) Read(string content) =>

@@ -1,6 +1,5 @@
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
-using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Pipeline.Stages;
 
@@ -59,7 +58,7 @@ internal sealed class AirDataStage(FlightSettings settings)
         }
 
         var air = Air;
-        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed))
+        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed, out _))
         {
             _trueAirspeedMps = airspeed.Mps;
             return airspeed.Mps * airspeed.Mps / (2 * StandardAtmosphere.StandardGravityMps2);
@@ -74,7 +73,7 @@ internal sealed class AirDataStage(FlightSettings settings)
     public double SetIndicated(long timeUs, double indicatedMps)
     {
         var calibrated = settings.Glider.AirspeedCorrection.ToCalibrated(new IndicatedAirspeed(indicatedMps));
-        return SetImpact(timeUs, AirspeedConversion.ImpactPressurePa(calibrated));
+        return AirspeedConversion.TryImpactPressure(calibrated, out var impactPa) ? SetImpact(timeUs, impactPa) : double.NaN;
     }
 
     /// <summary>Indicated and true airspeed; false when either input is silent or the glider stands.</summary>
@@ -84,7 +83,7 @@ internal sealed class AirDataStage(FlightSettings settings)
         trueAirspeed = default;
         if (!IsAirspeedFresh(nowUs) || !IsStaticFresh(nowUs)
             || !AirspeedConversion.TryCalibrated(_impactPa.Value, out var calibrated)
-            || !AirspeedConversion.TryTrue(_impactPa.Value, Air, out trueAirspeed))
+            || !AirspeedConversion.TryTrue(_impactPa.Value, Air, out trueAirspeed, out _))
         {
             return false;
         }

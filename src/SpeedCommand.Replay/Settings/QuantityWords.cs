@@ -1,20 +1,25 @@
+using System.Globalization;
 using SpeedCommand.Flight.Quantities;
 
 namespace SpeedCommand.Replay.Settings;
 
-/// <summary>The SI unit of each kind of quantity, for messages about ranges.</summary>
+/// <summary>Shows SI values in the unit a person would write them in, for messages about ranges.</summary>
 internal static class QuantityWords
 {
-    public static string SiUnit(QuantityKind kind) => kind switch
+    public static string Show(double si, QuantityKind kind)
     {
-        QuantityKind.Length => "m",
-        QuantityKind.Speed => "m/s",
-        QuantityKind.Mass => "kg",
-        QuantityKind.Pressure => "Pa",
-        QuantityKind.Temperature or QuantityKind.TemperatureDifference => "K",
-        QuantityKind.Angle => "rad",
-        QuantityKind.Area => "m2",
-        QuantityKind.Duration => "s",
-        _ => "as a fraction",
-    };
+        var unit = kind switch
+        {
+            QuantityKind.Length => "m",
+            QuantityKind.Speed => "m/s",
+            QuantityKind.Mass => "kg",
+            QuantityKind.Pressure => "hPa",
+            QuantityKind.Temperature or QuantityKind.TemperatureDifference => "C",
+            QuantityKind.Angle => "deg",
+            QuantityKind.Area => "m2",
+            QuantityKind.Fraction => "%",
+            _ => "s",
+        };
+        return string.Create(CultureInfo.InvariantCulture, $"{Quantity.FromSi(si, kind, unit):G6} {unit}");
+    }
 }

@@ -98,8 +98,7 @@ public sealed class SettingsSource
 
         if (value < min || value > max)
         {
-            Report(setting, string.Create(CultureInfo.InvariantCulture,
-                $"expected {min:G6} to {max:G6} {QuantityWords.SiUnit(kind)}, found '{setting.Text}' ({value:G6} {QuantityWords.SiUnit(kind)})"));
+            Report(setting, $"expected {QuantityWords.Show(min, kind)} to {QuantityWords.Show(max, kind)}, found '{setting.Text}'");
             return standard;
         }
 

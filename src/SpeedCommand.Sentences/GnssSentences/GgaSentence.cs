@@ -12,7 +12,9 @@ public readonly record struct GgaSentence
     /// </summary>
     public bool HasFix { get; private init; }
 
-    /// <summary>UTC time of day, seconds, 0 to below 86401 (a leap second counts on); NaN when empty. Midnight is the caller's.</summary>
+    /// <summary>
+    /// UTC time of day, seconds, 0 to below 86401 (a leap second counts on); NaN when empty. Midnight is the caller's.
+    /// </summary>
     public double TimeOfDayS { get; private init; }
 
     /// <summary>Latitude, radians, positive north; NaN when not known.</summary>

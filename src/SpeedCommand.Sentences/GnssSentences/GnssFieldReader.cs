@@ -83,8 +83,8 @@ internal ref struct GnssFieldReader(SentenceFields fields)
     public double LongitudeRad() => CoordinateRad(degreeDigits: 3, limitDeg: 180, (byte)'E', (byte)'W');
 
     /// <summary>
-    /// The mode that NMEA 0183 added in version 2.3, absent before: autonomous, differential, float and fixed real-time kinematic,
-    /// precise are measured; estimated, manual, simulated, not valid and any letter to come are not.
+    /// The mode that NMEA 0183 added in version 2.3, absent before: autonomous, differential, real-time kinematic (float and
+    /// fixed) and precise are measured; estimated, manual, simulated, not valid and any letter to come are not.
     /// </summary>
     /// <returns>Whether the values are measured; true when the field is absent or empty.</returns>
     public bool IsMeasuredByOptionalMode() =>

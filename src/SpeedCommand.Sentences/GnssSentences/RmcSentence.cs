@@ -15,7 +15,9 @@ public readonly record struct RmcSentence
     /// </summary>
     public bool HasFix { get; private init; }
 
-    /// <summary>UTC time of day, seconds, 0 to below 86401 (a leap second counts on); NaN when empty. Midnight is the caller's.</summary>
+    /// <summary>
+    /// UTC time of day, seconds, 0 to below 86401 (a leap second counts on); NaN when empty. Midnight is the caller's.
+    /// </summary>
     public double TimeOfDayS { get; private init; }
 
     /// <summary>UTC date, 1980 to 2079; null when empty.</summary>

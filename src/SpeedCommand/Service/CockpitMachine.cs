@@ -1,4 +1,5 @@
 using System.Text;
+using SpeedCommand.Displaying;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Recording;
@@ -22,7 +23,7 @@ internal sealed class CockpitMachine : IDisposable
     {
         _clock = clock;
         _recorder = recorder;
-        _pipeline = new FlightPipeline(settings, new SinkFan([.. sinks]));
+        _pipeline = new FlightPipeline(settings, new PictureFan([.. sinks]));
     }
 
     /// <summary>Counts of each stream; exact once the readers have stopped.</summary>
@@ -70,15 +71,4 @@ internal sealed class CockpitMachine : IDisposable
     }
 
     public void Dispose() => _recorder?.Dispose();
-
-    private sealed class SinkFan(IPictureSink[] sinks) : IPictureSink
-    {
-        public void OnPicture(in CockpitPicture picture)
-        {
-            foreach (var sink in sinks)
-            {
-                sink.OnPicture(picture);
-            }
-        }
-    }
 }

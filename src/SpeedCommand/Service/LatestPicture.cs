@@ -8,17 +8,27 @@ internal sealed class LatestPicture : IPictureSink
     private readonly Lock _gate = new();
     private CockpitPicture _picture;
     private long _count;
+    private Faults _hostFaults;
 
     /// <summary>Every fault that any picture of this flight has named.</summary>
     public Faults FaultsSeen { get; private set; }
+
+    /// <summary>From now on every picture names the recorder's fault; the pipeline knows nothing of recorders.</summary>
+    public void RecorderStopped()
+    {
+        lock (_gate)
+        {
+            _hostFaults |= Faults.RecorderStopped;
+        }
+    }
 
     public void OnPicture(in CockpitPicture picture)
     {
         lock (_gate)
         {
-            _picture = picture;
+            _picture = picture with { Faults = picture.Faults | _hostFaults };
             _count++;
-            FaultsSeen |= picture.Faults;
+            FaultsSeen |= _picture.Faults;
         }
     }
 

@@ -1,11 +1,15 @@
 using Microsoft.Extensions.Hosting;
+using Microsoft.Extensions.Logging;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Replay.Recording;
 
 namespace SpeedCommand.Service;
 
 /// <summary>Lets data time pass when no line comes in, and carries the recording to the disk.</summary>
-internal sealed class PictureTicker(CockpitMachine machine, CockpitClock clock, TimeProvider time) : BackgroundService
+internal sealed class PictureTicker(CockpitMachine machine, LatestPicture latest, CockpitClock clock, TimeProvider time, ILogger<PictureTicker> log) : BackgroundService
 {
+    private bool _isRecorderFaultTold;
+
     /// <summary>Half a picture period: a due picture is late by no more than that.</summary>
     private TimeSpan Period => TimeSpan.FromMicroseconds(PipelineBounds.PicturePeriodUs / 2 / clock.Pace);
 
@@ -36,12 +40,26 @@ internal sealed class PictureTicker(CockpitMachine machine, CockpitClock clock, 
         {
             while (await timer.WaitForNextTickAsync(stop).ConfigureAwait(false))
             {
-                machine.Recorder?.Drain();
+                if (machine.Recorder is { } recorder)
+                {
+                    recorder.Drain();
+                    Watch(recorder);
+                }
             }
         }
         catch (OperationCanceledException)
         {
             // The host stops; Finish drains the rest.
+        }
+    }
+
+    private void Watch(FlightRecorder recorder)
+    {
+        if (recorder.StopReason is { } reason && !_isRecorderFaultTold)
+        {
+            _isRecorderFaultTold = true;
+            latest.RecorderStopped();
+            log.LogError("recording stopped: {Reason}", reason);
         }
     }
 }

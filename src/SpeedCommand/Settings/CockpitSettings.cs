@@ -1,4 +1,4 @@
-using SpeedCommand.Displays;
+using SpeedCommand.Displays.Units;
 using SpeedCommand.Pipeline;
 
 namespace SpeedCommand.Settings;

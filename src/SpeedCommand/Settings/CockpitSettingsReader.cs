@@ -1,4 +1,4 @@
-using SpeedCommand.Displays;
+using SpeedCommand.Displays.Units;
 using SpeedCommand.Replay.Settings;
 using SpeedCommand.Sentences;
 
@@ -9,6 +9,7 @@ internal static class CockpitSettingsReader
 {
     private static readonly string[] OnOff = ["on", "off"];
     private static readonly string[] ChecksumWords = ["required", "optional"];
+    private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
     private const int Megabyte = 1 << 20;
 
     /// <summary>Reads everything; null when a fault makes the service impossible.</summary>
@@ -69,9 +70,24 @@ internal static class CockpitSettingsReader
     private static DisplayUnits ReadUnits(SettingsSource source)
     {
         var units = DisplayUnits.Metric;
-        if (source.Find("units") is { } setting && !DisplayUnits.TryParse(setting.Text, out units, out var problem))
+        if (source.Find("units.set") is { } set)
         {
-            source.Report(setting, problem);
+            if (DisplayUnits.TryFromSet(set.Text, out var named, out var problem))
+            {
+                units = named;
+            }
+            else
+            {
+                source.Report(set, problem);
+            }
+        }
+
+        foreach (var quantity in UnitQuantities)
+        {
+            if (source.Find($"units.{quantity}") is { } unit && !units.TryWith(quantity, unit.Text, out units, out var problem))
+            {
+                source.Report(unit, problem);
+            }
         }
 
         return units;

@@ -6,6 +6,9 @@ internal static class StateFolder
     /// <summary>Recorded flights.</summary>
     public static string Flights => Path.Combine(Root, "flights");
 
+    /// <summary>The service's own log, when the terminal is taken by the panel.</summary>
+    public static string LogFile => Path.Combine(Root, "speedcommand.log");
+
     /// <summary>The settings file that is read when none is named; null when there is none.</summary>
     public static string? DefaultSettings => new[]
     {
