@@ -1,4 +1,3 @@
-using System.CommandLine;
 using SpeedCommand.Commands;
 
 return await CommandTree.Build().InvokeAsync(args).ConfigureAwait(false);

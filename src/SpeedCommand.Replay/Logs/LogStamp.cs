@@ -16,15 +16,15 @@ internal static class LogStamp
             return false;
         }
 
+        // The parsers would take a sign; digits alone they cannot refuse.
         var whole = text[..point];
         var fraction = text[(point + 1)..];
-        if (whole.IndexOfAnyExceptInRange((byte)'0', (byte)'9') >= 0 || fraction.IndexOfAnyExceptInRange((byte)'0', (byte)'9') >= 0)
+        if (whole.ContainsAnyExceptInRange((byte)'0', (byte)'9') || fraction.ContainsAnyExceptInRange((byte)'0', (byte)'9')
+            || !Utf8Parser.TryParse(whole, out long seconds, out _) || !Utf8Parser.TryParse(fraction, out long microseconds, out _))
         {
             return false;
         }
 
-        Utf8Parser.TryParse(whole, out long seconds, out _);
-        Utf8Parser.TryParse(fraction, out long microseconds, out _);
         timeUs = seconds * 1_000_000 + microseconds;
         return true;
     }

@@ -1,5 +1,4 @@
 using System.CommandLine;
-using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Replay.Conditions;
 
 namespace SpeedCommand.Commands;
