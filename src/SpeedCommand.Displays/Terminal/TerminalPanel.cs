@@ -95,6 +95,7 @@ public static class TerminalPanel
         LimitedBy.Stall => "not slower: stall margin",
         LimitedBy.RoughAir => "not faster: rough-air limit",
         LimitedBy.NeverExceed => "not faster: never-exceed",
+        LimitedBy.PolarRange => "the polar ends here",
         _ => string.Empty,
     };
 
