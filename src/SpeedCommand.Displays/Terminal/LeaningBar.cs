@@ -66,12 +66,12 @@ internal static class LeaningBar
         var words = Words(correction);
         var column = correction.Direction switch
         {
-            CorrectionDirection.SpeedUp => post + 2,
-            CorrectionDirection.SlowDown => post - 1 - words.Length - 1 - unit.Label.Length,
-            _ => post - words.Length / 2,
+            CorrectionDirection.SpeedUp => post + 1,
+            CorrectionDirection.SlowDown => post - 2 - words.Length - 1 - unit.Label.Length,
+            _ => post - 1 - words.Length / 2,
         };
         var isTurn = correction.Direction is CorrectionDirection.SpeedUp or CorrectionDirection.SlowDown;
-        grid.Put(row, column, isTurn ? $"{words} {unit.Label}" : words, ToneOf(correction));
+        grid.Put(row, column, isTurn ? $" {words} {unit.Label} " : $" {words} ", ToneOf(correction));
     }
 
     private static Tone ToneOf(SpeedCorrection correction) => correction.Direction switch

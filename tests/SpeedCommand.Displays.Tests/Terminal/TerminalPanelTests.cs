@@ -113,7 +113,7 @@ public class TerminalPanelTests
     [Fact]
     public void Render_EveryLimit_IsSaidBesideTheSpeedToFlyAndOnlyThere()
     {
-        var reasons = Enum.GetValues<LimitedBy>().Select(limit => Lines(Pictures.GlidingTooSlow with { LimitedBy = limit }, 60, 16)[4]);
+        var reasons = Enum.GetValues<LimitedBy>().Select(limit => Lines(Pictures.GlidingTooSlow with { LimitedBy = limit }, 60, 16)[5]);
 
         Assert.Equal(5, reasons.Select(line => line.Replace("█", "").Trim()).Distinct().Count());
         Assert.Equal(Lines(Pictures.ClimbingTooFast, 80, 24), Lines(Pictures.ClimbingTooFast with { LimitedBy = LimitedBy.Stall }, 80, 24));
@@ -132,6 +132,26 @@ public class TerminalPanelTests
         // ECMA-48 8.3.117: 30-37 and 40-47 are colours; 0, 1, 2 and 7 are normal, bold, faint and reverse.
         Assert.Contains(colour.Renditions, rendition => rendition.Contains("41"));
         Assert.All(monochrome.Renditions, rendition => Assert.True(rendition is "0" or "0;1" or "0;2" or "0;7"));
+    }
+
+    [Fact]
+    public void Render_AnyFullSize_KeepsTheDigitsClearOfTheBandAndOfTheReasons()
+    {
+        for (var width = PanelStyle.FullWidth; width <= 140; width += 4)
+        {
+            for (var height = PanelStyle.FullHeight; height <= 55; height++)
+            {
+                var lines = Lines(Pictures.GlidingTooSlow, width, height);
+                Assert.Equal("", lines[1]);
+                // Every part is there once, whole, in the order of a glance.
+                int[] rows = [Row(lines, "km/h to hold"), Row(lines, "flying 108"), Row(lines, "//"), Row(lines, "speed up 12 km/h"),
+                    Row(lines, "> speed to fly"), Row(lines, "distance in hand"), Row(lines, "no faults")];
+                Assert.Equal(rows.Order().Distinct(), rows);
+                Assert.True(rows[0] > 1 && rows[^1] == height - 1);
+            }
+        }
+
+        static int Row(string[] lines, string words) => Array.FindIndex(lines, line => line.Contains(words));
     }
 
     [Fact]
