@@ -1,1 +1,1 @@
-return 0;
+return SpeedCommand.Desk.Commands.DeskProgram.Run(args);

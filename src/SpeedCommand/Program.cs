@@ -1,1 +1,3 @@
-return 0;
+using SpeedCommand.Commands;
+
+return await CommandTree.Build().InvokeAsync(args).ConfigureAwait(false);

@@ -1,0 +1,39 @@
+using System.CommandLine;
+
+namespace SpeedCommand.Desk.Commands;
+
+/// <summary>Runs the command line and turns every foreseeable failure into one line on standard error and an exit status.</summary>
+internal static class DeskProgram
+{
+    public static int Run(string[] args)
+    {
+        var root = new RootCommand("SpeedCommand at the desk: simulates flights. Advisory only; not a flight instrument.")
+        {
+            SimulateCommand.Create(),
+        };
+        var parsed = root.Parse(args);
+        if (parsed.Errors.Count > 0)
+        {
+            return Fail(ExitStatus.Usage, parsed.Errors[0].Message);
+        }
+
+        try
+        {
+            return parsed.Invoke(new InvocationConfiguration { EnableDefaultExceptionHandler = false });
+        }
+        catch (DeskFailure failure)
+        {
+            return Fail(failure.Status, failure.Message);
+        }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            return Fail(ExitStatus.InputOutput, fault.Message);
+        }
+    }
+
+    private static int Fail(ExitStatus status, string message)
+    {
+        Console.Error.WriteLine($"speedcommand-desk: {message.ReplaceLineEndings(" ")}");
+        return (int)status;
+    }
+}

@@ -1,0 +1,11 @@
+namespace SpeedCommand.Desk.Commands;
+
+/// <summary>Exit statuses, after the sysexits convention.</summary>
+internal enum ExitStatus
+{
+    Done = 0,
+    Usage = 2,
+    BadData = 65,
+    NoInput = 66,
+    InputOutput = 74,
+}

@@ -1,0 +1,37 @@
+using SpeedCommand.Flight.Gliders;
+using SpeedCommand.Simulation.Scenarios;
+using SpeedCommand.Simulation.Sensors;
+
+namespace SpeedCommand.Desk.Commands;
+
+/// <summary>Finds scenarios and gliders as the user names them: a file, or something that comes with the program.</summary>
+internal static class ScenarioInput
+{
+    /// <summary>The gliders' folder beside the program.</summary>
+    private static string GliderFolder => Path.Combine(AppContext.BaseDirectory, "gliders");
+
+    public static (Scenario Scenario, Glider Glider) Read(string nameOrPath, SensorGrade? grade)
+    {
+        var isFile = File.Exists(nameOrPath);
+        var bytes = isFile
+            ? File.ReadAllBytes(nameOrPath)
+            : BundledScenarios.Find(nameOrPath) ?? throw new DeskFailure(ExitStatus.NoInput,
+                $"SCENARIO: expected a file or one of {string.Join(", ", BundledScenarios.Names)}, found '{nameOrPath}'");
+        var result = ScenarioFile.Read(bytes, isFile ? nameOrPath : $"{nameOrPath}.json", grade);
+        if (result.Scenario is not { } scenario)
+        {
+            throw new DeskFailure(ExitStatus.BadData, result.Problems[0].ToString());
+        }
+
+        return (scenario, ReadGlider(scenario.GliderFile, isFile ? Path.GetDirectoryName(nameOrPath) : null));
+    }
+
+    /// <summary>A glider file beside what names it, or one that comes with the program.</summary>
+    public static Glider ReadGlider(string file, string? folder)
+    {
+        var path = new[] { Path.Combine(folder ?? "", file), Path.Combine(GliderFolder, file) }.FirstOrDefault(File.Exists)
+            ?? throw new DeskFailure(ExitStatus.NoInput, $"glider: expected a file here or in {GliderFolder}, found no '{file}'");
+        var result = GliderFile.Read(File.ReadAllBytes(path), file);
+        return result.Glider ?? throw new DeskFailure(ExitStatus.BadData, result.Problems.First(problem => !problem.IsWarning).ToString());
+    }
+}

@@ -1,0 +1,132 @@
+using SpeedCommand.Estimation.Energy;
+using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Pipeline.Stages;
+using SpeedCommand.Sentences;
+
+namespace SpeedCommand.Pipeline;
+
+/// <summary>
+/// The deterministic machine between stamped lines and pictures, and the one place where its stages are wired. It reads no
+/// clock, never waits, does not allocate once running, and nothing that comes from outside makes it throw. The same calls
+/// give the same pictures; the service and the replay make the same calls. Not thread-safe: one caller at a time.
+/// </summary>
+public sealed class FlightPipeline
+{
+    private readonly IPictureSink _sink;
+    private readonly AirDataStage _airData;
+    private readonly LoadStage _load = new();
+    private readonly HydrostaticHeight _height = new();
+    private readonly IEnergyEstimator _energy = new EnergyHeightFilter();
+    private readonly EventFaults _events = new();
+    private readonly PictureStage _pictures;
+    private readonly List<StreamHealth> _streams = [];
+    private readonly List<ChecksumRule> _rules = [];
+    private long _nextPictureUs = PipelineBounds.PicturePeriodUs;
+
+    /// <summary>Makes a pipeline for one flight.</summary>
+    /// <param name="settings">The glider and the pilot's choices.</param>
+    /// <param name="sink">Takes the pictures.</param>
+    public FlightPipeline(FlightSettings settings, IPictureSink sink)
+    {
+        ArgumentNullException.ThrowIfNull(settings);
+        _sink = sink;
+        _airData = new AirDataStage(settings);
+        _pictures = new PictureStage(settings, _airData, _load, _energy, _events);
+    }
+
+    /// <summary>The streams added so far, with their counts.</summary>
+    public IReadOnlyList<StreamHealth> Streams => _streams;
+
+    /// <summary>The newest stamp seen, microseconds.</summary>
+    public long TimeUs { get; private set; }
+
+    /// <summary>Adds a stream that lines may come from.</summary>
+    /// <param name="name">Its name in settings and logs.</param>
+    /// <param name="rule">Whether its sentences may lack a checksum.</param>
+    /// <returns>The stream's number for <see cref="Accept"/>.</returns>
+    /// <exception cref="InvalidOperationException">There are <see cref="PipelineBounds.MaxStreams"/> already.</exception>
+    public int AddStream(string name, ChecksumRule rule)
+    {
+        if (_streams.Count == PipelineBounds.MaxStreams)
+        {
+            throw new InvalidOperationException($"expected at most {PipelineBounds.MaxStreams} streams, found one more: '{name}'");
+        }
+
+        _streams.Add(new StreamHealth(name));
+        _rules.Add(rule);
+        return _streams.Count - 1;
+    }
+
+    /// <summary>Takes one line. Pictures due before it are made first.</summary>
+    /// <param name="timeUs">Its stamp, microseconds since the start; an earlier one than the newest counts as the newest.</param>
+    /// <param name="stream">The stream's number from <see cref="AddStream"/>.</param>
+    /// <param name="line">The line without its end; any bytes.</param>
+    public void Accept(long timeUs, int stream, ReadOnlySpan<byte> line)
+    {
+        AdvanceTo(timeUs);
+        var health = _streams[stream];
+        health.Lines++;
+        if (SentenceReader.TryRead(line, _rules[stream], out var sentence) != SentenceFault.None)
+        {
+            health.BadLines++;
+            _events.Note(Faults.BadLines, TimeUs);
+            return;
+        }
+
+        var readings = new XdrReadings(sentence);
+        health.Readings += readings.Count;
+        health.BadReadings += readings.BadCount;
+        foreach (var reading in readings)
+        {
+            if (ReadingRanges.IsPossible(reading, out var fault))
+            {
+                Take(reading);
+            }
+            else
+            {
+                health.BadReadings++;
+                _events.Note(fault, TimeUs);
+            }
+        }
+    }
+
+    /// <summary>Lets data time pass without a line; every picture due by then is made.</summary>
+    /// <param name="timeUs">Microseconds since the start; an earlier one than the newest changes nothing.</param>
+    public void AdvanceTo(long timeUs)
+    {
+        TimeUs = Math.Max(TimeUs, timeUs);
+        while (_nextPictureUs <= TimeUs)
+        {
+            _sink.OnPicture(_pictures.MakeAt(_nextPictureUs));
+            _nextPictureUs += PipelineBounds.PicturePeriodUs;
+        }
+    }
+
+    private void Take(in Reading reading)
+    {
+        switch (reading.Kind)
+        {
+            case ReadingKind.StaticPressurePa when _airData.TrySetStatic(TimeUs, reading.Value):
+                _energy.AddHeight(TimeUs, _height.MoveTo(_airData.Air));
+                break;
+            case ReadingKind.ImpactPressurePa:
+                _energy.AddKineticHeight(TimeUs, _airData.SetImpact(TimeUs, reading.Value));
+                break;
+            case ReadingKind.IndicatedAirspeedMps:
+                _energy.AddKineticHeight(TimeUs, _airData.SetIndicated(TimeUs, reading.Value));
+                break;
+            case ReadingKind.OutsideAirTemperatureK:
+                _airData.SetTemperature(TimeUs, reading.Value);
+                break;
+            case ReadingKind.RelativeHumidity:
+                _airData.SetHumidity(TimeUs, reading.Value);
+                break;
+            case ReadingKind.LoadFactor:
+                _load.SetLoadFactor(TimeUs, reading.Value);
+                break;
+            case ReadingKind.BankRad:
+                _load.SetBank(TimeUs, reading.Value);
+                break;
+        }
+    }
+}

@@ -1,0 +1,29 @@
+using SpeedCommand.Flight.Gliders;
+
+namespace SpeedCommand.Pipeline;
+
+/// <summary>What the pipeline must know of the glider and the pilot's choices. SI units.</summary>
+/// <param name="Glider">The glider flown.</param>
+public sealed record FlightSettings(Glider Glider)
+{
+    /// <summary>All-up mass with ballast, kg; default the polar's reference mass.</summary>
+    public double MassKg { get; init; } = Glider.ReferenceMassKg;
+
+    /// <summary>Extra sink of a dirty wing as a fraction of the clean sink, 0 or more; default 0.</summary>
+    public double BugsFraction { get; init; }
+
+    /// <summary>The climb expected in the next thermal (MacCready setting), m/s, 0 or more; default 0.</summary>
+    public double ExpectedClimbMps { get; init; }
+
+    /// <summary>No target lies closer than this fraction above the stall; default 0.05.</summary>
+    public double StallMargin { get; init; } = 0.05;
+
+    /// <summary>Without a thermometer, the air's temperature above the standard atmosphere's, K; default 0.</summary>
+    public double TemperatureOffsetK { get; init; }
+
+    /// <summary>Share of the full kinetic heating the thermometer senses, 0 to 1; default 0, a shaded probe out of the stream.</summary>
+    public double ThermometerRecovery { get; init; }
+
+    /// <summary>Pressure altitude that endurance and range are counted down to, m; default 300.</summary>
+    public double SafetyHeightM { get; init; } = 300;
+}

@@ -1,0 +1,49 @@
+using System.IO.Compression;
+
+namespace SpeedCommand.Replay.Logs;
+
+/// <summary>Opens flight logs on disk, plain (.log) or packed (.log.gz).</summary>
+public static class FlightLogFile
+{
+    /// <summary>Opens a log for reading; a name that ends in .gz is unpacked on the way.</summary>
+    /// <param name="path">Path of the log.</param>
+    /// <returns>The reader, standing before the first record.</returns>
+    /// <exception cref="FormatException">It is not a flight log of a version this program reads.</exception>
+    /// <exception cref="IOException">The file cannot be opened or read.</exception>
+    /// <exception cref="UnauthorizedAccessException">The file may not be read.</exception>
+    public static FlightLogReader Open(string path)
+    {
+        Stream stream = new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite, 1);
+        if (path.EndsWith(".gz", StringComparison.OrdinalIgnoreCase))
+        {
+            stream = new GZipStream(stream, CompressionMode.Decompress);
+        }
+
+        try
+        {
+            return FlightLogReader.Open(stream);
+        }
+        catch
+        {
+            stream.Dispose();
+            throw;
+        }
+    }
+
+    /// <summary>Creates a log; a name that ends in .gz is packed on the way.</summary>
+    /// <param name="path">Path of the log; an older file of that name is replaced.</param>
+    /// <param name="header">The header.</param>
+    /// <returns>The writer, standing after the header.</returns>
+    /// <exception cref="IOException">The file cannot be created or written.</exception>
+    /// <exception cref="UnauthorizedAccessException">The file may not be written.</exception>
+    public static FlightLogWriter Create(string path, FlightLogHeader header)
+    {
+        Stream stream = new FileStream(path, FileMode.Create, FileAccess.Write, FileShare.Read, 64 * 1024);
+        if (path.EndsWith(".gz", StringComparison.OrdinalIgnoreCase))
+        {
+            stream = new GZipStream(stream, CompressionLevel.Optimal);
+        }
+
+        return new FlightLogWriter(stream, header);
+    }
+}

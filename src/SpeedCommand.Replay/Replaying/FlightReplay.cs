@@ -1,0 +1,88 @@
+using System.Text;
+using SpeedCommand.Pipeline;
+using SpeedCommand.Replay.Logs;
+using SpeedCommand.Sentences;
+
+namespace SpeedCommand.Replay.Replaying;
+
+/// <summary>
+/// Feeds a flight log to a pipeline exactly as the service fed it when the log was recorded. Time comes from the log alone:
+/// who wants a pace waits before each record.
+/// </summary>
+public sealed class FlightReplay
+{
+    private readonly FlightLogReader _log;
+    private readonly FlightPipeline _pipeline;
+    private readonly Func<string, ChecksumRule> _rules;
+    private readonly List<byte[]> _names = [];
+
+    /// <summary>Puts a log in front of a pipeline.</summary>
+    /// <param name="log">The log, standing before its first record.</param>
+    /// <param name="pipeline">A new pipeline.</param>
+    /// <param name="rules">The checksum rule of each stream by name.</param>
+    public FlightReplay(FlightLogReader log, FlightPipeline pipeline, Func<string, ChecksumRule> rules)
+    {
+        _log = log;
+        _pipeline = pipeline;
+        _rules = rules;
+    }
+
+    /// <summary>Lines fed so far.</summary>
+    public long LineCount { get; private set; }
+
+    /// <summary>Replays one record.</summary>
+    /// <param name="before">Called with the record's stamp before the pipeline sees it, to keep a pace; null for none.</param>
+    /// <returns>False at the end of the log.</returns>
+    /// <exception cref="IOException">The log cannot be read, or the pipeline's sink cannot be written.</exception>
+    public bool Step(Action<long>? before = null)
+    {
+        if (!_log.TryRead(out var record))
+        {
+            return false;
+        }
+
+        before?.Invoke(record.TimeUs);
+        switch (record.Kind)
+        {
+            case LogRecordKind.Line when StreamOf(record.StreamName) is var stream and >= 0:
+                LineCount++;
+                _pipeline.Accept(record.TimeUs, stream, record.Content);
+                break;
+            case LogRecordKind.Line or LogRecordKind.End:
+                _pipeline.AdvanceTo(record.TimeUs);
+                break;
+        }
+
+        return true;
+    }
+
+    /// <summary>Replays the rest of the log as fast as it goes.</summary>
+    /// <exception cref="IOException">The log cannot be read, or the pipeline's sink cannot be written.</exception>
+    public void RunToEnd()
+    {
+        while (Step())
+        {
+        }
+    }
+
+    /// <summary>A handful of names: looking along the list beats hashing. A name too many is left out, as it was live.</summary>
+    private int StreamOf(ReadOnlySpan<byte> name)
+    {
+        for (var index = 0; index < _names.Count; index++)
+        {
+            if (name.SequenceEqual(_names[index]))
+            {
+                return index;
+            }
+        }
+
+        if (_names.Count == PipelineBounds.MaxStreams)
+        {
+            return -1;
+        }
+
+        var text = Encoding.ASCII.GetString(name);
+        _names.Add(name.ToArray());
+        return _pipeline.AddStream(text, _rules(text));
+    }
+}

@@ -1,0 +1,52 @@
+using SpeedCommand.Flight.Gliders;
+using SpeedCommand.Flight.LocatedJson;
+
+namespace SpeedCommand.Replay.Settings;
+
+/// <summary>Finds and reads glider files: by path, beside the settings, or among those that lie beside the program.</summary>
+public static class GliderFiles
+{
+    /// <summary>Reads a glider file.</summary>
+    /// <param name="name">Path or bare file name.</param>
+    /// <param name="besideFile">A file whose folder is searched next; empty for none.</param>
+    /// <returns>The glider, or null with at least one problem.</returns>
+    public static GliderFileResult Read(string name, string besideFile)
+    {
+        foreach (var path in Candidates(name, besideFile))
+        {
+            try
+            {
+                if (File.Exists(path))
+                {
+                    return GliderFile.Read(File.ReadAllBytes(path), path);
+                }
+            }
+            catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+            {
+                return new GliderFileResult(null, [new JsonProblem(path, 0, "", fault.Message)]);
+            }
+        }
+
+        return new GliderFileResult(null, [new JsonProblem(name, 0, "",
+            $"expected a glider file, found none by that path, beside the settings or among {string.Join(", ", Bundled())}")]);
+    }
+
+    /// <summary>The glider files that lie beside the program.</summary>
+    /// <returns>File names in order.</returns>
+    public static IEnumerable<string> Bundled() => Directory.Exists(BundledFolder)
+        ? Directory.EnumerateFiles(BundledFolder, "*.json").Select(path => Path.GetFileName(path)).Order(StringComparer.Ordinal)
+        : [];
+
+    private static string BundledFolder => Path.Combine(AppContext.BaseDirectory, "gliders");
+
+    private static IEnumerable<string> Candidates(string name, string besideFile)
+    {
+        yield return name;
+        if (besideFile.Length > 0 && Path.GetDirectoryName(Path.GetFullPath(besideFile)) is { } folder)
+        {
+            yield return Path.Combine(folder, name);
+        }
+
+        yield return Path.Combine(BundledFolder, name);
+    }
+}

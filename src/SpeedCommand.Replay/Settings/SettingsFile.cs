@@ -1,0 +1,35 @@
+using SpeedCommand.Flight.LocatedJson;
+
+namespace SpeedCommand.Replay.Settings;
+
+/// <summary>Opens the settings file and lays environment and command line over it.</summary>
+public static class SettingsFile
+{
+    /// <summary>Reads a settings file.</summary>
+    /// <param name="path">The file; null for none.</param>
+    /// <param name="environment">All environment variables.</param>
+    /// <param name="commandLine">Path and value of each setting given on the command line.</param>
+    /// <param name="source">The settings, when the file could be read.</param>
+    /// <param name="problem">Why the file could not be read.</param>
+    /// <returns>Whether the file could be read.</returns>
+    public static bool TryOpen(string? path, IReadOnlyDictionary<string, string> environment,
+        IReadOnlyDictionary<string, string> commandLine, out SettingsSource source, out JsonProblem problem)
+    {
+        problem = default;
+        JsonPlace? top = null;
+        if (path is not null)
+        {
+            try
+            {
+                JsonPlaces.TryParse(File.ReadAllBytes(path), path, out top, out problem);
+            }
+            catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+            {
+                problem = new JsonProblem(path, 0, "", $"expected a settings file, found: {fault.Message}");
+            }
+        }
+
+        source = new SettingsSource(top, path ?? "", environment, commandLine);
+        return path is null || top is not null;
+    }
+}

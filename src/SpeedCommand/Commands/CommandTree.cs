@@ -1,0 +1,33 @@
+using System.CommandLine;
+
+namespace SpeedCommand.Commands;
+
+/// <summary>The commands of the cockpit program, one file each.</summary>
+internal static class CommandTree
+{
+    public static RootCommand Build() => new("Speeds to fly for glider pilots, live. Advisory only: the flight manual and the placards prevail.")
+    {
+        RunCommand.Create(),
+        CheckCommand.Create(),
+        ReplayCommand.Create(),
+        TargetsCommand.Create(),
+    };
+
+    /// <summary>Runs a command line; a fault in it is told in one line, without a page of help.</summary>
+    public static async Task<int> InvokeAsync(this RootCommand root, string[] args)
+    {
+        var parsed = root.Parse(args);
+        if (parsed.Errors.Count > 0)
+        {
+            foreach (var error in parsed.Errors)
+            {
+                await Console.Error.WriteLineAsync(error.Message).ConfigureAwait(false);
+            }
+
+            return ExitStatus.Usage;
+        }
+
+        // The host, not the command line library, answers signals: the flight's log must be closed first.
+        return await parsed.InvokeAsync(new InvocationConfiguration { ProcessTerminationTimeout = null }).ConfigureAwait(false);
+    }
+}

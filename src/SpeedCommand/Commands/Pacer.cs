@@ -1,0 +1,38 @@
+using System.Globalization;
+
+namespace SpeedCommand.Commands;
+
+/// <summary>Makes a replay wait so that it runs a given number of times faster than life.</summary>
+internal sealed class Pacer(TimeProvider time, double pace)
+{
+    private readonly long _start = time.GetTimestamp();
+
+    public bool IsPaced => double.IsFinite(pace);
+
+    /// <summary>"max" is infinity; nothing said is the standard.</summary>
+    public static bool TryParse(string? text, bool isShown, out double pace)
+    {
+        pace = isShown ? 1 : double.PositiveInfinity;
+        if (text is null)
+        {
+            return true;
+        }
+
+        if (text == "max")
+        {
+            pace = double.PositiveInfinity;
+            return true;
+        }
+
+        return double.TryParse(text, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out pace) && pace is >= 0.1 and <= 1000;
+    }
+
+    public void WaitUntil(long timeUs)
+    {
+        var ahead = TimeSpan.FromMicroseconds(timeUs / pace) - time.GetElapsedTime(_start);
+        if (ahead > TimeSpan.Zero)
+        {
+            Thread.Sleep(ahead);
+        }
+    }
+}

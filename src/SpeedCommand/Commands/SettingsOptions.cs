@@ -1,0 +1,64 @@
+using System.Collections;
+using System.CommandLine;
+using SpeedCommand.Replay.Settings;
+using SpeedCommand.Settings;
+
+namespace SpeedCommand.Commands;
+
+/// <summary>The options of every command that reads settings, and how settings are opened and their faults told.</summary>
+internal static class SettingsOptions
+{
+    public static Option<FileInfo?> File() => new("--settings")
+    {
+        Description = "The settings file; without it ~/.config/speedcommand/settings.json, then /etc/speedcommand/settings.json.",
+        HelpName = "FILE",
+    };
+
+    public static Option<string[]> With() => new("--with")
+    {
+        Description = "One setting, beating file and environment, for example --with \"expectedClimb=2 m/s\". May be given again.",
+        HelpName = "NAME=VALUE",
+    };
+
+    /// <summary>Opens the settings; false after telling what is wrong.</summary>
+    public static bool TryOpen(FileInfo? file, IReadOnlyList<string>? with, out SettingsSource source, out int exitStatus)
+    {
+        exitStatus = ExitStatus.BadSettings;
+        var commandLine = new Dictionary<string, string>(StringComparer.Ordinal);
+        foreach (var pair in with ?? [])
+        {
+            var equals = pair.IndexOf('=');
+            if (equals <= 0)
+            {
+                Console.Error.WriteLine($"--with: expected NAME=VALUE, found '{pair}'");
+                exitStatus = ExitStatus.Usage;
+                source = new SettingsSource(null, "", new Dictionary<string, string>(), commandLine);
+                return false;
+            }
+
+            commandLine[pair[..equals]] = pair[(equals + 1)..];
+        }
+
+        var path = file?.ToString() ?? StateFolder.DefaultSettings;
+        if (SettingsFile.TryOpen(path, EnvironmentVariables(), commandLine, out source, out var problem))
+        {
+            return true;
+        }
+
+        Console.Error.WriteLine(problem);
+        exitStatus = System.IO.File.Exists(path) ? ExitStatus.BadSettings : ExitStatus.NoInput;
+        return false;
+    }
+
+    /// <summary>Tells every fault, one a line.</summary>
+    public static void Tell(SettingsSource source)
+    {
+        foreach (var problem in source.Problems)
+        {
+            Console.Error.WriteLine(problem);
+        }
+    }
+
+    private static Dictionary<string, string> EnvironmentVariables() => Environment.GetEnvironmentVariables().Cast<DictionaryEntry>()
+        .ToDictionary(pair => (string)pair.Key, pair => (string?)pair.Value ?? "", StringComparer.Ordinal);
+}

@@ -1,0 +1,72 @@
+using System.Text.Json;
+using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.Targets;
+using SpeedCommand.Pipeline.Picture;
+
+namespace SpeedCommand.Commands;
+
+/// <summary>The answer of the targets command as one JSON object: unrounded SI numbers, null for what is not known.</summary>
+internal static class TargetsJson
+{
+    public static void Write(TargetsAnswer answer, Stream output)
+    {
+        using (var json = new Utf8JsonWriter(output, new JsonWriterOptions { Indented = true }))
+        {
+            json.WriteStartObject();
+            WriteAir(json, answer.Conditions.Air);
+            WriteSpeed(json, "minSink", answer.MinSink, static (_, _) => { }, answer);
+            WriteSpeed(json, "bestGlide", answer.BestGlide.Speed,
+                static (json, answer) => Number(json, "glideRatio", answer.BestGlide.GlideRatio), answer);
+            WriteSpeed(json, "speedToFly", answer.SpeedToFly.Speed, static (json, answer) =>
+            {
+                Number(json, "averageSpeedMps", answer.SpeedToFly.AverageSpeedMps);
+                json.WriteString("limitedBy", LimitWords.Of(answer.SpeedToFly.LimitedBy));
+            }, answer);
+            json.WriteEndObject();
+        }
+
+        output.WriteByte((byte)'\n');
+    }
+
+    private static void WriteAir(Utf8JsonWriter json, in Air air)
+    {
+        json.WriteStartObject("air");
+        Number(json, "pressureAltitudeM", air.PressureAltitudeM);
+        Number(json, "pressurePa", air.PressurePa);
+        Number(json, "temperatureC", air.TemperatureK - 273.15);
+        json.WriteString("temperatureSource", air.TemperatureSource == TemperatureSource.Measured ? "measured" : "standard");
+        Number(json, "densityKgPerM3", air.DensityKgPerM3);
+        Number(json, "densityAltitudeM", air.DensityAltitudeM);
+        json.WriteEndObject();
+    }
+
+    private static void WriteSpeed(Utf8JsonWriter json, string name, in TargetSpeed speed, Action<Utf8JsonWriter, TargetsAnswer> rest, TargetsAnswer answer)
+    {
+        if (!speed.IsKnown)
+        {
+            json.WriteNull(name);
+            return;
+        }
+
+        json.WriteStartObject(name);
+        Number(json, "liftCoefficient", speed.LiftCoefficient);
+        Number(json, "trueAirspeedMps", speed.TrueAirspeedMps);
+        Number(json, "equivalentAirspeedMps", speed.EquivalentAirspeedMps);
+        Number(json, "indicatedAirspeedMps", speed.IndicatedAirspeedMps);
+        Number(json, "sinkMps", speed.SinkMps);
+        rest(json, answer);
+        json.WriteEndObject();
+    }
+
+    private static void Number(Utf8JsonWriter json, string name, double value)
+    {
+        if (double.IsFinite(value))
+        {
+            json.WriteNumber(name, value);
+        }
+        else
+        {
+            json.WriteNull(name);
+        }
+    }
+}

@@ -1,0 +1,68 @@
+using System.Globalization;
+using System.Text;
+using SpeedCommand.Displays.Units;
+using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.Targets;
+
+namespace SpeedCommand.Commands;
+
+/// <summary>The answer of the targets command for a person: an aligned table in the units of the pilot's choice.</summary>
+internal static class TargetsTable
+{
+    public static string Write(TargetsAnswer answer, DisplayUnits units)
+    {
+        var conditions = answer.Conditions;
+        var air = conditions.Air;
+        var text = new StringBuilder();
+        text.Append(CultureInfo.InvariantCulture,
+            $"{conditions.Glider.Name}, {conditions.Loading.MassKg:F0} kg, bank {conditions.BankRad * 180 / Math.PI:F0} deg, bugs {conditions.Loading.BugsFraction:P0}\n");
+        text.Append(CultureInfo.InvariantCulture,
+            $"pressure altitude {Show(air.PressureAltitudeM, units.Height, 0)}, density altitude {Show(air.DensityAltitudeM, units.Height, 0)}, ");
+        text.Append(CultureInfo.InvariantCulture,
+            $"{Show(air.TemperatureK, units.Temperature, 1)} ({(air.TemperatureSource == TemperatureSource.Measured ? "measured" : "standard")})\n");
+        text.Append(CultureInfo.InvariantCulture,
+            $"expected climb {Show(conditions.ClimbMps, units.Vertical, 1)}, air {Show(conditions.AirMps, units.Vertical, 1)}, headwind {Show(conditions.HeadwindMps, units.Speed, 0)}\n\n");
+        text.Append(CultureInfo.InvariantCulture,
+            $"{"",-14}{"indicated",10}{"true",10}{"sink",10}\n{"",-14}{units.Speed.Symbol,10}{units.Speed.Symbol,10}{units.Vertical.Symbol,10}\n");
+        AppendRow(text, "minimum sink", answer.MinSink, units, "");
+        AppendRow(text, "best glide", answer.BestGlide.Speed, units,
+            string.Create(CultureInfo.InvariantCulture, $"{answer.BestGlide.GlideRatio:F1} : 1{(conditions.HeadwindMps == 0 ? "" : " over the ground")}"));
+        AppendRow(text, "speed to fly", answer.SpeedToFly.Speed, units, SpeedToFlyNote(answer, units));
+        text.Append("\nAdvisory only: the flight manual and the placards prevail.\n");
+        return text.ToString();
+    }
+
+    private static string SpeedToFlyNote(TargetsAnswer answer, DisplayUnits units)
+    {
+        if (answer.Conditions.Glider.Limits is null)
+        {
+            return "not shown: the glider file has no limits";
+        }
+
+        var limit = answer.SpeedToFly.LimitedBy switch
+        {
+            LimitedBy.Stall => ", held at the stall margin",
+            LimitedBy.RoughAir => ", held at the rough-air limit",
+            LimitedBy.NeverExceed => ", held at the never-exceed limit",
+            LimitedBy.PolarRange => ", held at the end of the polar",
+            _ => "",
+        };
+        return double.IsFinite(answer.SpeedToFly.AverageSpeedMps)
+            ? $"average {Show(answer.SpeedToFly.AverageSpeedMps, units.Speed, 0)}{limit}"
+            : limit.TrimStart(',', ' ');
+    }
+
+    private static void AppendRow(StringBuilder text, string name, in TargetSpeed speed, DisplayUnits units, string note)
+    {
+        text.Append(speed.IsKnown
+            ? string.Create(CultureInfo.InvariantCulture,
+                $"{name,-14}{Value(speed.IndicatedAirspeedMps, units.Speed),10:F0}{Value(speed.TrueAirspeedMps, units.Speed),10:F0}{Value(speed.SinkMps, units.Vertical),10:F2}   {note}")
+            : $"{name,-14}{"--",10}{"--",10}{"--",10}   {note}");
+        text.Append('\n');
+    }
+
+    private static double Value(double si, DisplayUnit unit) => unit.Convert(si);
+
+    private static string Show(double si, DisplayUnit unit, int decimals) =>
+        Value(si, unit).ToString("F" + decimals, CultureInfo.InvariantCulture) + " " + unit.Symbol;
+}

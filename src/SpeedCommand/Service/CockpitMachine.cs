@@ -1,0 +1,74 @@
+using System.Text;
+using SpeedCommand.Displaying;
+using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Replay.Recording;
+using SpeedCommand.Sentences;
+
+namespace SpeedCommand.Service;
+
+/// <summary>
+/// The pipeline as the service runs it: one lock, so that the order in which lines are stamped, recorded and taken is one
+/// and the same. That order is what makes a replay give the same bytes.
+/// </summary>
+internal sealed class CockpitMachine : IDisposable
+{
+    private readonly Lock _gate = new();
+    private readonly CockpitClock _clock;
+    private readonly FlightRecorder? _recorder;
+    private readonly FlightPipeline _pipeline;
+    private readonly List<byte[]> _streamNames = [];
+
+    public CockpitMachine(FlightSettings settings, CockpitClock clock, FlightRecorder? recorder, IEnumerable<IPictureSink> sinks)
+    {
+        _clock = clock;
+        _recorder = recorder;
+        _pipeline = new FlightPipeline(settings, new PictureFan([.. sinks]));
+    }
+
+    /// <summary>Counts of each stream; exact once the readers have stopped.</summary>
+    public IReadOnlyList<StreamHealth> Streams => _pipeline.Streams;
+
+    public FlightRecorder? Recorder => _recorder;
+
+    public int AddStream(string name, ChecksumRule rule)
+    {
+        lock (_gate)
+        {
+            _streamNames.Add(Encoding.ASCII.GetBytes(name));
+            return _pipeline.AddStream(name, rule);
+        }
+    }
+
+    /// <summary>Takes a line that arrived at the given time. A picture made meanwhile moves its stamp up, never back.</summary>
+    public void Accept(long arrivalUs, int stream, ReadOnlySpan<byte> line)
+    {
+        lock (_gate)
+        {
+            var stampUs = Math.Max(arrivalUs, _pipeline.TimeUs);
+            _recorder?.Record(stampUs, _streamNames[stream], line);
+            _pipeline.Accept(stampUs, stream, line);
+        }
+    }
+
+    /// <summary>Makes the pictures that are due, even when every port is silent.</summary>
+    public void Tick()
+    {
+        lock (_gate)
+        {
+            _pipeline.AdvanceTo(_clock.NowUs);
+        }
+    }
+
+    /// <summary>Ends the flight in the log; call when the readers have stopped.</summary>
+    public void Finish()
+    {
+        lock (_gate)
+        {
+            _recorder?.RecordEnd(_pipeline.TimeUs);
+            _recorder?.Drain();
+        }
+    }
+
+    public void Dispose() => _recorder?.Dispose();
+}

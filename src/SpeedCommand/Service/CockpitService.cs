@@ -1,0 +1,128 @@
+using Microsoft.Extensions.DependencyInjection;
+using Microsoft.Extensions.Hosting;
+using Microsoft.Extensions.Logging;
+using NLog.Extensions.Logging;
+using SpeedCommand.Bench;
+using SpeedCommand.Displaying;
+using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Ports;
+using SpeedCommand.Replay.Logs;
+using SpeedCommand.Replay.Recording;
+using SpeedCommand.Settings;
+
+namespace SpeedCommand.Service;
+
+/// <summary>Puts the service together, runs it, and ends the flight in good order.</summary>
+internal static class CockpitService
+{
+    /// <summary>Runs until a signal, or the end of the bench flight.</summary>
+    /// <returns>The exit status.</returns>
+    public static async Task<int> RunAsync(CockpitSettings settings, BenchFlight? flight, double pace, params IPictureSink[] extraSinks)
+    {
+        using var host = Build(settings, flight, pace, extraSinks);
+        await host.StartAsync().ConfigureAwait(false);
+        await host.WaitForShutdownAsync().ConfigureAwait(false);
+        host.Services.GetRequiredService<CockpitMachine>().Finish();
+        var exitStatus = ExitStatusOf(host);
+        if (flight is not null)
+        {
+            exitStatus = BenchSummary.Write(host.Services, flight, exitStatus);
+        }
+
+        return exitStatus;
+    }
+
+    internal static IHost Build(CockpitSettings settings, BenchFlight? flight, double pace, params IPictureSink[] extraSinks)
+    {
+        var builder = new HostApplicationBuilder(new HostApplicationBuilderSettings
+        {
+            DisableDefaults = true,
+            ContentRootPath = AppContext.BaseDirectory,
+        });
+        var isPanelShown = settings.IsTerminalOn && !Console.IsOutputRedirected;
+        builder.Logging.AddNLog(ServiceLog.Configure(settings, isPanelShown));
+        builder.Services.AddSystemd();
+        builder.Services.Configure<ConsoleLifetimeOptions>(options => options.SuppressStatusMessages = true);
+        builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = TimeSpan.FromSeconds(5));
+        var clock = new CockpitClock(TimeProvider.System, pace);
+        var latest = new LatestPicture();
+        builder.Services
+            .AddSingleton(TimeProvider.System)
+            .AddSingleton(settings)
+            .AddSingleton(clock)
+            .AddSingleton(latest)
+            .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, clock, services), [latest, .. extraSinks]));
+        AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight));
+        builder.Services.AddHostedService<PictureTicker>();
+        AddDisplays(builder.Services, settings, isPanelShown);
+        if (flight is not null)
+        {
+            builder.Services.AddSingleton(flight).AddSingleton<BenchPlayer>()
+                .AddSingleton<IHostedService>(services => services.GetRequiredService<BenchPlayer>());
+        }
+
+        return builder.Build();
+    }
+
+    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight) => flight.Lines.Select(line =>
+        new PortSettings(line.Key, line.Value.DevicePath, 115_200, Sentences.ChecksumRule.Required));
+
+    private static void AddPorts(IServiceCollection services, IEnumerable<PortSettings> ports)
+    {
+        var states = new List<PortState>();
+        services.AddSingleton<IReadOnlyList<PortState>>(states);
+        foreach (var port in ports)
+        {
+            var state = new PortState(port.Name);
+            states.Add(state);
+            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<SerialPortReader>(provider, port, state));
+        }
+    }
+
+    private static void AddDisplays(IServiceCollection services, CockpitSettings settings, bool isPanelShown)
+    {
+        if (settings.IsTerminalOn)
+        {
+            services.AddSingleton<IHostedService>(provider => isPanelShown
+                ? ActivatorUtilities.CreateInstance<TerminalPanelService>(provider)
+                : ActivatorUtilities.CreateInstance<StatusLineService>(provider));
+        }
+
+        if (settings.SerialText is { } serialText)
+        {
+            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<SerialTextService>(provider, serialText));
+        }
+    }
+
+    /// <summary>A recorder that cannot start is a fault to show, not a reason to stay on the ground.</summary>
+    private static FlightRecorder? OpenRecorder(CockpitSettings settings, CockpitClock clock, IServiceProvider services)
+    {
+        if (settings.Recorder is not { } recorder)
+        {
+            return null;
+        }
+
+        var log = services.GetRequiredService<ILoggerFactory>().CreateLogger<FlightRecorder>();
+        var stamp = clock.StartUtc.ToString("yyyy-MM-dd'T'HHmmss'Z'", System.Globalization.CultureInfo.InvariantCulture);
+        var path = Path.Combine(recorder.Folder, $"{stamp}-{Environment.ProcessId}.log");
+        try
+        {
+            Directory.CreateDirectory(recorder.Folder);
+            var opened = new FlightRecorder(path, new FlightLogHeader(clock.StartUtc, settings.GliderName, []), recorder.MaxBytes);
+            log.LogInformation("recording to {Path}", path);
+            return opened;
+        }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            log.LogError("the flight is not recorded: {Cause}", fault.Message);
+            services.GetRequiredService<LatestPicture>().RecorderStopped();
+            return null;
+        }
+    }
+
+    /// <summary>A hosted service that broke is our own bug: the service manager must see it and start us again.</summary>
+    private static int ExitStatusOf(IHost host) =>
+        host.Services.GetServices<IHostedService>().OfType<BackgroundService>().Any(service => service.ExecuteTask?.IsFaulted == true)
+            ? ExitStatus.InternalFault
+            : ExitStatus.Done;
+}

@@ -1,0 +1,33 @@
+using SpeedCommand.Displays.Units;
+using SpeedCommand.Pipeline;
+
+namespace SpeedCommand.Settings;
+
+/// <summary>Everything the service must know.</summary>
+/// <param name="Flight">The glider and the pilot's choices.</param>
+/// <param name="GliderName">File name of the glider, for the log's header.</param>
+/// <param name="Ports">The sensors' ports.</param>
+/// <param name="Units">What the pilot reads numbers in.</param>
+/// <param name="IsTerminalOn">Whether the terminal shows the panel.</param>
+/// <param name="SerialText">Port of a 20 x 4 character display; null for none.</param>
+/// <param name="Recorder">Where flights are recorded; null for not at all.</param>
+/// <param name="LogFile">Where the service's own log goes; empty for standard error.</param>
+internal sealed record CockpitSettings(
+    FlightSettings Flight,
+    string GliderName,
+    IReadOnlyList<PortSettings> Ports,
+    DisplayUnits Units,
+    bool IsTerminalOn,
+    SerialTextSettings? SerialText,
+    RecorderSettings? Recorder,
+    string LogFile);
+
+/// <summary>Port of a character display.</summary>
+/// <param name="Device">Path of the device.</param>
+/// <param name="Baud">Bits a second.</param>
+internal sealed record SerialTextSettings(string Device, int Baud);
+
+/// <summary>Where flights are recorded.</summary>
+/// <param name="Folder">The folder; made when missing.</param>
+/// <param name="MaxBytes">Size at which the recording of one flight stops.</param>
+internal sealed record RecorderSettings(string Folder, long MaxBytes);

@@ -1,0 +1,110 @@
+using SpeedCommand.Displays.Units;
+using SpeedCommand.Replay.Settings;
+using SpeedCommand.Sentences;
+
+namespace SpeedCommand.Settings;
+
+/// <summary>Reads the service's settings; every fault goes to the source, so that all are reported at once.</summary>
+internal static class CockpitSettingsReader
+{
+    private static readonly string[] OnOff = ["on", "off"];
+    private static readonly string[] ChecksumWords = ["required", "optional"];
+    private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
+    private const int Megabyte = 1 << 20;
+
+    /// <summary>Reads everything; null when a fault makes the service impossible.</summary>
+    public static CockpitSettings? Read(SettingsSource source, string? gliderOption, string? gliderFallback, bool needsPorts)
+    {
+        var flight = FlightSettingsReader.Read(source, gliderOption, gliderFallback);
+        var ports = ReadPorts(source, needsPorts);
+        var units = ReadUnits(source);
+        var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
+        var serialText = ReadSerialText(source);
+        var recorder = ReadRecorder(source);
+        var logFile = source.Find("logFile")?.Text ?? "";
+        source.ReportUnknown();
+        if (flight is null || source.HasErrors)
+        {
+            return null;
+        }
+
+        var gliderName = Path.GetFileName(gliderOption ?? source.Find("glider")?.Text ?? gliderFallback ?? "");
+        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile);
+    }
+
+    private static List<PortSettings> ReadPorts(SettingsSource source, bool isNeeded)
+    {
+        var ports = new List<PortSettings>();
+        foreach (var name in source.NamedElements("ports"))
+        {
+            var path = $"ports.{name}";
+            var device = source.Find($"{path}.device");
+            var baud = source.Integer($"{path}.baud", 115_200, 1_200, 4_000_000);
+            var rule = source.Word($"{path}.checksum", ChecksumWords, "required") == "required" ? ChecksumRule.Required : ChecksumRule.Optional;
+            if (device is null || device.Text.Length == 0)
+            {
+                source.Report(new SettingText("", source.File, 0, $"{path}.device"), "expected the path of a serial device, found none");
+            }
+            else if (!IsStreamName(name))
+            {
+                source.Report(device, $"expected a port name of 1 to 32 letters, digits, '-' or '_', found '{name}'");
+            }
+            else
+            {
+                ports.Add(new PortSettings(name, device.Text, baud, rule));
+            }
+        }
+
+        if (isNeeded && ports.Count == 0 && !source.HasErrors)
+        {
+            source.Report(new SettingText("", source.File.Length > 0 ? source.File : "settings", 0, "ports"),
+                "expected at least one port, found none; docs/settings.md shows how to name one");
+        }
+
+        return ports;
+    }
+
+    private static bool IsStreamName(string name) => name.Length is > 0 and <= 32 && name != "truth"
+        && name.All(character => char.IsAsciiLetterOrDigit(character) || character is '-' or '_');
+
+    private static DisplayUnits ReadUnits(SettingsSource source)
+    {
+        var units = DisplayUnits.Metric;
+        if (source.Find("units.set") is { } set)
+        {
+            if (DisplayUnits.TryFromSet(set.Text, out var named, out var problem))
+            {
+                units = named;
+            }
+            else
+            {
+                source.Report(set, problem);
+            }
+        }
+
+        foreach (var quantity in UnitQuantities)
+        {
+            if (source.Find($"units.{quantity}") is { } unit && !units.TryWith(quantity, unit.Text, out units, out var problem))
+            {
+                source.Report(unit, problem);
+            }
+        }
+
+        return units;
+    }
+
+    private static SerialTextSettings? ReadSerialText(SettingsSource source)
+    {
+        var device = source.Find("displays.serialText.device");
+        var baud = source.Integer("displays.serialText.baud", 9_600, 1_200, 4_000_000);
+        return device is null ? null : new SerialTextSettings(device.Text, baud);
+    }
+
+    private static RecorderSettings? ReadRecorder(SettingsSource source)
+    {
+        var isOn = source.Word("recorder.active", OnOff, "on") == "on";
+        var folder = source.Find("recorder.folder")?.Text ?? StateFolder.Flights;
+        var maxMegabytes = source.Integer("recorder.maxMegabytes", 64, 1, 4_096);
+        return isOn ? new RecorderSettings(folder, (long)maxMegabytes * Megabyte) : null;
+    }
+}

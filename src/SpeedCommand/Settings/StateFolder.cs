@@ -1,0 +1,28 @@
+namespace SpeedCommand.Settings;
+
+/// <summary>Where the program keeps its own files, after the XDG base directory specification.</summary>
+internal static class StateFolder
+{
+    /// <summary>Recorded flights.</summary>
+    public static string Flights => Path.Combine(Root, "flights");
+
+    /// <summary>The service's own log, when the terminal is taken by the panel.</summary>
+    public static string LogFile => Path.Combine(Root, "speedcommand.log");
+
+    /// <summary>The settings file that is read when none is named; null when there is none.</summary>
+    public static string? DefaultSettings => new[]
+    {
+        Path.Combine(BaseFolder("XDG_CONFIG_HOME", ".config"), "speedcommand", "settings.json"),
+        "/etc/speedcommand/settings.json",
+    }.FirstOrDefault(File.Exists);
+
+    private static string Root => Path.Combine(BaseFolder("XDG_STATE_HOME", ".local/state"), "speedcommand");
+
+    private static string BaseFolder(string variable, string standard)
+    {
+        var set = Environment.GetEnvironmentVariable(variable);
+        return Path.IsPathRooted(set)
+            ? set
+            : Path.Combine(Environment.GetFolderPath(Environment.SpecialFolder.UserProfile, Environment.SpecialFolderOption.DoNotVerify), standard);
+    }
+}
