@@ -146,7 +146,11 @@ internal static class PolarPlaces
         }
 
         var polar = new SinkTablePolar(points, referenceMassKg, wingAreaM2);
-        if (!polar.IsConvex)
+        if (polar.SinkMps(polar.MinSinkAirspeedMps(polar.MinAirspeedMps, polar.MaxAirspeedMps)) <= 0)
+        {
+            places.Fault(list, "expected a glider's sinks: a smooth curve through these points goes down to 0 between them");
+        }
+        else if (!polar.IsConvex)
         {
             places.Warn(list, "the points do not lie on a convex curve within their rounding: check them against the handbook");
         }

@@ -130,6 +130,15 @@ public sealed class GliderFileTests
     }
 
     [Fact]
+    public void Read_TableWhoseCurveWouldClimb_Fault()
+    {
+        var table = Table.Replace("0.68", "9.00", StringComparison.Ordinal).Replace("0.80", "0.06", StringComparison.Ordinal)
+            .Replace("1.90", "0.06", StringComparison.Ordinal);
+        var fault = Assert.Single(Read(table).Problems);
+        Assert.Equal((false, "sinkTable"), (fault.IsWarning, fault.Key));
+    }
+
+    [Fact]
     public void Read_NoLimitsOrUnknownKey_Warns()
     {
         var result = Read("""
