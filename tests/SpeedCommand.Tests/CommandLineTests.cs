@@ -92,7 +92,8 @@ public sealed partial class CommandLineTests : IDisposable
     {
         var glider = Save("bad-glider.json", """
             { "name": "Bad", "wingArea": "11.2 kg", "referenceMass": "340 kg",
-              "dragPolar": { "cd0": 0.0115, "k1": -0.002, "k2": 0.0215 } }
+              "dragPolar": { "cd0": 0.0115, "k1": -0.002, "k2": 0.0215 },
+              "limits": { "stall": "66 km/h", "neverExceed": [ { "upTo": "6000 m", "airspeed": "250 km/h" } ] } }
             """);
         var settings = Save("settings.json", $$"""
             { "glider": "{{Path.GetFileName(glider)}}",
