@@ -31,7 +31,8 @@ public static class AirspeedConversion
     /// <param name="impactPressurePa">Impact pressure, Pa.</param>
     /// <returns>Whether the input is in range.</returns>
     public static bool TryImpactPressure(CalibratedAirspeed airspeed, out double impactPressurePa) =>
-        TryImpactPressure(airspeed.Mps / StandardAtmosphere.SeaLevelSpeedOfSoundMps, StandardAtmosphere.SeaLevelPressurePa, out impactPressurePa);
+        TryImpactPressure(
+            airspeed.Mps / StandardAtmosphere.SeaLevelSpeedOfSoundMps, StandardAtmosphere.SeaLevelPressurePa, out impactPressurePa);
 
     /// <summary>True airspeed and Mach number from impact pressure: V = a M(qc/p).</summary>
     /// <param name="impactPressurePa">Impact pressure, Pa.</param>

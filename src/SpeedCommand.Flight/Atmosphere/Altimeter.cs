@@ -14,7 +14,8 @@ public static class Altimeter
     public static bool TryAltitude(double pressurePa, double settingPa, out double altitudeM)
     {
         altitudeM = 0;
-        if (!StandardAtmosphere.TryAltitudeOfPressure(pressurePa, out var at) || !StandardAtmosphere.TryAltitudeOfPressure(settingPa, out var zero))
+        if (!StandardAtmosphere.TryAltitudeOfPressure(pressurePa, out var at)
+            || !StandardAtmosphere.TryAltitudeOfPressure(settingPa, out var zero))
         {
             return false;
         }
@@ -43,7 +44,8 @@ public static class Altimeter
     public static bool TryPressure(double elevationM, double settingPa, out double pressurePa)
     {
         pressurePa = 0;
-        if (!TryPressureAltitude(elevationM, settingPa, out var pressureAltitudeM) || !StandardAtmosphere.TryAt(pressureAltitudeM, out var state))
+        if (!TryPressureAltitude(elevationM, settingPa, out var pressureAltitudeM)
+            || !StandardAtmosphere.TryAt(pressureAltitudeM, out var state))
         {
             return false;
         }

@@ -47,7 +47,8 @@ internal static class MoistAirDensity
         var x = relativeHumidity * enhancement * saturationPa / pressurePa;
         var perKelvin = pressurePa / temperatureK;
         var compressibility = 1
-            - perKelvin * (1.58123e-6 + (-2.9331e-8 + 1.1043e-10 * t) * t + (5.707e-6 - 2.051e-8 * t) * x + (1.9898e-4 - 2.376e-6 * t) * x * x)
+            - perKelvin * (1.58123e-6 + (-2.9331e-8 + 1.1043e-10 * t) * t
+                + (5.707e-6 - 2.051e-8 * t) * x + (1.9898e-4 - 2.376e-6 * t) * x * x)
             + perKelvin * perKelvin * (1.83e-11 - 0.765e-8 * x * x);
         return perKelvin * MolarMassDryAir / (compressibility * MolarGasConstant) * (1 - x * (1 - MolarMassWater / MolarMassDryAir));
     }

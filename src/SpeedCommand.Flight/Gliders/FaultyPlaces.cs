@@ -18,6 +18,9 @@ internal sealed class FaultyPlaces(string file)
 
     public void Fault(JsonPlace place, string message) => _problems.Add(new(file, place.Line, place.Path, message));
 
+    /// <summary>A fault whose message ends with the value that was found.</summary>
+    public void FaultFound(JsonPlace place, string expectation) => Fault(place, $"expected {expectation}, found {Describe(place)}");
+
     public void Warn(JsonPlace place, string message) => _problems.Add(new(file, place.Line, place.Path, message, IsWarning: true));
 
     public void Add(JsonProblem problem) => _problems.Add(problem);
@@ -50,7 +53,7 @@ internal sealed class FaultyPlaces(string file)
 
         if (place.Kind != kind)
         {
-            Fault(place, $"expected {expectation}, found {Describe(place)}");
+            FaultFound(place, expectation);
             return null;
         }
 
@@ -94,7 +97,7 @@ internal sealed class FaultyPlaces(string file)
         var isNumber = double.TryParse(place.Text, NumberStyles.Float, CultureInfo.InvariantCulture, out var value);
         if (!isNumber || value < least || value > most)
         {
-            Fault(place, $"expected {expectation}, found {place.Text}");
+            FaultFound(place, expectation);
             return double.NaN;
         }
 
@@ -105,7 +108,7 @@ internal sealed class FaultyPlaces(string file)
     {
         JsonPlaceKind.Object => "an object",
         JsonPlaceKind.Array => "a list",
-        JsonPlaceKind.Text => $"the text '{place.Text}'",
+        JsonPlaceKind.Text => $"'{place.Text}'",
         _ => place.Text,
     };
 }

@@ -29,4 +29,35 @@ public sealed class Glider
 
     /// <summary>Wing area, m²; NaN when not given.</summary>
     public double WingAreaM2 => Polar.WingAreaM2;
+
+    /// <summary>The flying mass with water on board, checked against the masses the file gives.</summary>
+    /// <param name="dryMassKg">Glider, crew and everything but water, kg.</param>
+    /// <param name="waterKg">Water ballast, kg, 0 or more.</param>
+    /// <param name="massKg">Flying mass, kg; 0 when not possible.</param>
+    /// <param name="reason">Why it is not possible.</param>
+    /// <returns>Whether it is possible.</returns>
+    public bool TryFlyingMass(double dryMassKg, double waterKg, out double massKg, out MassInvalid reason)
+    {
+        var total = dryMassKg + waterKg;
+        reason = !(dryMassKg > 0 && waterKg >= 0 && double.IsFinite(total)) ? MassInvalid.NotAMass
+            : dryMassKg <= EmptyMassKg ? MassInvalid.BelowEmpty
+            : total > MaxMassKg ? MassInvalid.AboveMax
+            : MassInvalid.None;
+        massKg = reason == MassInvalid.None ? total : 0;
+        return reason == MassInvalid.None;
+    }
+
+    /// <summary>The same glider with drag added by bugs, rain or a dirty finish.</summary>
+    /// <param name="zeroLiftDragIncrement">Addition to the zero-lift drag coefficient, 0 or more. Needs a wing area.</param>
+    /// <returns>The glider with the new polar.</returns>
+    /// <exception cref="InvalidOperationException">The glider has no wing area.</exception>
+    public Glider WithAddedDrag(double zeroLiftDragIncrement) => new()
+    {
+        Name = Name,
+        Polar = Polar.WithAddedDrag(zeroLiftDragIncrement),
+        EmptyMassKg = EmptyMassKg,
+        MaxMassKg = MaxMassKg,
+        Limits = Limits,
+        AirspeedCorrection = AirspeedCorrection,
+    };
 }

@@ -35,10 +35,10 @@ public static class GliderFile
     private static Glider? ReadGlider(FaultyPlaces places, JsonPlace top)
     {
         places.WarnOfUnknownKeys(
-            top, "name", "wingArea", "referenceMass", "emptyMass", "maxMass", "dragPolar", "sinkTable", "quadraticPolar", "limits",
-            "airspeedCorrection");
+            top, "name", "wingArea", "referenceMass", "emptyMass", "maxMass", "dragPolar", "sinkTable", "quadraticPolar", "flaps",
+            "limits", "airspeedCorrection");
         var name = places.Find(top, "name", JsonPlaceKind.Text, isRequired: true, "the glider's name");
-        var wingAreaM2 = places.Quantity(top, "wingArea", QuantityKind.Area, 1, 100, isRequired: top.Find("dragPolar") is not null);
+        var wingAreaM2 = places.Quantity(top, "wingArea", QuantityKind.Area, 1, 100, isRequired: NeedsWingArea(top));
         var referenceMassKg = places.Quantity(top, "referenceMass", QuantityKind.Mass, LightestKg, HeaviestKg);
         var emptyMassKg = places.Quantity(top, "emptyMass", QuantityKind.Mass, LightestKg, HeaviestKg, isRequired: false);
         var maxMassKg = places.Quantity(top, "maxMass", QuantityKind.Mass, LightestKg, HeaviestKg, isRequired: false);
@@ -59,16 +59,19 @@ public static class GliderFile
             };
     }
 
+    private static bool NeedsWingArea(JsonPlace top) =>
+        top.Find("dragPolar") is not null || top.Find("flaps")?.Elements.Any(flap => flap.Find("dragPolar") is not null) == true;
+
     private static void CheckMasses(FaultyPlaces places, JsonPlace top, double referenceMassKg, double emptyMassKg, double maxMassKg)
     {
         if (referenceMassKg > maxMassKg)
         {
-            places.Fault(top.Find("referenceMass")!, $"expected at most maxMass ({top.Find("maxMass")!.Text}), found '{top.Find("referenceMass")!.Text}'");
+            places.FaultFound(top.Find("referenceMass")!, "at most maxMass");
         }
 
         if (emptyMassKg >= referenceMassKg)
         {
-            places.Fault(top.Find("emptyMass")!, $"expected less than referenceMass ({top.Find("referenceMass")!.Text}), found '{top.Find("emptyMass")!.Text}'");
+            places.FaultFound(top.Find("emptyMass")!, "less than referenceMass");
         }
     }
 

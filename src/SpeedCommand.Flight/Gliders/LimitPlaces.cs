@@ -30,7 +30,7 @@ internal static class LimitPlaces
         var roughAirMps = places.Quantity(limits, "roughAir", QuantityKind.Speed, SlowestMps, FastestMps, isRequired: false);
         if (roughAirMps <= stallMps)
         {
-            places.Fault(limits.Find("roughAir")!, $"expected above the stall speed, found '{limits.Find("roughAir")!.Text}'");
+            places.FaultFound(limits.Find("roughAir")!, "above the stall speed");
         }
 
         var steps = ReadSteps(places, limits, stallMps);

@@ -7,16 +7,20 @@ namespace SpeedCommand.Flight.Gliders;
 /// <summary>Reads the polar of a glider file: exactly one of the kinds.</summary>
 internal static class PolarPlaces
 {
-    private static readonly string[] Kinds = ["dragPolar", "sinkTable", "quadraticPolar"];
+    private static readonly string[] SingleKinds = ["dragPolar", "sinkTable", "quadraticPolar"];
+    private static readonly string[] Kinds = [.. SingleKinds, "flaps"];
 
     /// <summary>The polar; null when there is a fault, in it or in the mass or wing area it rests on.</summary>
-    public static IPolar? Read(FaultyPlaces places, JsonPlace parent, double wingAreaM2, double referenceMassKg)
+    public static IPolar? Read(FaultyPlaces places, JsonPlace top, double wingAreaM2, double referenceMassKg) =>
+        Read(places, top, Kinds, wingAreaM2, referenceMassKg);
+
+    private static IPolar? Read(FaultyPlaces places, JsonPlace parent, string[] kinds, double wingAreaM2, double referenceMassKg)
     {
-        var given = Kinds.Where(kind => parent.Find(kind) is not null).ToList();
+        var given = kinds.Where(kind => parent.Find(kind) is not null).ToList();
         if (given.Count != 1)
         {
             var found = given.Count == 0 ? "none" : string.Join(" and ", given);
-            places.Fault(parent, $"expected one of {string.Join(", ", Kinds)}, found {found}");
+            places.Fault(parent, $"expected one of {string.Join(", ", kinds)}, found {found}");
             return null;
         }
 
@@ -24,8 +28,39 @@ internal static class PolarPlaces
         {
             "dragPolar" => ReadDragPolar(places, parent, wingAreaM2, referenceMassKg),
             "sinkTable" => ReadSinkTable(places, parent, wingAreaM2, referenceMassKg),
+            "flaps" => ReadFlaps(places, parent, wingAreaM2, referenceMassKg),
             _ => ReadQuadratic(places, parent, wingAreaM2, referenceMassKg),
         };
+    }
+
+    private static FlappedPolar? ReadFlaps(FaultyPlaces places, JsonPlace top, double wingAreaM2, double referenceMassKg)
+    {
+        var list = places.Find(top, "flaps", JsonPlaceKind.Array, isRequired: true, "a list of { \"setting\", and a polar }");
+        if (list is { Elements.Count: 0 })
+        {
+            places.Fault(list, "expected at least one setting, found none");
+        }
+
+        var settings = new List<FlapSetting>();
+        foreach (var element in list?.Elements ?? [])
+        {
+            places.WarnOfUnknownKeys(element, ["setting", .. SingleKinds]);
+            var name = places.Find(element, "setting", JsonPlaceKind.Text, isRequired: true, "what stands beside the flap lever");
+            var polar = Read(places, element, SingleKinds, wingAreaM2, referenceMassKg);
+            if (name is not null && polar is not null)
+            {
+                if (settings.Count > 0 && (polar.MinAirspeedMps > settings.Max(s => s.Polar.MaxAirspeedMps)
+                    || polar.MaxAirspeedMps < settings.Min(s => s.Polar.MinAirspeedMps)))
+                {
+                    places.Fault(element, "expected a speed range that meets that of the settings before");
+                    continue;
+                }
+
+                settings.Add(new(name.Text, polar));
+            }
+        }
+
+        return places.HasFault ? null : new FlappedPolar(settings);
     }
 
     private static DragPolar? ReadDragPolar(FaultyPlaces places, JsonPlace parent, double wingAreaM2, double referenceMassKg)
@@ -43,7 +78,7 @@ internal static class PolarPlaces
         var clMax = places.Number(polar, "clMax", 0.2, 5, isRequired: false);
         if (k1 <= -2 * Math.Sqrt(cd0 * k2))
         {
-            places.Fault(polar.Find("k1")!, "expected a k1 that keeps the drag positive at every lift (above -2 √(cd0 k2))");
+            places.FaultFound(polar.Find("k1")!, "a k1 that keeps the drag positive at every lift, above -2 √(cd0 k2)");
         }
 
         return places.HasFault ? null : new DragPolar(wingAreaM2, referenceMassKg, cd0, k1, k2, clMax);
@@ -66,7 +101,7 @@ internal static class PolarPlaces
         var max = places.Quantity(polar, "maxAirspeed", QuantityKind.Speed, LimitPlaces.SlowestMps, LimitPlaces.FastestMps);
         if (max <= min)
         {
-            places.Fault(polar.Find("maxAirspeed")!, "expected above minAirspeed");
+            places.FaultFound(polar.Find("maxAirspeed")!, "above minAirspeed");
         }
 
         var slowest = Math.Max(min, Math.Min(max, -b / (2 * a)));
@@ -94,7 +129,7 @@ internal static class PolarPlaces
             var sinkMps = places.Quantity(element, "sink", QuantityKind.Speed, 0.05, 50);
             if (points.Count > 0 && airspeedMps <= points[^1].AirspeedMps)
             {
-                places.Fault(element.Find("airspeed")!, $"expected an airspeed above that of the entry before, found '{element.Find("airspeed")!.Text}'");
+                places.FaultFound(element.Find("airspeed")!, "an airspeed above that of the entry before");
             }
 
             points.Add(new(airspeedMps, sinkMps, double.IsNaN(sinkMps) ? 0 : RoundingMps(element.Find("sink")!.Text)));

@@ -81,6 +81,24 @@ internal static class ConvexSink
             return;
         }
 
+        var weights = ThirdDifferenceWeights(points, rows);
+        var isMoving = true;
+        for (var sweep = 0; sweep < Sweeps && isMoving; sweep++)
+        {
+            isMoving = false;
+            for (var i = 0; i < points.Length; i++)
+            {
+                var (gradient, steepness) = GradientAt(weights, sinks, i);
+                var wanted = sinks[i] - gradient / steepness;
+                var allowed = Math.Clamp(wanted, points[i].SinkMps - points[i].RoundingMps, points[i].SinkMps + points[i].RoundingMps);
+                isMoving |= allowed != sinks[i];
+                sinks[i] = allowed;
+            }
+        }
+    }
+
+    private static double[,] ThirdDifferenceWeights(ReadOnlySpan<SinkPoint> points, int rows)
+    {
         var weights = new double[rows, 4];
         for (var row = 0; row < rows; row++)
         {
@@ -94,15 +112,7 @@ internal static class ConvexSink
             }
         }
 
-        for (var sweep = 0; sweep < Sweeps; sweep++)
-        {
-            for (var i = 0; i < points.Length; i++)
-            {
-                var (gradient, steepness) = GradientAt(weights, sinks, i);
-                var wanted = sinks[i] - gradient / steepness;
-                sinks[i] = Math.Clamp(wanted, points[i].SinkMps - points[i].RoundingMps, points[i].SinkMps + points[i].RoundingMps);
-            }
-        }
+        return weights;
     }
 
     private static (double Gradient, double Steepness) GradientAt(double[,] weights, ReadOnlySpan<double> sinks, int i)

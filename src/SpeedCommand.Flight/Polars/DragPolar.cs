@@ -36,10 +36,10 @@ public sealed class DragPolar : IPolar
         }
 
         (WingAreaM2, ReferenceMassKg, Cd0, K1, K2, ClMax) = (wingAreaM2, referenceMassKg, cd0, k1, k2, clMax);
-        var loading = 2 * referenceMassKg * StandardAtmosphere.StandardGravityMps2 / (StandardAtmosphere.SeaLevelDensityKgPerM3 * wingAreaM2);
-        _a = cd0 / loading;
-        _b = k2 * loading;
-        MinAirspeedMps = double.IsNaN(clMax) ? 0 : Math.Sqrt(loading / clMax);
+        var unitLift = UnitLiftSpeedSquared(referenceMassKg, wingAreaM2);
+        _a = cd0 / unitLift;
+        _b = k2 * unitLift;
+        MinAirspeedMps = double.IsNaN(clMax) ? 0 : Math.Sqrt(unitLift / clMax);
     }
 
     /// <summary>Zero-lift drag coefficient.</summary>
@@ -95,6 +95,10 @@ public sealed class DragPolar : IPolar
     /// <inheritdoc/>
     public IPolar WithAddedDrag(double zeroLiftDragIncrement) =>
         new DragPolar(WingAreaM2, ReferenceMassKg, Cd0 + zeroLiftDragIncrement, K1, K2, ClMax);
+
+    /// <summary>2 W/(ρ0 S), m²/s²: the square of the equivalent airspeed at a lift coefficient of 1.</summary>
+    internal static double UnitLiftSpeedSquared(double massKg, double wingAreaM2) =>
+        2 * massKg * StandardAtmosphere.StandardGravityMps2 / (StandardAtmosphere.SeaLevelDensityKgPerM3 * wingAreaM2);
 
     private static double Within(double value, double low, double high) => value <= low ? low : value >= high ? high : value;
 

@@ -50,6 +50,7 @@ public interface IPolar
 
     /// <summary>The same polar with drag added by bugs, rain or a dirty finish.</summary>
     /// <param name="zeroLiftDragIncrement">Addition to the zero-lift drag coefficient, 0 or more.</param>
-    /// <returns>The new polar; all sinks NaN without a wing area.</returns>
+    /// <returns>The new polar.</returns>
+    /// <exception cref="InvalidOperationException">The polar has no wing area.</exception>
     IPolar WithAddedDrag(double zeroLiftDragIncrement);
 }

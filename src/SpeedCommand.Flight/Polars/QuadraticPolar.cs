@@ -24,7 +24,8 @@ public sealed class QuadraticPolar : IPolar
 
         (A, B, C, MinAirspeedMps, MaxAirspeedMps) = (a, b, c, minAirspeedMps, maxAirspeedMps);
         (ReferenceMassKg, WingAreaM2) = (referenceMassKg, wingAreaM2);
-        _piece = new QuadraticPiece(minAirspeedMps, maxAirspeedMps, a, b + 2 * a * minAirspeedMps, c + minAirspeedMps * (b + a * minAirspeedMps));
+        var (startSlope, startSink) = (b + 2 * a * minAirspeedMps, c + minAirspeedMps * (b + a * minAirspeedMps));
+        _piece = new QuadraticPiece(minAirspeedMps, maxAirspeedMps, a, startSlope, startSink);
         if (!(_piece.Sink(MinSinkAirspeedMps(minAirspeedMps, maxAirspeedMps)) > 0))
         {
             throw new ArgumentException("the sink must be above 0 from the slowest to the fastest airspeed", nameof(c));

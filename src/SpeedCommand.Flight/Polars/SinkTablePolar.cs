@@ -1,5 +1,3 @@
-using SpeedCommand.Flight.Atmosphere;
-
 namespace SpeedCommand.Flight.Polars;
 
 /// <summary>
@@ -87,8 +85,12 @@ public sealed class SinkTablePolar : IPolar
     /// <inheritdoc/>
     public IPolar WithAddedDrag(double zeroLiftDragIncrement)
     {
-        var perCube = zeroLiftDragIncrement * StandardAtmosphere.SeaLevelDensityKgPerM3 * WingAreaM2
-            / (2 * ReferenceMassKg * StandardAtmosphere.StandardGravityMps2);
+        if (double.IsNaN(WingAreaM2))
+        {
+            throw new InvalidOperationException("a drag coefficient means nothing without a wing area");
+        }
+
+        var perCube = zeroLiftDragIncrement / DragPolar.UnitLiftSpeedSquared(ReferenceMassKg, WingAreaM2);
         var points = _points.Select(point => point with { SinkMps = point.SinkMps + perCube * Math.Pow(point.AirspeedMps, 3) });
         return new SinkTablePolar([.. points], ReferenceMassKg, WingAreaM2);
     }

@@ -24,7 +24,10 @@ internal static class QuantityUnits
         [new("kg", 1), new("g", 1, 1000), new("lb", 0.45359237)];
 
     private static readonly QuantityUnit[] Pressure =
-        [new("Pa", 1), new("hPa", 100), new("kPa", 1000), new("mbar", 100), new("bar", 100_000), new("inHg", 3386.389), new("mmHg", 133.322387)];
+    [
+        new("Pa", 1), new("hPa", 100), new("kPa", 1000), new("mbar", 100), new("bar", 100_000),
+        new("inHg", 3386.389), new("mmHg", 133.322387),
+    ];
 
     private static readonly QuantityUnit[] Temperature =
         [new("C", 1, 1, 273.15), new("°C", 1, 1, 273.15), new("K", 1), new("F", 5, 9, 459.67), new("°F", 5, 9, 459.67)];

@@ -7,5 +7,5 @@ namespace SpeedCommand.Flight.Targets;
 public readonly record struct Loading(double MassKg, double LoadFactor, double BugsFraction)
 {
     internal bool IsValid =>
-        MassKg > 0 && double.IsFinite(MassKg) && LoadFactor > 0 && double.IsFinite(LoadFactor) && BugsFraction >= 0 && double.IsFinite(BugsFraction);
+        MassKg > 0 && LoadFactor > 0 && BugsFraction >= 0 && double.IsFinite(MassKg + LoadFactor + BugsFraction);
 }

@@ -1,6 +1,7 @@
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Gliders;
+using SpeedCommand.Flight.Polars;
 
 namespace SpeedCommand.Flight.Targets;
 
@@ -69,6 +70,42 @@ public sealed class SpeedTargets
         }
 
         return Describe(_glider.Polar.MinSinkAirspeedMps(bounds.LowMps, bounds.HighMps), air, loading, scale, bounds);
+    }
+
+    /// <summary>The speed of least sink in a steady circle, with its size.</summary>
+    /// <param name="air">The air.</param>
+    /// <param name="loading">Mass and bugs; its load factor is not used, the bank decides.</param>
+    /// <param name="bankRad">Bank, radians, either side, less than a right angle.</param>
+    /// <returns>The speed, radius and time; not known when no speed is allowed.</returns>
+    public ThermallingTarget Thermalling(in Air air, in Loading loading, double bankRad)
+    {
+        var cosine = Math.Cos(bankRad);
+        if (!(Math.Abs(bankRad) < Math.PI / 2))
+        {
+            return default;
+        }
+
+        var speed = MinSink(air, loading with { LoadFactor = 1 / cosine });
+        if (!speed.IsKnown)
+        {
+            return default;
+        }
+
+        var acceleration = StandardAtmosphere.StandardGravityMps2 * Math.Tan(Math.Abs(bankRad));
+        return new(
+            speed,
+            speed.TrueAirspeedMps * speed.TrueAirspeedMps / acceleration,
+            2 * Math.PI * speed.TrueAirspeedMps / acceleration);
+    }
+
+    /// <summary>The flap setting that sinks least at a target.</summary>
+    /// <param name="target">The target.</param>
+    /// <param name="loading">The loading the target was made for.</param>
+    /// <returns>The setting's name; null without flaps or without a target.</returns>
+    public string? FlapSettingAt(in TargetSpeed target, in Loading loading)
+    {
+        var scale = Math.Sqrt(loading.LoadFactor * loading.MassKg / _glider.ReferenceMassKg);
+        return target.IsKnown && _glider.Polar is FlappedPolar flapped ? flapped.SettingAt(target.EquivalentAirspeedMps / scale)?.Name : null;
     }
 
     /// <summary>The speed of the flattest glide over the ground.</summary>

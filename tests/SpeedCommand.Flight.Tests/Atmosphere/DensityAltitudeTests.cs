@@ -14,7 +14,8 @@ public sealed class DensityAltitudeTests
     [InlineData(5883, 70, 30.10, 7700, 50)] // FAA Pilot's Handbook, density altitude chart, sample problem 1
     [InlineData(6000, 75, 29.80, 8492, 2)] // aerocalc project, std_atm tests
     [InlineData(5000, 32, 29.50, 4875, 2)] // same
-    public void DensityAltitude_DryAir_AsPublished(double elevationFt, double fahrenheit, double inchesOfMercury, double expectedFt, double toleranceFt)
+    public void DensityAltitude_DryAir_AsPublished(
+        double elevationFt, double fahrenheit, double inchesOfMercury, double expectedFt, double toleranceFt)
     {
         var air = AirAt(elevationFt * Foot, inchesOfMercury * 3386.389, (fahrenheit + 459.67) * 5 / 9, double.NaN);
         Close.Absolute(expectedFt * Foot, air.DensityAltitudeM, toleranceFt * Foot);
@@ -30,7 +31,7 @@ public sealed class DensityAltitudeTests
     [Theory] // elevation m, setting Pa, °C, dew point °C, m, tolerance m
     [InlineData(5050 * Foot, 29.45 * 3386.389, 35, 19.4444, 9252 * Foot, 6 * Foot)] // microlighthangar.com, Shelquist calculator, example 1
     [InlineData(1540, 99_700, 35, 19, 2821, 2)] // same, example 2
-    [InlineData(7000 * Foot, 29.75 * 3386.389, 23.8889, 7.2222, 9921 * Foot, 12 * Foot)] // aerocalc project; inside CIPM-2007's range, 10 ft above ideal gases
+    [InlineData(7000 * Foot, 29.75 * 3386.389, 23.8889, 7.2222, 9921 * Foot, 12 * Foot)] // aerocalc; CIPM-2007 is 10 ft above ideal gases
     [InlineData(2000, 99_900, 20, 10, 2829, 6)] // same; 20 °C is inside CIPM-2007's range, 3 m above ideal gases
     [InlineData(0, 30.10 * 3386.389, 10, 6, -685 * Foot, 6)] // codingace.net table; half way into the CIPM-2007 transition
     [InlineData(2500 * Foot, 29.85 * 3386.389, 28, 12, 4818 * Foot, 6)] // same

@@ -15,7 +15,8 @@ public sealed class ReferenceGliderTests
     [InlineData(3000, 23.159056, 0.7797944, 107.72894, 0.8812338)]
     [InlineData(4000, 24.398083, 0.8215141, 113.49252, 0.9283805)]
     [InlineData(6000, 27.186902, 0.9154171, 126.46526, 1.0344989)]
-    public void MinSinkAndBestGlide_WithAltitude_ClosedForm(double altitudeM, double minSinkMps, double sinkMps, double glideKmh, double glideSinkMps)
+    public void MinSinkAndBestGlide_WithAltitude_ClosedForm(
+        double altitudeM, double minSinkMps, double sinkMps, double glideKmh, double glideSinkMps)
     {
         var air = ReferenceGlider.StandardAirAt(altitudeM);
         var minSink = ReferenceGlider.Unlimited.MinSink(air, ReferenceGlider.Straight);
