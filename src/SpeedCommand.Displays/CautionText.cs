@@ -20,9 +20,9 @@ public static class CautionText
         "ADVISORY ONLY",
         "",
         "SpeedCommand is not certified and not a flight instrument.",
-        "It does not replace the placards, the flight manual, the",
-        "airspeed indicator, looking out, or the rules where",
-        "you fly.",
+        "It does not replace the placards, the flight manual,",
+        "the airspeed indicator, looking out, or the rules",
+        "where you fly.",
     ];
 
     /// <summary>Draws the caution as a frame of the terminal panel, in the middle of the page.</summary>

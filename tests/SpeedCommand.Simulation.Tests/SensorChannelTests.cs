@@ -29,7 +29,7 @@ public class SensorChannelTests
         // First order: 63.212 % after one time constant, and a ramp followed at slope times lag behind.
         var step = Values(Quiet with { LagS = 0.4, EveryS = 0.01, Quantum = 0.001 }, 2, t => t > 0 ? 1000 : 0);
         var start = step.FindIndex(value => value > 0);
-        Assert.Equal(632.12, step[start + 40], 15);
+        Assert.Equal(632.12, step[start + 40], 5.0);
         var ramp = Values(Quiet with { LagS = 0.4, EveryS = 1, Quantum = 0.001 }, 30, t => 100 * t);
         Assert.Equal(100, ramp[^1] - ramp[^2], 0.01);
         var onTime = Values(Quiet with { EveryS = 1, Quantum = 0.001 }, 30, t => 100 * t);

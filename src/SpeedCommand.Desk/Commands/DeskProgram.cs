@@ -25,10 +25,6 @@ internal static class DeskProgram
         {
             return Fail(failure.Status, failure.Message);
         }
-        catch (Exception fault) when (fault is FileNotFoundException or DirectoryNotFoundException)
-        {
-            return Fail(ExitStatus.NoInput, fault.Message);
-        }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {
             return Fail(ExitStatus.InputOutput, fault.Message);

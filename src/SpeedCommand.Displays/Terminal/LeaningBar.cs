@@ -12,16 +12,19 @@ internal static class LeaningBar
     // The bar is full at this difference; beyond it the outer end turns into an arrow head and the words give the number.
     private const double FullMps = 10;
 
+    // Two columns a stroke give it weight; one stays free between strokes.
+    private const int StrokePitch = 3;
+
     public static void Draw(TextGrid grid, int top, int height, SpeedCorrection correction, DisplayUnit unit)
     {
         var post = grid.Width / 2;
-        var tone = ToneOf(correction.Direction);
+        var tone = ToneOf(correction);
         for (var row = 0; row < height; row++)
         {
             grid.Put(top + row, post, '|', tone);
             if (correction.Direction == CorrectionDirection.OnSpeed)
             {
-                grid.Put(top + row, post - 2, "| | |", tone);
+                grid.Put(top + row, post - 3, "|| | ||", tone);
             }
         }
 
@@ -43,16 +46,17 @@ internal static class LeaningBar
 
     private static void DrawStrokes(TextGrid grid, int top, int height, SpeedCorrection correction, double share)
     {
-        var most = (grid.Width / 2 - 3 - height) / 2;
+        var most = (grid.Width / 2 - 3 - height) / StrokePitch;
         var strokes = (int)Math.Clamp(Math.Round(share * most), 1, most);
         var (stroke, head, side) = correction.Direction == CorrectionDirection.SpeedUp ? ('/', '>', 1) : ('\\', '<', -1);
         for (var i = 0; i < strokes; i++)
         {
             for (var row = 0; row < height; row++)
             {
-                var away = 2 + 2 * i + (height - 1 - row);
+                var away = 2 + StrokePitch * i + (height - 1 - row);
                 var cell = share > 1 && i == strokes - 1 ? head : stroke;
-                grid.Put(top + row, grid.Width / 2 + side * away, cell, ToneOf(correction.Direction));
+                grid.Put(top + row, grid.Width / 2 + side * away, cell, ToneOf(correction));
+                grid.Put(top + row, grid.Width / 2 + side * (away + 1), cell, ToneOf(correction));
             }
         }
     }
@@ -62,16 +66,17 @@ internal static class LeaningBar
         var words = Words(correction);
         var column = correction.Direction switch
         {
-            CorrectionDirection.SpeedUp => post + 2,
-            CorrectionDirection.SlowDown => post - 1 - words.Length - 1 - unit.Label.Length,
-            _ => post - words.Length / 2,
+            CorrectionDirection.SpeedUp => post + 1,
+            CorrectionDirection.SlowDown => post - 2 - words.Length - 1 - unit.Label.Length,
+            _ => post - 1 - words.Length / 2,
         };
         var isTurn = correction.Direction is CorrectionDirection.SpeedUp or CorrectionDirection.SlowDown;
-        grid.Put(row, column, isTurn ? $"{words} {unit.Label}" : words, ToneOf(correction.Direction));
+        grid.Put(row, column, isTurn ? $" {words} {unit.Label} " : $" {words} ", ToneOf(correction));
     }
 
-    private static Tone ToneOf(CorrectionDirection direction) => direction switch
+    private static Tone ToneOf(SpeedCorrection correction) => correction.Direction switch
     {
+        _ when correction.IsDoubtful => Tone.Faint,
         CorrectionDirection.SpeedUp => Tone.Faster,
         CorrectionDirection.SlowDown => Tone.Slower,
         CorrectionDirection.OnSpeed => Tone.OnSpeed,

@@ -11,19 +11,22 @@ internal readonly record struct PanelLayout
         var isRoomy = height >= 20;
         BarHeight = isRoomy ? 3 : 2;
         ReasonRows = isRoomy ? 6 : 5;
-        var rowsLeft = height - (1 + BarHeight + 1 + 1 + ReasonRows + 1);
+        // Where rows are few, the words of the correction stand in the rule above the reasons.
+        var wordRows = isRoomy ? 2 : 1;
+        var rowsLeft = height - (1 + BarHeight + wordRows + ReasonRows + 1);
         DigitHeight = 5;
-        while (DigitHeight + 2 <= rowsLeft - (isRoomy ? 2 : 0)
+        while (DigitHeight + 2 <= rowsLeft - wordRows
             && BlockDigits.Width(3, DigitHeight + 2) + CaptionWidth <= width)
         {
             DigitHeight += 2;
         }
 
         var empty = rowsLeft - DigitHeight;
-        DigitTop = 1 + (empty + 1) / 3;
-        BarTop = DigitTop + DigitHeight + (empty + 1) / 3;
+        // At least one empty row below the header, or its band would run into the digits.
+        DigitTop = 1 + (empty + 2) / 3;
         HealthRow = height - 1;
         ReasonTop = HealthRow - ReasonRows;
+        BarTop = isRoomy ? DigitTop + DigitHeight + (empty + 1) / 3 : ReasonTop - wordRows - BarHeight;
         DigitLeft = (width - BlockDigits.Width(3, DigitHeight) - CaptionWidth) / 2;
         CaptionLeft = DigitLeft + BlockDigits.Width(3, DigitHeight) + 4;
     }

@@ -16,7 +16,12 @@ internal static class StatusLine
         text.Append(TimeText(picture.TimeUs)).Append(picture.Phase == FlightPhase.Climbing ? " climbing" : " gliding");
         Add(", hold", Readout.Of(picture.HoldIndicatedMps, units.Speed, Trust.Airspeed), units.Speed, false);
         Add(", flying", Readout.Of(picture.IndicatedAirspeedMps, units.Speed, Trust.Airspeed), units.Speed, false);
-        text.Append(", ").Append(LeaningBar.Words(SpeedCorrection.Of(picture, units)));
+        var correction = SpeedCorrection.Of(picture, units);
+        if (correction.Direction != CorrectionDirection.Unknown)
+        {
+            text.Append(", ").Append(LeaningBar.Words(correction));
+        }
+
         Add("; climb", Readout.Of(picture.ClimbMps, units.Vertical, Trust.Vertical), units.Vertical, true);
         Add(", average", Readout.Of(picture.AverageClimbMps, units.Vertical, Trust.Vertical), units.Vertical, true);
         Add(", netto", Readout.Of(picture.NettoMps, units.Vertical, Trust.Vertical), units.Vertical, true);

@@ -36,8 +36,8 @@ public static class TerminalPanel
         var layout = PanelLayout.For(style);
         DrawHeader(grid, picture);
         DrawHold(grid, layout, picture, style.Units.Speed);
-        LeaningBar.Draw(grid, layout.BarTop, layout.BarHeight, SpeedCorrection.Of(picture, style.Units), style.Units.Speed);
         grid.FillRow(layout.ReasonTop - 1, '─', Tone.Faint);
+        LeaningBar.Draw(grid, layout.BarTop, layout.BarHeight, SpeedCorrection.Of(picture, style.Units), style.Units.Speed);
         ReasonRows.Draw(grid, layout, picture, style.Units);
         DrawHealth(grid, layout.HealthRow, picture.Faults);
         return grid.ToText(style.Look);
@@ -95,6 +95,7 @@ public static class TerminalPanel
         LimitedBy.Stall => "not slower: stall margin",
         LimitedBy.RoughAir => "not faster: rough-air limit",
         LimitedBy.NeverExceed => "not faster: never-exceed",
+        LimitedBy.PolarRange => "the polar ends here",
         _ => string.Empty,
     };
 

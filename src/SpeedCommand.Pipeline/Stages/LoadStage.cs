@@ -2,11 +2,11 @@ namespace SpeedCommand.Pipeline.Stages;
 
 /// <summary>
 /// Load factor from an accelerometer, else from the bank of a level turn, else 1. The present load serves netto; the steady
-/// load, smoothed over two seconds, serves targets and phase, since a gust is no turn.
+/// load, smoothed over a second, serves targets and phase, since a gust is no turn.
 /// </summary>
 internal sealed class LoadStage
 {
-    private const double SmoothingS = 2;
+    private const double SmoothingS = 1;
 
     private TimedValue _loadFactor;
     private TimedValue _bankRad;

@@ -4,7 +4,7 @@ namespace SpeedCommand.Pipeline.Stages;
 
 /// <summary>What the phase is judged by.</summary>
 /// <param name="IsLoadMeasured">Whether the load factor comes from a sensor.</param>
-/// <param name="SteadyLoad">Load factor smoothed over two seconds.</param>
+/// <param name="SteadyLoad">Load factor smoothed over a second.</param>
 /// <param name="ClimbMps">Total-energy climb, m/s; NaN when blank.</param>
 /// <param name="IndicatedMps">Indicated airspeed, m/s; NaN when blank.</param>
 /// <param name="MinSinkMps">Indicated minimum-sink speed, m/s; NaN when blank.</param>
@@ -17,7 +17,7 @@ internal readonly record struct PhaseEvidence(bool IsLoadMeasured, double Steady
 internal sealed class PhaseStage
 {
     /// <summary>A pull-up or a bend in the track is over sooner than this.</summary>
-    private const long LastingUs = 4_000_000;
+    private const long LastingUs = 6_000_000;
 
     /// <summary>Load factor of a 20-degree bank; thermalling turns are steeper (common practice).</summary>
     private const double TurningLoad = 1.064;

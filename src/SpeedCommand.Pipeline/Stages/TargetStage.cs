@@ -7,7 +7,7 @@ namespace SpeedCommand.Pipeline.Stages;
 
 /// <summary>What the targets rest on. Every value is fresh; a blank netto is taken as still air for no target but the speed to fly.</summary>
 /// <param name="Air">The air at the glider.</param>
-/// <param name="SteadyLoad">Load factor smoothed over two seconds.</param>
+/// <param name="SteadyLoad">Load factor smoothed over a second.</param>
 /// <param name="Netto">Vertical motion of the air, m/s.</param>
 /// <param name="AgeS">Age of the older of static pressure and airspeed, s.</param>
 internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, double AgeS);

@@ -1,7 +1,6 @@
 using System.Globalization;
 using SpeedCommand.Flight.LocatedJson;
 using SpeedCommand.Flight.Quantities;
-using SpeedCommand.Simulation.Gliding;
 using SpeedCommand.Simulation.Sensors;
 
 namespace SpeedCommand.Simulation.Scenarios;

@@ -1,0 +1,169 @@
+using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.Targets;
+using SpeedCommand.Pipeline.Picture;
+
+namespace SpeedCommand.Pipeline.Tests;
+
+/// <summary>The numbers of the picture against physics worked out here, with ideal sensors.</summary>
+public sealed class PictureTests
+{
+    private const double G = 9.80665, R = 287.05287, GradientKPerM = 0.0065;
+
+    /// <summary>ISO 2533:1975, troposphere: p = p0 (1 − 0.0065 h/288.15)^5.25588.</summary>
+    private static double StandardPa(double h) => 101_325 * Math.Pow(1 - GradientKPerM * h / 288.15, G / (R * GradientKPerM));
+
+    private static double StandardDensity(double h) => StandardPa(h) / (R * (288.15 - GradientKPerM * h));
+
+    /// <summary>Isentropic impact pressure (NASA RP-1046): q = p ((1 + V²/(5·1.4·R·T))^3.5 − 1).</summary>
+    private static double ImpactPa(double trueMps, double h, double offsetK = 0)
+    {
+        var t = 288.15 - GradientKPerM * h + offsetK;
+        return StandardPa(h) * (Math.Pow(1 + 0.2 * trueMps * trueMps / (1.4 * R * t), 3.5) - 1);
+    }
+
+    [Fact]
+    public void SteadyGlideInStillAir_ClimbIsMinusSink_NettoIsZero()
+    {
+        // 340 kg, 11.2 m², CD = 0.0115 − 0.002 CL + 0.0215 CL²: sink from lift = weight, worked out at the height midway.
+        const double V = 30, Mid = 1000;
+        var cl = 2 * 340 * G / (StandardDensity(Mid) * 11.2 * V * V);
+        var sink = V * (0.0115 - 0.002 * cl + 0.0215 * cl * cl) / cl;
+        var cockpit = new Cockpit();
+        double Height(double t) => Mid + sink * (20 - t);
+        cockpit.Fly(40, t => StandardPa(Height(t)), t => ImpactPa(V, Height(t)));
+
+        var middle = cockpit.Pictures[199];
+        Assert.Equal(-sink, middle.ClimbMps.Value, 0.01);
+        Assert.Equal(0, middle.NettoMps.Value, 0.01);
+        Assert.Equal(V, middle.TrueAirspeedMps.Value, 0.01);
+        Assert.Equal(Mid, middle.PressureAltitudeM.Value, 0.1);
+        Assert.Equal(Mid, middle.DensityAltitudeM.Value, 0.1);
+        Assert.Equal(-sink, cockpit.Last.AverageClimbMps.Value, 0.01);
+        Assert.False(cockpit.Pictures[250].AverageClimbMps.IsKnown);
+    }
+
+    [Fact]
+    public void ClimbOnAWarmDay_IsTheGlidersNotTheAltimeters()
+    {
+        // dh = dHp · T/T_standard (hydrostatic equation): at ISA + 20 K a glider that climbs 2 m/s of pressure altitude
+        // climbs 7 per cent faster.
+        var cockpit = new Cockpit();
+        cockpit.SendStatic("C,28.50,C,OAT");
+        for (var i = 0; i < 3; i++)
+        {
+            cockpit.Fly(8, t => StandardPa(1000 + 2 * (t - 12)), t => ImpactPa(25, 1000 + 2 * (t - 12), 20));
+            cockpit.SendStatic("C,28.50,C,OAT");
+        }
+
+        var at1000 = cockpit.Pictures[119];
+        Assert.Equal(2 * 301.65 / 281.65, at1000.ClimbMps.Value, 0.02);
+    }
+
+    [Fact]
+    public void ZoomInStillAir_LooksLikeNoThermal()
+    {
+        // A lossless pull-up from 45 to 25 m/s: height gained is kinetic height lost. Without compensation the height alone
+        // would show 7 m/s of climb.
+        var cockpit = new Cockpit();
+        double Speed(double t) => t < 10 ? 45 : t < 20 ? 45 - 2 * (t - 10) : 25;
+        double Height(double t) => 1000 + (45 * 45 - Speed(t) * Speed(t)) / (2 * G);
+        cockpit.Fly(30, t => StandardPa(Height(t)), t => ImpactPa(Speed(t), Height(t)));
+        Assert.All(cockpit.Pictures.Skip(50), picture => Assert.InRange(picture.ClimbMps.Value, -1.0, 1.0));
+    }
+
+    [Fact]
+    public void BoardThatSendsAirspeed_IsAsGoodAsOneThatSendsPressure()
+    {
+        // NASA RP-1046 table: 100 kt calibrated is 34.0493 psf = 1630.28 Pa of impact pressure.
+        var byPressure = new Cockpit();
+        byPressure.Fly(5, _ => 90_000, _ => 34.0493 * 47.880259);
+        var bySpeed = new Cockpit();
+        for (var i = 0; i < 100; i++)
+        {
+            bySpeed.Fly(0.05, _ => 90_000, null);
+            bySpeed.SendPitot(Cockpit.Number($"G,{100 * 1852 / 3600.0:F4},,IAS"));
+        }
+
+        bySpeed.Fly(0.05, _ => 90_000, null);
+        Assert.Equal(100 * 1852 / 3600.0, byPressure.Last.IndicatedAirspeedMps.Value, 0.001);
+        Assert.Equal(byPressure.Last.TrueAirspeedMps.Value, bySpeed.Last.TrueAirspeedMps.Value, 0.001);
+    }
+
+    [Fact]
+    public void Circling_HoldsMinimumSinkAtTheLoad_Straight_HoldsSpeedToFly()
+    {
+        var cockpit = new Cockpit(new FlightSettings(TestGliders.WithLimits) { ExpectedClimbMps = 2 });
+        cockpit.Fly(20, _ => 90_000, _ => 400);
+        Assert.Equal(FlightPhase.Gliding, cockpit.Last.Phase);
+        Assert.Equal(cockpit.Last.SpeedToFlyIndicatedMps, cockpit.Last.HoldIndicatedMps);
+        var straight = cockpit.Last.MinSinkIndicatedMps.Value;
+
+        // A 40-degree bank has load factor 1/cos 40° = 1.3054; minimum-sink speed goes with its square root.
+        cockpit.Fly(20, _ => 90_000, _ => 400, "A,40.0,D,BANK");
+        Assert.Equal(FlightPhase.Climbing, cockpit.Last.Phase);
+        Assert.Equal(cockpit.Last.MinSinkIndicatedMps, cockpit.Last.HoldIndicatedMps);
+        Assert.Equal(Math.Sqrt(1.3054), cockpit.Last.MinSinkIndicatedMps.Value / straight, 0.002);
+
+        cockpit.Fly(20, _ => 90_000, _ => 400, "G,1.00,,LOAD");
+        Assert.Equal(FlightPhase.Gliding, cockpit.Last.Phase);
+    }
+
+    [Fact]
+    public void ShortPull_IsNoThermal()
+    {
+        var cockpit = new Cockpit();
+        cockpit.Fly(10, _ => 90_000, _ => 500, "G,1.00,,LOAD");
+        cockpit.Fly(3, _ => 90_000, _ => 500, "G,1.60,,LOAD");
+        cockpit.Fly(5, _ => 90_000, _ => 500, "G,1.00,,LOAD");
+        Assert.All(cockpit.Pictures, picture => Assert.Equal(FlightPhase.Gliding, picture.Phase));
+    }
+
+    [Fact]
+    public void GliderWithoutLimits_ShowsNoSpeedToFly_AndSaysWhy()
+    {
+        var cockpit = new Cockpit(new FlightSettings(TestGliders.WithoutLimits));
+        cockpit.Fly(10, _ => 90_000, _ => 500);
+        Assert.False(cockpit.Last.SpeedToFlyIndicatedMps.IsKnown || cockpit.Last.HoldIndicatedMps.IsKnown);
+        Assert.True(cockpit.Last.MinSinkIndicatedMps.IsKnown);
+        Assert.Equal(Faults.NoLimits | Faults.TemperatureSilent, cockpit.Last.Faults);
+    }
+
+    [Fact]
+    public void StrongSinkAndHighSetting_SpeedToFlyStopsAtTheRoughAirLimit()
+    {
+        var cockpit = new Cockpit(new FlightSettings(TestGliders.WithLimits) { ExpectedClimbMps = 8 });
+        cockpit.Fly(10, _ => 90_000, _ => 800);
+        Assert.Equal(LimitedBy.RoughAir, cockpit.Last.LimitedBy);
+        Assert.Equal(180 / 3.6, cockpit.Last.SpeedToFlyIndicatedMps.Value, 0.01);
+    }
+
+    [Fact]
+    public void HeightInHand_AgreesWithTheClosedForm()
+    {
+        // Minimum sink from 3000 m to 300 m in the standard atmosphere takes 3709.03 s (closed form of the integral of
+        // sqrt(ρ/ρ0)/w0 over the troposphere); best glide covers (L/D)max · 2700 m = 91 686 m.
+        var cockpit = new Cockpit(new FlightSettings(TestGliders.WithLimits) { SafetyHeightM = 300 });
+        cockpit.Fly(5, _ => StandardPa(3000), _ => 500);
+        Assert.Equal(3709.03, cockpit.Last.EnduranceS.Value, 3709 * 0.005);
+        Assert.Equal(91_686, cockpit.Last.RangeM.Value, 91_686 * 0.005);
+    }
+
+    [Fact]
+    public void AtRest_SensorNoiseAboutZeroGivesNoAirspeed_AndNoFault()
+    {
+        var cockpit = new Cockpit();
+        cockpit.Fly(5, _ => 101_325, t => -0.5);
+        Assert.False(cockpit.Last.IndicatedAirspeedMps.IsKnown);
+        Assert.Equal(Faults.TemperatureSilent, cockpit.Last.Faults);
+    }
+
+    [Fact]
+    public void StandardAtmosphereOfTheTest_IsThePublishedOne()
+    {
+        // ISO 2533:1975: 1000 m is 898.746 hPa and 1.11164 kg/m³. This test's own formulas must be right for it to judge.
+        Assert.Equal(89_874.6, StandardPa(1000), 0.1);
+        Assert.Equal(1.11164, StandardDensity(1000), 1e-5);
+        Assert.True(StandardAtmosphere.TryAt(1000, out var state));
+        Assert.Equal(StandardPa(1000), state.PressurePa, 0.1);
+    }
+}
