@@ -9,6 +9,8 @@ public sealed class FlightLogTests
 {
     private static readonly FlightLogHeader Header = new(new DateTimeOffset(2026, 6, 14, 10, 0, 0, TimeSpan.Zero), "marram-15.json", ["one", "two"]);
 
+    private static readonly string[] StreamNames = ["static", "pitot", "a-b_9"];
+
     private sealed record Entry(long TimeUs, string Stream, byte[] Line);
 
     private static byte[] Write(params Entry[] entries)
@@ -71,8 +73,8 @@ public sealed class FlightLogTests
     [Fact]
     public void AnyBytes_ComeBackTheSame()
     {
-        var entry = Gen.Select(Gen.Long[0, 100_000_000_000], Gen.OneOfConst("static", "pitot", "a-b_9"), Gen.Byte.Array[0, 512])
-            .Select((time, stream, line) => new Entry(time, stream, line));
+        var entry = Gen.Select(Gen.Long[0, 100_000_000_000], Gen.Int[0, 2], Gen.Byte.Array[0, 512])
+            .Select((time, stream, line) => new Entry(time, StreamNames[stream], line));
         entry.Array[0, 20].Sample(entries =>
         {
             var sorted = entries.OrderBy(one => one.TimeUs).ToArray();

@@ -17,25 +17,7 @@ public sealed class PictureLinesTests
         "speedToFlyIndicatedMps", "holdIndicatedMps", "limitedBy", "enduranceS", "rangeM", "faults",
     ];
 
-    private static readonly CockpitPicture Blank = new()
-    {
-        TimeUs = 100_000,
-        PressureAltitudeM = Gauge.Blank,
-        DensityAltitudeM = Gauge.Blank,
-        TemperatureK = Gauge.Blank,
-        IndicatedAirspeedMps = Gauge.Blank,
-        TrueAirspeedMps = Gauge.Blank,
-        ClimbMps = Gauge.Blank,
-        AverageClimbMps = Gauge.Blank,
-        NettoMps = Gauge.Blank,
-        MinSinkIndicatedMps = Gauge.Blank,
-        BestGlideIndicatedMps = Gauge.Blank,
-        SpeedToFlyIndicatedMps = Gauge.Blank,
-        HoldIndicatedMps = Gauge.Blank,
-        EnduranceS = Gauge.Blank,
-        RangeM = Gauge.Blank,
-        Faults = (Faults)0x3FF,
-    };
+    private static readonly CockpitPicture Blank = CockpitPicture.Blank(100_000, FaultNames.All.Aggregate(Faults.None, (all, pair) => all | pair.Key));
 
     private static JsonElement Write(CockpitPicture picture)
     {

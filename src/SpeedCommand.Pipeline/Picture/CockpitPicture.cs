@@ -9,6 +9,30 @@ namespace SpeedCommand.Pipeline.Picture;
 /// </summary>
 public readonly record struct CockpitPicture
 {
+    /// <summary>A picture in which nothing is known.</summary>
+    /// <param name="timeUs">Microseconds of data time since the start of the flight.</param>
+    /// <param name="faults">Why nothing is known.</param>
+    /// <returns>The picture; every gauge is blank.</returns>
+    public static CockpitPicture Blank(long timeUs, Faults faults) => new()
+    {
+        TimeUs = timeUs,
+        PressureAltitudeM = Gauge.Blank,
+        DensityAltitudeM = Gauge.Blank,
+        TemperatureK = Gauge.Blank,
+        IndicatedAirspeedMps = Gauge.Blank,
+        TrueAirspeedMps = Gauge.Blank,
+        ClimbMps = Gauge.Blank,
+        AverageClimbMps = Gauge.Blank,
+        NettoMps = Gauge.Blank,
+        MinSinkIndicatedMps = Gauge.Blank,
+        BestGlideIndicatedMps = Gauge.Blank,
+        SpeedToFlyIndicatedMps = Gauge.Blank,
+        HoldIndicatedMps = Gauge.Blank,
+        EnduranceS = Gauge.Blank,
+        RangeM = Gauge.Blank,
+        Faults = faults,
+    };
+
     /// <summary>Microseconds of data time since the start of the flight.</summary>
     public long TimeUs { get; init; }
 

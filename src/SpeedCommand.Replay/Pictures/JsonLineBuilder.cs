@@ -1,4 +1,5 @@
 using System.Buffers.Text;
+using System.Text;
 
 namespace SpeedCommand.Replay.Pictures;
 
@@ -36,12 +37,11 @@ internal ref struct JsonLineBuilder(Span<byte> buffer)
         Length += written;
     }
 
-    public void Word(ReadOnlySpan<byte> key, ReadOnlySpan<byte> word)
+    /// <summary>A word of ours, plain ASCII that needs no escape.</summary>
+    public void Word(ReadOnlySpan<byte> key, string word)
     {
         Key(key);
-        Append((byte)'"');
-        Append(word);
-        Append((byte)'"');
+        Quote(word);
     }
 
     public void Null(ReadOnlySpan<byte> key)
@@ -56,16 +56,14 @@ internal ref struct JsonLineBuilder(Span<byte> buffer)
         Append((byte)'[');
     }
 
-    public void Element(ReadOnlySpan<byte> word)
+    public void Element(string word)
     {
         if (_buffer[Length - 1] != '[')
         {
             Append((byte)',');
         }
 
-        Append((byte)'"');
-        Append(word);
-        Append((byte)'"');
+        Quote(word);
     }
 
     public void EndWords() => Append((byte)']');
@@ -81,6 +79,13 @@ internal ref struct JsonLineBuilder(Span<byte> buffer)
         Append(key);
         Append((byte)'"');
         Append((byte)':');
+    }
+
+    private void Quote(string word)
+    {
+        Append((byte)'"');
+        Length += Encoding.ASCII.GetBytes(word, _buffer[Length..]);
+        Append((byte)'"');
     }
 
     private void Append(byte value) => _buffer[Length++] = value;

@@ -1,5 +1,3 @@
-using System.Text;
-using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Replay.Pictures;
@@ -7,9 +5,6 @@ namespace SpeedCommand.Replay.Pictures;
 /// <summary>Writes each picture as one JSON object on one line; docs/log-format.md lists the keys. No allocation a picture.</summary>
 public sealed class PictureLines(Stream stream) : IPictureSink
 {
-    private static readonly (Faults Fault, byte[] Name)[] FaultWords =
-        [.. FaultNames.All.Select(pair => (pair.Key, Encoding.ASCII.GetBytes(pair.Value)))];
-
     /// <summary>All keys, the longest numbers and every fault together stay below this.</summary>
     private readonly byte[] _line = new byte[2048];
 
@@ -23,15 +18,15 @@ public sealed class PictureLines(Stream stream) : IPictureSink
         var line = new JsonLineBuilder(_line);
         line.Begin();
         line.Number("t"u8, picture.TimeS, 1);
-        line.Word("phase"u8, picture.Phase == FlightPhase.Climbing ? "climbing"u8 : "gliding"u8);
+        line.Word("phase"u8, picture.Phase == FlightPhase.Climbing ? "climbing" : "gliding");
         WriteAirData(ref line, picture);
         WriteTargets(ref line, picture);
         line.BeginWords("faults"u8);
-        foreach (var (fault, name) in FaultWords)
+        for (var i = 0; i < FaultNames.All.Count; i++)
         {
-            if ((picture.Faults & fault) != 0)
+            if ((picture.Faults & FaultNames.All[i].Key) != 0)
             {
-                line.Element(name);
+                line.Element(FaultNames.All[i].Value);
             }
         }
 
@@ -61,18 +56,13 @@ public sealed class PictureLines(Stream stream) : IPictureSink
         line.Number("bestGlideIndicatedMps"u8, picture.BestGlideIndicatedMps.Value, 2);
         line.Number("speedToFlyIndicatedMps"u8, picture.SpeedToFlyIndicatedMps.Value, 2);
         line.Number("holdIndicatedMps"u8, picture.HoldIndicatedMps.Value, 2);
-        if (picture.LimitedBy == LimitedBy.None)
+        if (LimitWords.Of(picture.LimitedBy) is { } limit)
         {
-            line.Null("limitedBy"u8);
+            line.Word("limitedBy"u8, limit);
         }
         else
         {
-            line.Word("limitedBy"u8, picture.LimitedBy switch
-            {
-                LimitedBy.Stall => "stall"u8,
-                LimitedBy.RoughAir => "rough-air"u8,
-                _ => "never-exceed"u8,
-            });
+            line.Null("limitedBy"u8);
         }
 
         line.Number("enduranceS"u8, picture.EnduranceS.Value, 0);

@@ -48,7 +48,7 @@ public sealed class FlightReplay
                 LineCount++;
                 _pipeline.Accept(record.TimeUs, stream, record.Content);
                 break;
-            case LogRecordKind.End:
+            case LogRecordKind.Line or LogRecordKind.End:
                 _pipeline.AdvanceTo(record.TimeUs);
                 break;
         }

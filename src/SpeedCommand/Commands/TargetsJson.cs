@@ -1,6 +1,7 @@
 using System.Text.Json;
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
+using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Commands;
 
@@ -19,21 +20,13 @@ internal static class TargetsJson
             WriteSpeed(json, "speedToFly", answer.SpeedToFly.Speed, static (json, answer) =>
             {
                 Number(json, "averageSpeedMps", answer.SpeedToFly.AverageSpeedMps);
-                json.WriteString("limitedBy", LimitWord(answer.SpeedToFly.LimitedBy));
+                json.WriteString("limitedBy", LimitWords.Of(answer.SpeedToFly.LimitedBy));
             }, answer);
             json.WriteEndObject();
         }
 
         output.WriteByte((byte)'\n');
     }
-
-    private static string? LimitWord(LimitedBy limit) => limit switch
-    {
-        LimitedBy.Stall => "stall",
-        LimitedBy.RoughAir => "rough-air",
-        LimitedBy.NeverExceed => "never-exceed",
-        _ => null,
-    };
 
     private static void WriteAir(Utf8JsonWriter json, in Air air)
     {

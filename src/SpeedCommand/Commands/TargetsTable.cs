@@ -44,6 +44,7 @@ internal static class TargetsTable
             LimitedBy.Stall => ", held at the stall margin",
             LimitedBy.RoughAir => ", held at the rough-air limit",
             LimitedBy.NeverExceed => ", held at the never-exceed limit",
+            LimitedBy.PolarRange => ", held at the end of the polar",
             _ => "",
         };
         return double.IsFinite(answer.SpeedToFly.AverageSpeedMps)

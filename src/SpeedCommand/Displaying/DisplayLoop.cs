@@ -13,6 +13,10 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time) : B
     /// <summary>Long enough to read the caution's first line, short enough not to be in the way.</summary>
     private static readonly TimeSpan CautionTime = TimeSpan.FromSeconds(2);
 
+    private static readonly TimeSpan LongestWithoutPicture = TimeSpan.FromSeconds(1);
+
+    private const Faults Silence = Faults.StaticSilent | Faults.AirspeedSilent | Faults.TemperatureSilent;
+
     /// <summary>Time between two frames.</summary>
     protected abstract TimeSpan FramePeriod { get; }
 
@@ -25,12 +29,18 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time) : B
         await ShowCautionAsync(stoppingToken).ConfigureAwait(false);
         await PauseAsync(CautionTime, stoppingToken).ConfigureAwait(false);
         var shown = 0L;
+        var shownAt = time.GetTimestamp();
         while (!stoppingToken.IsCancellationRequested)
         {
             if (latest.TryGet(out var picture, out var count) && count != shown)
             {
-                shown = count;
+                (shown, shownAt) = (count, time.GetTimestamp());
                 await ShowAsync(picture, stoppingToken).ConfigureAwait(false);
+            }
+            else if (shown > 0 && time.GetElapsedTime(shownAt) > LongestWithoutPicture)
+            {
+                // The pipeline makes pictures even when every port is silent; if it does not, nothing on the display is true.
+                await ShowAsync(CockpitPicture.Blank(picture.TimeUs, Silence), stoppingToken).ConfigureAwait(false);
             }
 
             await PauseAsync(FramePeriod, stoppingToken).ConfigureAwait(false);
