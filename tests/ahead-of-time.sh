@@ -18,7 +18,7 @@ case "$target" in
     linux-x64) cross=() emulator=() pace=50 ;;
     linux-arm64)
         # The C compiler of the build machine cannot drive the linker for another processor; clang can.
-        cross=(-p:CppCompilerAndLinker=clang -p:SysRoot=/usr/aarch64-linux-gnu -p:ObjCopyName=aarch64-linux-gnu-objcopy)
+        cross=(-p:CppCompilerAndLinker=clang -p:ObjCopyName=aarch64-linux-gnu-objcopy)
         emulator=(qemu-aarch64-static -L /usr/aarch64-linux-gnu)
         # Emulated, the program is some ten times slower than on a processor of its own.
         pace=10

@@ -7,14 +7,14 @@ namespace SpeedCommand.House.Tests.Documents;
 
 /// <summary>
 /// The settings that the program asks for are the rows of the tables in docs/settings.md whose first column is headed
-/// "Setting". An element of a list is written there as in ports[].device.
+/// "setting". The name that a port is given stands there as NAME.
 /// </summary>
 public class DocumentedSettingsTests
 {
     private static readonly Dictionary<string, string> Nothing = [];
 
     /// <summary>One port, so that what belongs to a port is asked for too.</summary>
-    private const string OnePort = """{ "glider": "marram-15.json", "ports": [ { "name": "ANY", "device": "/dev/null" } ] }""";
+    private const string OnePort = """{ "glider": "marram-15.json", "ports": [ { "name": "NAME", "device": "/dev/null" } ] }""";
 
     [Fact]
     public void Settings_AreTheOnesInTheDocument()
@@ -33,6 +33,6 @@ public class DocumentedSettingsTests
         var source = new SettingsSource(top, "settings.json", Nothing, Nothing);
         Assert.NotNull(CockpitSettingsReader.Read(source, null, null, needsPorts: true));
         Assert.Empty(source.Problems);
-        return source.AskedPaths.Where(path => path != "ports").Select(path => path.Replace(".ANY.", "[].", StringComparison.Ordinal));
+        return source.AskedPaths.Where(path => path != "ports");
     }
 }

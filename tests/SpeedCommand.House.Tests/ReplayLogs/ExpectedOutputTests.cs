@@ -3,12 +3,12 @@ using System.Text;
 namespace SpeedCommand.House.Tests.ReplayLogs;
 
 /// <summary>
-/// Every recorded flight replays to the output that lies beside it. With REWRITE_EXPECTED=1 in the environment the expected
+/// Every recorded flight replays to the output that lies beside it. With SPEEDCOMMAND_REWRITE_EXPECTED=1 in the environment the expected
 /// outputs are written anew; the tests then fail once, so that nobody rewrites in passing.
 /// </summary>
 public class ExpectedOutputTests
 {
-    private const string RewriteVariable = "REWRITE_EXPECTED";
+    private const string RewriteVariable = "SPEEDCOMMAND_REWRITE_EXPECTED";
     private const int MaxDifferencesTold = 20;
 
     public static TheoryData<string> Logs => [.. ExpectedOutput.Logs];
