@@ -63,6 +63,27 @@ public sealed class AirspeedConversionTests
         Close.Relative(trueKnots * Knot, airspeed.Mps, 1e-5);
     }
 
+    /// <summary>Worked out in python from RP-1046's formulas: calibrated km/h, qc Pa, altitude m, equivalent and true km/h; last digit.</summary>
+    [Theory]
+    [InlineData(50, 118.2012, 1000, 49.9987, 52.4861)]
+    [InlineData(75, 266.0912, 3000, 74.9844, 87.0418)]
+    [InlineData(100, 473.3958, 6000, 99.9049, 136.1390)]
+    [InlineData(120, 682.1896, 1000, 119.9817, 125.9507)]
+    [InlineData(150, 1067.3596, 3000, 149.8757, 173.9755)]
+    [InlineData(180, 1539.5324, 6000, 179.4507, 244.5350)]
+    [InlineData(200, 1903.0622, 1000, 199.9159, 209.8615)]
+    [InlineData(250, 2984.6814, 3000, 249.4312, 289.5395)]
+    [InlineData(300, 4317.6247, 6000, 297.5208, 405.4275)]
+    public void Conversions_GlidersSpeeds_AsTheFormulas(double calibratedKmh, double impactPa, double altitudeM, double equivalentKmh, double trueKmh)
+    {
+        var air = StandardAirAt(altitudeM);
+        Assert.True(AirspeedConversion.TryImpactPressure(new CalibratedAirspeed(calibratedKmh / 3.6), out var actualPa));
+        Assert.True(AirspeedConversion.TryTrue(actualPa, air, out var trueAirspeed, out _));
+        Close.Absolute(impactPa, actualPa, 1e-4);
+        Close.Absolute(trueKmh, trueAirspeed.Mps * 3.6, 1e-4);
+        Close.Absolute(equivalentKmh, AirspeedConversion.ToEquivalent(trueAirspeed, air).Mps * 3.6, 1e-4);
+    }
+
     [Theory]
     [InlineData(-0.01)]
     [InlineData(double.NaN)]

@@ -60,6 +60,29 @@ public sealed class AltimeterTests
         Close.Absolute(expectedK, staticK, 1e-8);
     }
 
+    /// <summary>Same tests, with true airspeed: T = Tm - K V²/(2 cp), cp = 3.5 R. m/s, sensed K, recovery factor, static K.</summary>
+    [Theory]
+    [InlineData(300 * 0.44704, (59 + 459.67) * 5 / 9, 0.8, (46.11 + 459.67) * 5 / 9)]
+    [InlineData(1000 / 3.6, (59 + 459.67) * 5 / 9, 0.95, (-6.664535 + 459.67) * 5 / 9)]
+    public void TryStatic_PublishedExampleAtAirspeed_Agrees(double trueMps, double sensedK, double recovery, double expectedK)
+    {
+        var mach = trueMps / Math.Sqrt(1.4 * 287.05287 * expectedK);
+        Assert.True(TemperatureProbe.TryStatic(sensedK, recovery, mach, out var staticK));
+        Close.Absolute(expectedK, staticK, 1e-3);
+    }
+
+    [Theory] // the full rise V²/(2 cp), cp = 1004.685 J/(kg K); km/h, K
+    [InlineData(100, 0.38400)]
+    [InlineData(150, 0.86401)]
+    [InlineData(200, 1.53601)]
+    [InlineData(250, 2.40002)]
+    public void TryStatic_GlidersSpeed_FullRise(double kmh, double riseK)
+    {
+        var mach = kmh / 3.6 / Math.Sqrt(1.4 * 287.05287 * 280);
+        Assert.True(TemperatureProbe.TryStatic(280 + riseK, 1, mach, out var staticK));
+        Close.Absolute(280, staticK, 1e-4);
+    }
+
     [Theory]
     [InlineData(288, 1.1, 0.1)]
     [InlineData(-1, 0.9, 0.1)]

@@ -40,6 +40,8 @@ public sealed class MoistAirTests
     [InlineData(1000, 40, 0.20, 7383.4600, 1.1062946)]
     [InlineData(1013.25, 20, 0.50, 2338.8037, 1.1988980)]
     [InlineData(1030, 40, 1.00, 7383.4600, 1.1148267)]
+    [InlineData(1030, -30, 0.50, 38.0157, 1.4756631)]
+    [InlineData(1013.25, 15, 0, 1705.4478, 1.2250463)]
     public void Density_PsychroLib_CrossCheck(double hectopascals, double celsius, double humidity, double saturationPa, double density)
     {
         var overWater = Math.Min(1, humidity * saturationPa / VapourPressure.OverWaterPa(celsius + 273.15));

@@ -47,6 +47,25 @@ public sealed class StandardAtmosphereTests
         Close.Absolute(speedOfSoundMps, state.SpeedOfSoundMps, 1e-3);
     }
 
+    [Fact] // Mechanical Engineers' Handbook, volume 4, table 6: geometric 8000 m; four printed digits
+    public void TryAt_GeometricAltitude_AsTabulated()
+    {
+        Assert.True(StandardAtmosphere.TryAt(GeometricHeight.ToGeopotentialM(8000), out var state));
+        Close.Absolute(236.22, state.TemperatureK, 5e-3);
+        Close.Relative(0.3565e5, state.PressurePa, 1.5e-4);
+        Close.Relative(0.5258, state.DensityKgPerM3, 1e-4);
+    }
+
+    [Theory] // fxsolver.com table of the layers' base pressures, Pa
+    [InlineData(11_000, 22632.10)]
+    [InlineData(20_000, 5474.89)]
+    [InlineData(32_000, 868.02)]
+    public void TryAt_LayerBase_Pressure(double altitudeM, double pressurePa)
+    {
+        Assert.True(StandardAtmosphere.TryAt(altitudeM, out var state));
+        Close.Relative(pressurePa, state.PressurePa, 6e-6);
+    }
+
     [Theory] // NASA RP-1046; inHg 3386.389 Pa, psf 47.880259 Pa
     [InlineData(5000, 24.8959 * 3386.389)]
     [InlineData(8000, 22.225 * 3386.389)]
