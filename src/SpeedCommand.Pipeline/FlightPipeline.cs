@@ -16,7 +16,7 @@ public sealed class FlightPipeline
     private readonly AirDataStage _airData;
     private readonly LoadStage _load = new();
     private readonly HydrostaticHeight _height = new();
-    private readonly IEnergyEstimator _energy = new EnergyHeightFilter();
+    private readonly IEnergyEstimator _energy;
     private readonly EventFaults _events = new();
     private readonly PictureStage _pictures;
     private readonly List<StreamHealth> _streams = [];
@@ -26,9 +26,11 @@ public sealed class FlightPipeline
     /// <summary>Makes a pipeline for one flight.</summary>
     /// <param name="settings">The glider and the pilot's choices.</param>
     /// <param name="sink">Takes the pictures.</param>
-    public FlightPipeline(FlightSettings settings, IPictureSink sink)
+    /// <param name="energy">The climb estimator; null for the usual one.</param>
+    public FlightPipeline(FlightSettings settings, IPictureSink sink, IEnergyEstimator? energy = null)
     {
         ArgumentNullException.ThrowIfNull(settings);
+        _energy = energy ?? new EnergyHeightFilter();
         _sink = sink;
         _airData = new AirDataStage(settings);
         _pictures = new PictureStage(settings, _airData, _load, _energy, _events);

@@ -12,7 +12,7 @@ internal sealed class AirDataStage(FlightSettings settings)
     private TimedValue _impactPa;
     private TimedValue _sensedTemperatureK;
     private TimedValue _humidity;
-    private double _trueAirspeedMps = double.NaN;
+    private double _mach;
     private double _offsetK = settings.TemperatureOffsetK;
 
     /// <summary>The air at the newest static pressure; meaningful while <see cref="IsStaticFresh"/>.</summary>
@@ -53,19 +53,16 @@ internal sealed class AirDataStage(FlightSettings settings)
         _impactPa.Set(timeUs, impactPa);
         if (!IsStaticFresh(timeUs))
         {
-            _trueAirspeedMps = double.NaN;
             return double.NaN;
         }
 
         var air = Air;
-        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed, out _))
+        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed, out _mach))
         {
-            _trueAirspeedMps = airspeed.Mps;
             return airspeed.Mps * airspeed.Mps / (2 * StandardAtmosphere.StandardGravityMps2);
         }
 
         // Noise about zero at rest: kinetic height goes on through zero, an airspeed cannot.
-        _trueAirspeedMps = double.NaN;
         return impactPa / (air.DensityKgPerM3 * StandardAtmosphere.StandardGravityMps2);
     }
 
@@ -113,11 +110,7 @@ internal sealed class AirDataStage(FlightSettings settings)
         return true;
     }
 
-    /// <summary>The probe senses part of the heating the air undergoes when it is stopped: T = T_sensed − K V²/(2 c_p).</summary>
-    private double StaticTemperatureK()
-    {
-        const double SpecificHeat = 3.5 * StandardAtmosphere.GasConstantDryAir;
-        var v = double.IsNaN(_trueAirspeedMps) ? 0 : _trueAirspeedMps;
-        return _sensedTemperatureK.Value - settings.ThermometerRecovery * v * v / (2 * SpecificHeat);
-    }
+    /// <summary>The probe senses part of the heating the air undergoes when it is stopped.</summary>
+    private double StaticTemperatureK() =>
+        TemperatureProbe.TryStatic(_sensedTemperatureK.Value, settings.ThermometerRecovery, _mach, out var staticK) ? staticK : double.NaN;
 }

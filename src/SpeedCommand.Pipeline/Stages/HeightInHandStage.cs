@@ -1,4 +1,6 @@
 using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.HeightInHand;
+using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Pipeline.Stages;
@@ -9,33 +11,14 @@ internal readonly record struct HeightInHandGauges(Gauge EnduranceS, Gauge Range
     public static readonly HeightInHandGauges Blank = new(Gauge.Blank, Gauge.Blank);
 }
 
-/// <summary>
-/// Height in hand at the present density. True height is the pressure difference over the actual density; at constant
-/// equivalent airspeed the sink goes with 1/√ρ, so that the density midway serves for the whole descent.
-/// </summary>
-internal sealed class HeightInHandStage(FlightSettings settings)
+/// <summary>Air in, height in hand out. Without the wind, range is over the air.</summary>
+internal sealed class HeightInHandStage(FlightSettings settings, SpeedTargets targets)
 {
-    public HeightInHandGauges At(in Air air, in Targets targets, double ageS)
+    public HeightInHandGauges At(in Air air, double ageS)
     {
-        if (!targets.MinSinkStill.IsKnown || !targets.BestGlideStill.Speed.IsKnown
-            || !StandardAtmosphere.TryAt(settings.SafetyHeightM, out var floor)
-            || !StandardAtmosphere.TryAt(air.PressureAltitudeM, out var here))
-        {
-            return HeightInHandGauges.Blank;
-        }
-
-        var pressureHeightM = air.PressureAltitudeM - settings.SafetyHeightM;
-        if (pressureHeightM <= 0)
-        {
-            return new HeightInHandGauges(new Gauge(0, double.NaN, ageS), new Gauge(0, double.NaN, ageS));
-        }
-
-        // A warm column is taller than the standard one between the same pressures, in proportion to its temperature.
-        var heightM = pressureHeightM * air.TemperatureK / here.TemperatureK;
-        var midwayDensityRatio = 0.5 * (1 + floor.DensityKgPerM3 / here.DensityKgPerM3);
-        var sinkMidwayMps = targets.MinSinkStill.SinkMps / Math.Sqrt(midwayDensityRatio);
-        return new HeightInHandGauges(
-            new Gauge(heightM / sinkMidwayMps, double.NaN, ageS),
-            new Gauge(heightM * targets.BestGlideStill.GlideRatio, double.NaN, ageS));
+        var loading = new Loading(settings.MassKg, 1, settings.BugsFraction);
+        return LiveHeight.TryEstimate(targets, air, loading, settings.SafetyHeightM, headwindMps: 0, out var height)
+            ? new HeightInHandGauges(new Gauge(height.EnduranceS, double.NaN, ageS), new Gauge(height.RangeM, double.NaN, ageS))
+            : HeightInHandGauges.Blank;
     }
 }

@@ -1,80 +1,124 @@
 using SpeedCommand.Estimation.Energy;
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Pipeline.Stages;
 
 /// <summary>Puts one picture together from what the other stages know at that moment.</summary>
-internal sealed class PictureStage(
-    FlightSettings settings, AirDataStage airData, LoadStage load, IEnergyEstimator energy, EventFaults events)
+internal sealed class PictureStage
 {
     private const double AverageSpanS = 30;
 
     /// <summary>Handbook polars are measured to about this share of the sink (common practice: "a few per cent").</summary>
     private const double PolarUncertainty = 0.05;
 
-    private readonly TargetStage _targets = new(settings);
     private readonly PhaseStage _phase = new();
-    private readonly HeightInHandStage _heightInHand = new(settings);
     private readonly AverageClimb _average = new(AverageSpanS, PipelineBounds.PicturePeriodUs * 1e-6);
+    private readonly TargetStage _targets;
+    private readonly HeightInHandStage _heightInHand;
+    private readonly FlightSettings _settings;
+    private readonly AirDataStage _airData;
+    private readonly LoadStage _load;
+    private readonly IEnergyEstimator _energy;
+    private readonly EventFaults _events;
 
+    public PictureStage(FlightSettings settings, AirDataStage airData, LoadStage load, IEnergyEstimator energy, EventFaults events)
+    {
+        _settings = settings;
+        _airData = airData;
+        _load = load;
+        _energy = energy;
+        _events = events;
+        var targets = new SpeedTargets(settings.Glider, settings.StallMargin);
+        _targets = new TargetStage(settings, targets);
+        _heightInHand = new HeightInHandStage(settings, targets);
+    }
+
+    /// <summary>What is fresh decides what is computed; the rest stays blank.</summary>
     public CockpitPicture MakeAt(long nowUs)
     {
-        var isStatic = airData.IsStaticFresh(nowUs);
-        var isMoving = airData.TryAirspeeds(nowUs, out var indicated, out var trueAirspeed);
-        var isComplete = isStatic && airData.IsAirspeedFresh(nowUs);
-        var air = airData.Air;
-        var staticAgeS = airData.StaticAgeS(nowUs);
-        var ageS = isComplete ? Math.Max(staticAgeS, airData.AirspeedAgeS(nowUs)) : double.NaN;
-
-        var estimate = isComplete ? energy.EstimateAt(nowUs) : EnergyEstimate.Unknown;
-        var average = _average.Add(estimate.EnergyHeightM);
-        var climb = estimate.IsKnown ? new Gauge(estimate.ClimbMps, estimate.ClimbSigmaMps, ageS) : Gauge.Blank;
-        var netto = isMoving ? Netto(nowUs, climb, trueAirspeed, air) : Gauge.Blank;
-        var targets = Targets.Blank;
+        var blank = CockpitPicture.Blank(nowUs, Faults.None) with { ExpectedClimbMps = _settings.ExpectedClimbMps };
+        var picture = _airData.IsStaticFresh(nowUs) ? WithAir(blank, nowUs) : blank;
+        var isComplete = _airData.IsStaticFresh(nowUs) && _airData.IsAirspeedFresh(nowUs);
         if (isComplete)
         {
-            targets = _targets.At(new TargetInputs(air, load.Steady(nowUs), netto, ageS));
+            picture = WithTargets(WithMotion(picture, nowUs), nowUs);
         }
         else
         {
+            _average.Add(double.NaN);
             _targets.Reset();
         }
 
-        var indicatedMps = isMoving ? indicated.Mps : double.NaN;
-        var phase = _phase.Judge(new PhaseEvidence(
-            load.IsMeasured(nowUs), load.Steady(nowUs), climb.Value, indicatedMps, targets.MinSink.Value));
-        var inHand = isComplete ? _heightInHand.At(air, targets, staticAgeS) : HeightInHandGauges.Blank;
-        return new CockpitPicture
+        var phase = _phase.Judge(new PhaseEvidence(_load.IsMeasured(nowUs), _load.Steady(nowUs),
+            picture.ClimbMps.Value, picture.IndicatedAirspeedMps.Value, picture.MinSinkIndicatedMps.Value));
+        return picture with
         {
-            TimeUs = nowUs,
             Phase = phase,
-            PressureAltitudeM = isStatic ? new Gauge(air.PressureAltitudeM, double.NaN, staticAgeS) : Gauge.Blank,
-            DensityAltitudeM = isStatic ? new Gauge(air.DensityAltitudeM, double.NaN, staticAgeS) : Gauge.Blank,
-            TemperatureK = isStatic ? Temperature(nowUs, air, staticAgeS) : Gauge.Blank,
+            HoldIndicatedMps = phase == FlightPhase.Climbing ? picture.MinSinkIndicatedMps : picture.SpeedToFlyIndicatedMps,
+            Faults = FaultsAt(nowUs, picture),
+        };
+    }
+
+    private CockpitPicture WithAir(in CockpitPicture picture, long nowUs)
+    {
+        var air = _airData.Air;
+        var ageS = _airData.StaticAgeS(nowUs);
+        var temperatureAgeS = air.TemperatureSource == TemperatureSource.Measured ? _airData.TemperatureAgeS(nowUs) : ageS;
+        return picture with
+        {
+            PressureAltitudeM = new Gauge(air.PressureAltitudeM, double.NaN, ageS),
+            DensityAltitudeM = new Gauge(air.DensityAltitudeM, double.NaN, ageS),
+            TemperatureK = new Gauge(air.TemperatureK, double.NaN, temperatureAgeS),
             TemperatureSource = air.TemperatureSource,
-            IndicatedAirspeedMps = isMoving ? new Gauge(indicated.Mps, double.NaN, ageS) : Gauge.Blank,
-            TrueAirspeedMps = isMoving ? new Gauge(trueAirspeed.Mps, double.NaN, ageS) : Gauge.Blank,
+        };
+    }
+
+    private CockpitPicture WithMotion(in CockpitPicture picture, long nowUs)
+    {
+        var ageS = AgeS(nowUs);
+        var estimate = _energy.EstimateAt(nowUs);
+        var average = _average.Add(estimate.EnergyHeightM);
+        var climb = estimate.IsKnown ? new Gauge(estimate.ClimbMps, estimate.ClimbSigmaMps, ageS) : Gauge.Blank;
+        var moved = picture with
+        {
             ClimbMps = climb,
             AverageClimbMps = double.IsNaN(average) ? Gauge.Blank : new Gauge(average, double.NaN, ageS),
-            NettoMps = netto,
+        };
+        return _airData.TryAirspeeds(nowUs, out var indicated, out var trueAirspeed)
+            ? moved with
+            {
+                IndicatedAirspeedMps = new Gauge(indicated.Mps, double.NaN, ageS),
+                TrueAirspeedMps = new Gauge(trueAirspeed.Mps, double.NaN, ageS),
+                NettoMps = Netto(nowUs, climb, trueAirspeed, _airData.Air),
+            }
+            : moved;
+    }
+
+    private CockpitPicture WithTargets(in CockpitPicture picture, long nowUs)
+    {
+        var targets = _targets.At(new TargetInputs(_airData.Air, _load.Steady(nowUs), picture.NettoMps, AgeS(nowUs)));
+        var inHand = _heightInHand.At(_airData.Air, _airData.StaticAgeS(nowUs));
+        return picture with
+        {
             MinSinkIndicatedMps = targets.MinSink,
             BestGlideIndicatedMps = targets.BestGlide,
             SpeedToFlyIndicatedMps = targets.SpeedToFly,
-            HoldIndicatedMps = phase == FlightPhase.Climbing ? targets.MinSink : targets.SpeedToFly,
             LimitedBy = targets.LimitedBy,
-            ExpectedClimbMps = settings.ExpectedClimbMps,
             EnduranceS = inHand.EnduranceS,
             RangeM = inHand.RangeM,
-            Faults = FaultsAt(nowUs, isStatic, netto.IsKnown && !targets.SpeedToFly.IsKnown),
         };
     }
+
+    /// <summary>A number that rests on both inputs is as old as the older of them.</summary>
+    private double AgeS(long nowUs) => Math.Max(_airData.StaticAgeS(nowUs), _airData.AirspeedAgeS(nowUs));
 
     /// <summary>Netto is the climb with the glider's own sink added back; its doubt is the climb's and the polar's together.</summary>
     private Gauge Netto(long nowUs, in Gauge climb, TrueAirspeed airspeed, in Air air)
     {
-        if (!climb.IsKnown || !_targets.TrySink(airspeed, air, Math.Max(0, load.Present(nowUs)), out var sinkMps))
+        if (!climb.IsKnown || !_targets.TrySink(airspeed, air, Math.Max(0, _load.Present(nowUs)), out var sinkMps))
         {
             return Gauge.Blank;
         }
@@ -83,16 +127,13 @@ internal sealed class PictureStage(
         return climb with { Value = climb.Value + sinkMps, Sigma = Math.Sqrt(climb.Sigma * climb.Sigma + polarSigma * polarSigma) };
     }
 
-    private Gauge Temperature(long nowUs, in Air air, double staticAgeS) =>
-        new(air.TemperatureK, double.NaN, air.TemperatureSource == TemperatureSource.Measured ? airData.TemperatureAgeS(nowUs) : staticAgeS);
-
-    private Faults FaultsAt(long nowUs, bool isStatic, bool isWithoutLimits)
+    private Faults FaultsAt(long nowUs, in CockpitPicture picture)
     {
-        var faults = events.At(nowUs);
-        faults |= isStatic ? Faults.None : Faults.StaticSilent;
-        faults |= airData.IsAirspeedFresh(nowUs) ? Faults.None : Faults.AirspeedSilent;
-        faults |= airData.IsTemperatureFresh(nowUs) ? Faults.None : Faults.TemperatureSilent;
-        faults |= isWithoutLimits ? Faults.NoLimits : Faults.None;
+        var faults = _events.At(nowUs);
+        faults |= _airData.IsStaticFresh(nowUs) ? Faults.None : Faults.StaticSilent;
+        faults |= _airData.IsAirspeedFresh(nowUs) ? Faults.None : Faults.AirspeedSilent;
+        faults |= _airData.IsTemperatureFresh(nowUs) ? Faults.None : Faults.TemperatureSilent;
+        faults |= picture.NettoMps.IsKnown && !picture.SpeedToFlyIndicatedMps.IsKnown ? Faults.NoLimits : Faults.None;
         return faults;
     }
 }

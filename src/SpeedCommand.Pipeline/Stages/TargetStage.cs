@@ -13,24 +13,20 @@ namespace SpeedCommand.Pipeline.Stages;
 internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, double AgeS);
 
 /// <summary>The speeds to fly and how they came about.</summary>
-internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy, TargetSpeed MinSinkStill, GlideTarget BestGlideStill)
-{
-    public static readonly Targets Blank = new(Gauge.Blank, Gauge.Blank, Gauge.Blank, LimitedBy.None, default, default);
-}
+internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy);
 
 /// <summary>Air, load and netto in, speeds to fly out.</summary>
-internal sealed class TargetStage(FlightSettings settings)
+internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
 {
     /// <summary>A speed command that follows every gust is chased in vain; the air a glider flies through lasts seconds.</summary>
     private const double NettoSmoothingS = 2;
 
-    private readonly SpeedTargets _targets = new(settings.Glider, settings.StallMargin);
     private double _smoothNettoMps = double.NaN;
 
     public Loading LoadingAt(double loadFactor) => new(settings.MassKg, loadFactor, settings.BugsFraction);
 
     public bool TrySink(TrueAirspeed airspeed, in Air air, double loadFactor, out double sinkMps) =>
-        _targets.TrySink(airspeed, air, LoadingAt(loadFactor), out sinkMps);
+        targets.TrySink(airspeed, air, LoadingAt(loadFactor), out sinkMps);
 
     /// <summary>Forgets the air flown through, as after a silence.</summary>
     public void Reset() => _smoothNettoMps = double.NaN;
@@ -39,20 +35,18 @@ internal sealed class TargetStage(FlightSettings settings)
     public Targets At(in TargetInputs inputs)
     {
         var straight = LoadingAt(1);
-        var minSink = _targets.MinSink(inputs.Air, LoadingAt(Math.Max(1, inputs.SteadyLoad)));
-        var bestGlide = _targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
+        var minSink = targets.MinSink(inputs.Air, LoadingAt(Math.Max(1, inputs.SteadyLoad)));
+        var bestGlide = targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
         var netto = SmoothNetto(inputs.Netto);
         var speedToFly = double.IsNaN(netto)
             ? default
-            : _targets.SpeedToFly(inputs.Air, straight, settings.ExpectedClimbMps, netto);
+            : targets.SpeedToFly(inputs.Air, straight, settings.ExpectedClimbMps, netto);
         var sigma = Math.Abs(speedToFly.AirSensitivity) * inputs.Netto.Sigma;
         return new Targets(
             Show(minSink, 0, inputs.AgeS),
             Show(bestGlide.Speed, 0, inputs.AgeS),
             Show(speedToFly.Speed, sigma, inputs.AgeS),
-            speedToFly.LimitedBy,
-            minSink,
-            bestGlide);
+            speedToFly.LimitedBy);
     }
 
     private static Gauge Show(in TargetSpeed speed, double sigma, double ageS) =>

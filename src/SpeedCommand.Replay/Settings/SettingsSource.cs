@@ -46,6 +46,9 @@ public sealed class SettingsSource
     /// <summary>Whether something is wrong that is more than a warning.</summary>
     public bool HasErrors => _problems.Exists(problem => !problem.IsWarning);
 
+    /// <summary>Every path asked for so far: all the settings there are, once everything was read.</summary>
+    public IReadOnlyCollection<string> AskedPaths => _asked;
+
     /// <summary>A setting as it was written.</summary>
     /// <param name="path">The setting's path, for example "recorder.folder".</param>
     /// <returns>The text and where it stands, or null when nothing sets it.</returns>
@@ -205,27 +208,8 @@ public sealed class SettingsSource
     public void Report(IEnumerable<JsonProblem> problems) => _problems.AddRange(problems);
 
     /// <summary>Reports every setting that nobody asked for: a misspelt key must not be ignored in silence.</summary>
-    public void ReportUnknown()
-    {
-        var environmentNames = _asked.Select(EnvironmentName).ToHashSet(StringComparer.Ordinal);
-        foreach (var path in _commandLine.Keys.Where(path => !_asked.Contains(path)))
-        {
-            _problems.Add(new JsonProblem("command line", 0, path, Unknown(path)));
-        }
-
-        foreach (var name in _environment.Keys.Where(name => name.StartsWith(EnvironmentPrefix, StringComparison.Ordinal)))
-        {
-            if (!environmentNames.Contains(name))
-            {
-                _problems.Add(new JsonProblem($"environment {name}", 0, "", "there is no such setting"));
-            }
-        }
-
-        if (_top is not null)
-        {
-            ReportUnknownIn(_top, "");
-        }
-    }
+    public void ReportUnknown() =>
+        _problems.AddRange(new UnknownSettings(_asked, File).Among(_commandLine.Keys, _environment.Keys, _top));
 
     /// <summary>The environment variable that overrides a path.</summary>
     /// <param name="path">For example "recorder.maxSize".</param>
@@ -244,38 +228,6 @@ public sealed class SettingsSource
         }
 
         return name.ToString();
-    }
-
-    private void ReportUnknownIn(JsonPlace place, string path)
-    {
-        foreach (var (key, value) in place.Members)
-        {
-            var full = path.Length == 0 ? key : $"{path}.{key}";
-            var isGroup = _asked.Any(asked => asked.StartsWith(full + ".", StringComparison.Ordinal));
-            if (value.Kind == JsonPlaceKind.Object && isGroup)
-            {
-                ReportUnknownIn(value, full);
-            }
-            else if (value.Kind == JsonPlaceKind.Array && _asked.Contains(full))
-            {
-                foreach (var element in value.Elements.Where(element => element.Find("name") is not null))
-                {
-                    ReportUnknownIn(element, $"{full}.{element.Find("name")!.Text}");
-                }
-            }
-            else if (!_asked.Contains(full))
-            {
-                Report(value, Unknown(full));
-            }
-        }
-    }
-
-    private string Unknown(string path)
-    {
-        var parent = path.LastIndexOf('.') is var dot and >= 0 ? path[..(dot + 1)] : "";
-        var siblings = _asked.Where(asked => asked.StartsWith(parent, StringComparison.Ordinal))
-            .Select(asked => asked[parent.Length..].Split('.')[0]).Distinct().Order(StringComparer.Ordinal);
-        return $"there is no such setting; expected one of {string.Join(", ", siblings)}";
     }
 
     private void Report(JsonPlace place, string message) => _problems.Add(new JsonProblem(File, place.Line, place.Path, message));

@@ -5,8 +5,8 @@ using SpeedCommand.Simulation.Gliding;
 namespace SpeedCommand.Simulation.Sensors;
 
 /// <summary>
-/// From the glider's motion to what its ports feel. The position error sits in the impact pressure, which reads what the
-/// pilot's indicator reads; the static port of the instrument is taken as true.
+/// From the glider's motion to what its ports feel. The instrument's own ports are taken as true; the position error is
+/// that of the pilot's indicator, and of boards that send indicated airspeed.
 /// </summary>
 /// <param name="correction">The glider's position error.</param>
 public sealed class AirData(AirspeedCorrection correction)
@@ -43,9 +43,8 @@ public sealed class AirData(AirspeedCorrection correction)
     {
         var air = flow.Air;
         var felt = Math.Max(0, state.AirspeedMps + gustMps);
-        var indicated = IndicatedOf(felt, air);
-        AirspeedConversion.TryImpactPressure(new CalibratedAirspeed(indicated), out var impactPa);
-        return new SensedAir(air.PressurePa, impactPa, indicated, air.TemperatureK, felt * felt / (2 * HeatCapacity),
+        AirspeedConversion.TryImpactPressure(new TrueAirspeed(felt), air, out var impactPa);
+        return new SensedAir(air.PressurePa, impactPa, IndicatedOf(felt, air), air.TemperatureK, felt * felt / (2 * HeatCapacity),
             double.IsNaN(relativeHumidity) ? 0 : relativeHumidity, flow.LoadFactor, state.BankRad);
     }
 }

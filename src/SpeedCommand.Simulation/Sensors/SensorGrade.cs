@@ -45,8 +45,8 @@ public static class SensorGrades
         };
     }
 
-    // Half a metre of thin tube with a small volume to a good port; metres of it, with a water trap, to a bad one.
-    private static readonly double[] Pneumatic = [0.02, 0.05, 0.12];
+    // A metre or two of thin tube and a small volume. The tube is the glider's, whatever board hangs on it.
+    private static readonly double[] Pneumatic = [0.05, 0.05, 0.05];
     private static readonly double[] NoLag = [0, 0, 0];
     private static readonly double[] Jitter = [0.0002, 0.001, 0.003];
     private static readonly double[] ClockError = [10e-6, 50e-6, 200e-6];

@@ -11,6 +11,7 @@ internal static class CommandTree
         CheckCommand.Create(),
         ReplayCommand.Create(),
         TargetsCommand.Create(),
+        DescentCommand.Create(),
     };
 
     /// <summary>Runs a command line; a fault in it is told in one line, without a page of help.</summary>

@@ -16,10 +16,10 @@ internal static class TargetsJson
             WriteAir(json, answer.Conditions.Air);
             WriteSpeed(json, "minSink", answer.MinSink, static (_, _) => { }, answer);
             WriteSpeed(json, "bestGlide", answer.BestGlide.Speed,
-                static (json, answer) => Number(json, "glideRatio", answer.BestGlide.GlideRatio), answer);
+                static (json, answer) => JsonNumbers.Write(json, "glideRatio", answer.BestGlide.GlideRatio), answer);
             WriteSpeed(json, "speedToFly", answer.SpeedToFly.Speed, static (json, answer) =>
             {
-                Number(json, "averageSpeedMps", answer.SpeedToFly.AverageSpeedMps);
+                JsonNumbers.Write(json, "averageSpeedMps", answer.SpeedToFly.AverageSpeedMps);
                 json.WriteString("limitedBy", LimitWords.Of(answer.SpeedToFly.LimitedBy));
             }, answer);
             json.WriteEndObject();
@@ -31,12 +31,12 @@ internal static class TargetsJson
     private static void WriteAir(Utf8JsonWriter json, in Air air)
     {
         json.WriteStartObject("air");
-        Number(json, "pressureAltitudeM", air.PressureAltitudeM);
-        Number(json, "pressurePa", air.PressurePa);
-        Number(json, "temperatureC", air.TemperatureK - 273.15);
+        JsonNumbers.Write(json, "pressureAltitudeM", air.PressureAltitudeM);
+        JsonNumbers.Write(json, "pressurePa", air.PressurePa);
+        JsonNumbers.Write(json, "temperatureC", air.TemperatureK - 273.15);
         json.WriteString("temperatureSource", air.TemperatureSource == TemperatureSource.Measured ? "measured" : "standard");
-        Number(json, "densityKgPerM3", air.DensityKgPerM3);
-        Number(json, "densityAltitudeM", air.DensityAltitudeM);
+        JsonNumbers.Write(json, "densityKgPerM3", air.DensityKgPerM3);
+        JsonNumbers.Write(json, "densityAltitudeM", air.DensityAltitudeM);
         json.WriteEndObject();
     }
 
@@ -49,24 +49,12 @@ internal static class TargetsJson
         }
 
         json.WriteStartObject(name);
-        Number(json, "liftCoefficient", speed.LiftCoefficient);
-        Number(json, "trueAirspeedMps", speed.TrueAirspeedMps);
-        Number(json, "equivalentAirspeedMps", speed.EquivalentAirspeedMps);
-        Number(json, "indicatedAirspeedMps", speed.IndicatedAirspeedMps);
-        Number(json, "sinkMps", speed.SinkMps);
+        JsonNumbers.Write(json, "liftCoefficient", speed.LiftCoefficient);
+        JsonNumbers.Write(json, "trueAirspeedMps", speed.TrueAirspeedMps);
+        JsonNumbers.Write(json, "equivalentAirspeedMps", speed.EquivalentAirspeedMps);
+        JsonNumbers.Write(json, "indicatedAirspeedMps", speed.IndicatedAirspeedMps);
+        JsonNumbers.Write(json, "sinkMps", speed.SinkMps);
         rest(json, answer);
         json.WriteEndObject();
-    }
-
-    private static void Number(Utf8JsonWriter json, string name, double value)
-    {
-        if (double.IsFinite(value))
-        {
-            json.WriteNumber(name, value);
-        }
-        else
-        {
-            json.WriteNull(name);
-        }
     }
 }

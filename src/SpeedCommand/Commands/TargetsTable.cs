@@ -1,7 +1,6 @@
 using System.Globalization;
 using System.Text;
 using SpeedCommand.Displays.Units;
-using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
 
 namespace SpeedCommand.Commands;
@@ -11,22 +10,13 @@ internal static class TargetsTable
 {
     public static string Write(TargetsAnswer answer, DisplayUnits units)
     {
-        var conditions = answer.Conditions;
-        var air = conditions.Air;
         var text = new StringBuilder();
-        text.Append(CultureInfo.InvariantCulture,
-            $"{conditions.Glider.Name}, {conditions.Loading.MassKg:F0} kg, bank {conditions.BankRad * 180 / Math.PI:F0} deg, bugs {conditions.Loading.BugsFraction:P0}\n");
-        text.Append(CultureInfo.InvariantCulture,
-            $"pressure altitude {Show(air.PressureAltitudeM, units.Height, 0)}, density altitude {Show(air.DensityAltitudeM, units.Height, 0)}, ");
-        text.Append(CultureInfo.InvariantCulture,
-            $"{Show(air.TemperatureK, units.Temperature, 1)} ({(air.TemperatureSource == TemperatureSource.Measured ? "measured" : "standard")})\n");
-        text.Append(CultureInfo.InvariantCulture,
-            $"expected climb {Show(conditions.ClimbMps, units.Vertical, 1)}, air {Show(conditions.AirMps, units.Vertical, 1)}, headwind {Show(conditions.HeadwindMps, units.Speed, 0)}\n\n");
+        text.Append(ConditionsHeading.Write(answer.Conditions, units, isAltitudeShown: true)).Append('\n');
         text.Append(CultureInfo.InvariantCulture,
             $"{"",-14}{"indicated",10}{"true",10}{"sink",10}\n{"",-14}{units.Speed.Symbol,10}{units.Speed.Symbol,10}{units.Vertical.Symbol,10}\n");
         AppendRow(text, "minimum sink", answer.MinSink, units, "");
         AppendRow(text, "best glide", answer.BestGlide.Speed, units,
-            string.Create(CultureInfo.InvariantCulture, $"{answer.BestGlide.GlideRatio:F1} : 1{(conditions.HeadwindMps == 0 ? "" : " over the ground")}"));
+            string.Create(CultureInfo.InvariantCulture, $"{answer.BestGlide.GlideRatio:F1} : 1{(answer.Conditions.HeadwindMps == 0 ? "" : " over the ground")}"));
         AppendRow(text, "speed to fly", answer.SpeedToFly.Speed, units, SpeedToFlyNote(answer, units));
         text.Append("\nAdvisory only: the flight manual and the placards prevail.\n");
         return text.ToString();

@@ -1,0 +1,19 @@
+using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.HeightInHand;
+
+namespace SpeedCommand.Replay.Conditions;
+
+/// <summary>The air above and below that the options describe: as much warmer than standard as where they were given, equally humid.</summary>
+public sealed class ConditionColumn(FlightConditions conditions) : IAirColumn
+{
+    /// <inheritdoc/>
+    public bool TryAt(double pressureAltitudeM, out Air air)
+    {
+        air = default;
+        return StandardAtmosphere.TryAt(pressureAltitudeM, out var standard)
+            && (double.IsNaN(conditions.Air.RelativeHumidity)
+                ? Air.TryStandard(standard.PressurePa, conditions.TemperatureOffsetK, out air, out _)
+                : Air.TryMeasured(standard.PressurePa, standard.TemperatureK + conditions.TemperatureOffsetK,
+                    conditions.Air.RelativeHumidity, out air, out _));
+    }
+}

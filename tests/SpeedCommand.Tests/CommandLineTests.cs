@@ -1,0 +1,144 @@
+using System.Diagnostics;
+using System.Runtime.InteropServices;
+using System.Text.Json;
+
+namespace SpeedCommand.Tests;
+
+/// <summary>The program as a user starts it: exit statuses, messages, signals.</summary>
+public sealed partial class CommandLineTests : IDisposable
+{
+    private readonly DirectoryInfo _folder = Directory.CreateTempSubdirectory();
+
+    public void Dispose() => _folder.Delete(recursive: true);
+
+    private sealed record Outcome(int ExitStatus, string Output, string Error);
+
+    private Process Start(params string[] args)
+    {
+        var start = new ProcessStartInfo("dotnet") { RedirectStandardOutput = true, RedirectStandardError = true, RedirectStandardInput = true };
+        start.ArgumentList.Add(Path.Combine(AppContext.BaseDirectory, "speedcommand.dll"));
+        foreach (var arg in args)
+        {
+            start.ArgumentList.Add(arg);
+        }
+
+        start.Environment["XDG_STATE_HOME"] = _folder.FullName;
+        start.Environment["XDG_CONFIG_HOME"] = _folder.FullName;
+        start.Environment["LANG"] = "de_DE.UTF-8";
+        return Process.Start(start)!;
+    }
+
+    private async Task<Outcome> RunAsync(params string[] args)
+    {
+        using var process = Start(args);
+        var output = process.StandardOutput.ReadToEndAsync();
+        var error = process.StandardError.ReadToEndAsync();
+        await process.WaitForExitAsync();
+        return new Outcome(process.ExitCode, await output, await error);
+    }
+
+    private string Save(string name, string text)
+    {
+        var path = Path.Combine(_folder.FullName, name);
+        File.WriteAllText(path, text);
+        return path;
+    }
+
+    [Fact]
+    public async Task Targets_AgreeWithTheClosedForm_OfTheDragPolar()
+    {
+        // Minimum sink at CL = (K1 + √(K1² + 12 K2 CD0)) / 2 K2 and V = √(2 m g / ρ S CL); best glide at CL = √(CD0 / K2) with
+        // L/D = 1 / (K1 + 2 √(CD0 K2)); speed to fly from 2 A V⁴ − MC V − 2 B = 0 (textbook results), at ISA sea level.
+        const double Weight = 340 * 9.80665, Cd0 = 0.0115, K1 = -0.002, K2 = 0.0215, Area = 11.2, Density = 1.225;
+        var cl = (K1 + Math.Sqrt(K1 * K1 + 12 * K2 * Cd0)) / (2 * K2);
+        var v = Math.Sqrt(2 * Weight / (Density * Area * cl));
+        var outcome = await RunAsync("targets", "--glider", "marram-15.json", "--climb", "2m/s", "--json");
+        Assert.Equal((0, ""), (outcome.ExitStatus, outcome.Error));
+        var json = JsonDocument.Parse(outcome.Output).RootElement;
+        Assert.Equal(["air", "minSink", "bestGlide", "speedToFly"], json.EnumerateObject().Select(member => member.Name));
+        Assert.Equal(v, json.GetProperty("minSink").GetProperty("trueAirspeedMps").GetDouble(), 1e-5);
+        Assert.Equal(v * (Cd0 + K1 * cl + K2 * cl * cl) / cl, json.GetProperty("minSink").GetProperty("sinkMps").GetDouble(), 1e-6);
+        Assert.Equal(1 / (K1 + 2 * Math.Sqrt(Cd0 * K2)), json.GetProperty("bestGlide").GetProperty("glideRatio").GetDouble(), 1e-6);
+        var a = Density * Area * Cd0 / (2 * Weight);
+        var b = 2 * K2 * Weight / (Density * Area);
+        var fly = json.GetProperty("speedToFly").GetProperty("trueAirspeedMps").GetDouble();
+        Assert.Equal(0, 2 * a * Math.Pow(fly, 4) - 2 * fly - 2 * b, 1e-3);
+        Assert.Equal(JsonValueKind.Null, json.GetProperty("speedToFly").GetProperty("limitedBy").ValueKind);
+    }
+
+    [Theory]
+    [InlineData(2, "--mass: expected a number with a unit (kg, g, lb), found '340'", "targets", "--glider", "marram-15.json", "--mass", "340")]
+    [InlineData(2, "--glider: expected a glider file", "targets")]
+    [InlineData(2, "--units: expected metric, aviation, british or american, found 'imperial'", "targets", "--glider", "marram-15.json", "--units", "imperial")]
+    [InlineData(78, "nowhere.json: expected a glider file", "targets", "--glider", "nowhere.json")]
+    [InlineData(2, "--pace: expected together with --bench", "run", "--pace", "3")]
+    [InlineData(2, "--pace: expected 0.1 to 50, found 100", "run", "--bench", "--pace", "100")]
+    [InlineData(2, "--with: expected NAME=VALUE, found 'bugs'", "run", "--with", "bugs")]
+    [InlineData(66, "nowhere.log", "run", "--bench", "nowhere.log")]
+    [InlineData(66, "nowhere.json: expected a settings file", "check", "--settings", "nowhere.json")]
+    [InlineData(66, "nowhere.log", "replay", "nowhere.log")]
+    [InlineData(2, "--pace: expected max or a number from 0.1 to 1000, found 'fast'", "replay", "a.log", "--pace", "fast")]
+    [InlineData(78, "ports: expected at least one port, found none", "run", "--with", "glider=marram-15.json")]
+    public async Task BadInput_GivesItsStatus_AndOneLineThatNamesIt(int exitStatus, string message, params string[] args)
+    {
+        var outcome = await RunAsync(args);
+        Assert.Equal(exitStatus, outcome.ExitStatus);
+        Assert.Contains(message, Assert.Single(outcome.Error.TrimEnd().Split('\n')), StringComparison.Ordinal);
+        Assert.Equal("", outcome.Output);
+    }
+
+    [Fact]
+    public async Task Check_TellsAllFaultsOfTheSettings_WithKeyAndLine()
+    {
+        var glider = Save("bad-glider.json", """
+            { "name": "Bad", "wingArea": "11.2 kg", "referenceMass": "340 kg",
+              "dragPolar": { "cd0": 0.0115, "k1": -0.002, "k2": 0.0215 },
+              "limits": { "stall": "66 km/h", "neverExceed": [ { "upTo": "6000 m", "airspeed": "250 km/h" } ] } }
+            """);
+        var settings = Save("settings.json", $$"""
+            { "glider": "{{Path.GetFileName(glider)}}",
+              "bugs": "10",
+              "ports": [ { "name": "static", "device": "/dev/null-port", "baud": "fast" } ],
+              "unitss": {} }
+            """);
+        var outcome = await RunAsync("check", "--settings", settings);
+        Assert.Equal(78, outcome.ExitStatus);
+        var lines = outcome.Error.TrimEnd().Split('\n');
+        Assert.Equal(4, lines.Length);
+        Assert.StartsWith($"{glider}:1: wingArea: ", lines[0], StringComparison.Ordinal);
+        Assert.StartsWith($"{settings}:2: bugs: ", lines[1], StringComparison.Ordinal);
+        Assert.StartsWith($"{settings}:3: ports.static.baud: ", lines[2], StringComparison.Ordinal);
+        Assert.StartsWith($"{settings}:4: unitss: there is no such setting", lines[3], StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Replay_OfALogWithABadLine_GoesOn_TellsIt_AndExits65()
+    {
+        var log = Save("spoilt.log", "#speedcommand-log 1\n0.500000 static $YXXDR,P,90000.0,P,STATIC*70\nnonsense\n1.000000 static $YXXDR,P,90000.0,P,STATIC*70\n");
+        var outcome = await RunAsync("replay", log, "--glider", "marram-15.json");
+        Assert.Equal(65, outcome.ExitStatus);
+        Assert.Equal($"{log}:3: expected 'seconds stream line', found 'nonsense'", outcome.Error.TrimEnd());
+        Assert.Equal(10, outcome.Output.TrimEnd().Split('\n').Length);
+    }
+
+    [LinuxFact]
+    public async Task Bench_StoppedByASignal_EndsTheFlightCleanly()
+    {
+        var log = TestFlightLog.Write(_folder.FullName, 60);
+        using var process = Start("run", "--bench", log, "--pace", "1", "--with", "glider=marram-15.json");
+        await process.StandardOutput.ReadLineAsync();
+        await Task.Delay(1500);
+        Assert.Equal(0, Kill(process.Id, TerminateSignal));
+        var output = await process.StandardOutput.ReadToEndAsync();
+        await process.WaitForExitAsync();
+        Assert.Equal(0, process.ExitCode);
+        Assert.Contains("Bench flight stopped before its end.", output, StringComparison.Ordinal);
+        var record = Directory.GetFiles(Path.Combine(_folder.FullName, "speedcommand", "flights")).Single();
+        Assert.StartsWith("#end ", File.ReadAllLines(record)[^1], StringComparison.Ordinal);
+    }
+
+    private const int TerminateSignal = 15;
+
+    [LibraryImport("libc", EntryPoint = "kill")]
+    private static partial int Kill(int process, int signal);
+}
