@@ -149,6 +149,21 @@ public sealed class PictureTests
     }
 
     [Fact]
+    public void StaticPortThatErrs_IsPutRightInAirspeedAndAltitude()
+    {
+        // At 103 km/h calibrated the indicator reads 100 km/h: sensed impact pressure is that of 100 km/h, 473.396 Pa, and the
+        // static port reads as much too high as the impact pressure is too low (pitot taken as right, NASA RP-1046).
+        const double SensedImpactPa = 473.396;
+        var trueImpactPa = 101_325 * (Math.Pow(1 + 0.2 * Math.Pow(103 / 3.6 / 340.294, 2), 3.5) - 1);
+        var errorPa = trueImpactPa - SensedImpactPa;
+        var cockpit = new Cockpit(new FlightSettings(TestGliders.WithPositionError));
+        cockpit.Fly(5, _ => 101_325 + errorPa, _ => SensedImpactPa);
+        Assert.Equal(100 / 3.6, cockpit.Last.IndicatedAirspeedMps.Value, 0.001);
+        Assert.Equal(103 / 3.6, cockpit.Last.TrueAirspeedMps.Value, 0.001);
+        Assert.Equal(0, cockpit.Last.PressureAltitudeM.Value, 0.01);
+    }
+
+    [Fact]
     public void AtRest_SensorNoiseAboutZeroGivesNoAirspeed_AndNoFault()
     {
         var cockpit = new Cockpit();

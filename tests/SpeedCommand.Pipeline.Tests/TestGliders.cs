@@ -13,6 +13,11 @@ internal static class TestGliders
 
     public static Glider WithoutLimits { get; } = Read("");
 
+    /// <summary>Its indicator reads 100 km/h where the calibrated airspeed is 103 km/h.</summary>
+    public static Glider WithPositionError { get; } = Read(Limits + """
+        , "airspeedCorrection": [ { "indicated": "60 km/h", "calibrated": "61.8 km/h" }, { "indicated": "200 km/h", "calibrated": "206 km/h" } ]
+        """);
+
     private static Glider Read(string limits)
     {
         var json = $$"""

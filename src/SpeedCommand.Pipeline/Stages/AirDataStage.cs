@@ -12,6 +12,7 @@ internal sealed class AirDataStage(FlightSettings settings)
     private TimedValue _impactPa;
     private TimedValue _sensedTemperatureK;
     private TimedValue _humidity;
+    private double _staticErrorPa;
     private double _mach;
     private double _offsetK = settings.TemperatureOffsetK;
 
@@ -34,44 +35,51 @@ internal sealed class AirDataStage(FlightSettings settings)
 
     public void SetHumidity(long timeUs, double fraction) => _humidity.Set(timeUs, fraction);
 
-    /// <summary>Takes a static pressure; false when no air can be computed from it.</summary>
-    public bool TrySetStatic(long timeUs, double pressurePa)
+    /// <summary>Takes a sensed static pressure; false when no air can be computed from it.</summary>
+    public bool TrySetStatic(long timeUs, double sensedPa)
     {
-        if (!TryAir(timeUs, pressurePa, out var air))
+        if (!TryAir(timeUs, sensedPa - _staticErrorPa, out var air))
         {
             return false;
         }
 
-        _staticPa.Set(timeUs, pressurePa);
+        _staticPa.Set(timeUs, sensedPa);
         Air = air;
         return true;
     }
 
-    /// <summary>Takes an impact pressure. The kinetic height needs the air, and is NaN without it.</summary>
-    public double SetImpact(long timeUs, double impactPa)
+    /// <summary>
+    /// Takes a sensed impact pressure. Sensors hang on the lines of the airspeed indicator, so it reads what the pilot reads;
+    /// what the static port is wrong by is taken out of it, and of the static pressures that follow.
+    /// </summary>
+    /// <returns>The kinetic height, m; NaN without the air it needs.</returns>
+    public double SetImpact(long timeUs, double sensedPa)
     {
-        _impactPa.Set(timeUs, impactPa);
+        _impactPa.Set(timeUs, sensedPa);
+        if (AirspeedConversion.TryCalibrated(sensedPa, out var sensed)
+            && PositionError.TryStaticError(settings.Glider.AirspeedCorrection, new IndicatedAirspeed(sensed.Mps), out var errorPa))
+        {
+            _staticErrorPa = errorPa;
+        }
+
         if (!IsStaticFresh(timeUs))
         {
             return double.NaN;
         }
 
         var air = Air;
-        if (AirspeedConversion.TryTrue(impactPa, air, out var airspeed, out _mach))
+        if (AirspeedConversion.TryTrue(sensedPa + _staticErrorPa, air, out var airspeed, out _mach))
         {
             return airspeed.Mps * airspeed.Mps / (2 * StandardAtmosphere.StandardGravityMps2);
         }
 
         // Noise about zero at rest: kinetic height goes on through zero, an airspeed cannot.
-        return impactPa / (air.DensityKgPerM3 * StandardAtmosphere.StandardGravityMps2);
+        return sensedPa / (air.DensityKgPerM3 * StandardAtmosphere.StandardGravityMps2);
     }
 
     /// <summary>Takes an indicated airspeed from a board that sends speed instead of pressure.</summary>
-    public double SetIndicated(long timeUs, double indicatedMps)
-    {
-        var calibrated = settings.Glider.AirspeedCorrection.ToCalibrated(new IndicatedAirspeed(indicatedMps));
-        return AirspeedConversion.TryImpactPressure(calibrated, out var impactPa) ? SetImpact(timeUs, impactPa) : double.NaN;
-    }
+    public double SetIndicated(long timeUs, double indicatedMps) =>
+        AirspeedConversion.TryImpactPressure(new CalibratedAirspeed(indicatedMps), out var sensedPa) ? SetImpact(timeUs, sensedPa) : double.NaN;
 
     /// <summary>Indicated and true airspeed; false when either input is silent or the glider stands.</summary>
     public bool TryAirspeeds(long nowUs, out IndicatedAirspeed indicated, out TrueAirspeed trueAirspeed)
@@ -79,13 +87,13 @@ internal sealed class AirDataStage(FlightSettings settings)
         indicated = default;
         trueAirspeed = default;
         if (!IsAirspeedFresh(nowUs) || !IsStaticFresh(nowUs)
-            || !AirspeedConversion.TryCalibrated(_impactPa.Value, out var calibrated)
-            || !AirspeedConversion.TryTrue(_impactPa.Value, Air, out trueAirspeed, out _))
+            || !AirspeedConversion.TryCalibrated(_impactPa.Value, out var sensed)
+            || !AirspeedConversion.TryTrue(_impactPa.Value + _staticErrorPa, Air, out trueAirspeed, out _))
         {
             return false;
         }
 
-        indicated = settings.Glider.AirspeedCorrection.ToIndicated(calibrated);
+        indicated = new IndicatedAirspeed(sensed.Mps);
         return true;
     }
 

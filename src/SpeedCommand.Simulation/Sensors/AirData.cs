@@ -5,8 +5,8 @@ using SpeedCommand.Simulation.Gliding;
 namespace SpeedCommand.Simulation.Sensors;
 
 /// <summary>
-/// From the glider's motion to what its ports feel. The instrument's own ports are taken as true; the position error is
-/// that of the pilot's indicator, and of boards that send indicated airspeed.
+/// From the glider's motion to what its ports feel. The boards hang on the pilot's own lines: the error of the static port
+/// is in the static pressure and, with the other sign, in the impact pressure.
 /// </summary>
 /// <param name="correction">The glider's position error.</param>
 public sealed class AirData(AirspeedCorrection correction)
@@ -43,8 +43,10 @@ public sealed class AirData(AirspeedCorrection correction)
     {
         var air = flow.Air;
         var felt = Math.Max(0, state.AirspeedMps + gustMps);
-        AirspeedConversion.TryImpactPressure(new TrueAirspeed(felt), air, out var impactPa);
-        return new SensedAir(air.PressurePa, impactPa, IndicatedOf(felt, air), air.TemperatureK, felt * felt / (2 * HeatCapacity),
+        var indicatedMps = IndicatedOf(felt, air);
+        AirspeedConversion.TryImpactPressure(new CalibratedAirspeed(indicatedMps), out var impactPa);
+        PositionError.TryStaticError(correction, new IndicatedAirspeed(indicatedMps), out var errorPa);
+        return new SensedAir(air.PressurePa + errorPa, impactPa, indicatedMps, air.TemperatureK, felt * felt / (2 * HeatCapacity),
             double.IsNaN(relativeHumidity) ? 0 : relativeHumidity, flow.LoadFactor, state.BankRad);
     }
 }

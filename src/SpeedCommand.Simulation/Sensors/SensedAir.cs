@@ -3,8 +3,8 @@ using SpeedCommand.Sentences;
 namespace SpeedCommand.Simulation.Sensors;
 
 /// <summary>What perfect sensors without lag would read at one moment, gusts included.</summary>
-/// <param name="StaticPa">Static pressure, Pa.</param>
-/// <param name="ImpactPa">Impact pressure, Pa.</param>
+/// <param name="StaticPa">Static pressure, Pa, position error included.</param>
+/// <param name="ImpactPa">Impact pressure, Pa, position error included.</param>
 /// <param name="IndicatedMps">Indicated airspeed, m/s, position error included.</param>
 /// <param name="TemperatureK">Static air temperature, K.</param>
 /// <param name="RecoveryK">Full temperature rise of air brought to rest, K.</param>
