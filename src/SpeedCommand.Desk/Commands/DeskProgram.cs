@@ -7,8 +7,9 @@ internal static class DeskProgram
 {
     public static int Run(string[] args)
     {
-        var root = new RootCommand("SpeedCommand at the desk: simulates flights. Advisory only; not a flight instrument.")
+        var root = new RootCommand("SpeedCommand at the desk: polars, knee-board cards, plans, simulated flights. Advisory only; not a flight instrument.")
         {
+            PolarCommand.Create(),
             SimulateCommand.Create(),
         };
         var parsed = root.Parse(args);
@@ -23,7 +24,7 @@ internal static class DeskProgram
         }
         catch (DeskFailure failure)
         {
-            return Fail(failure.Status, failure.Message);
+            return Fail(failure.Status, [.. failure.Messages]);
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {
@@ -31,9 +32,13 @@ internal static class DeskProgram
         }
     }
 
-    private static int Fail(ExitStatus status, string message)
+    private static int Fail(ExitStatus status, params string[] messages)
     {
-        Console.Error.WriteLine($"speedcommand-desk: {message.ReplaceLineEndings(" ")}");
+        foreach (var message in messages)
+        {
+            Console.Error.WriteLine($"speedcommand-desk: {message.ReplaceLineEndings(" ")}");
+        }
+
         return (int)status;
     }
 }

@@ -40,7 +40,7 @@ internal static class TargetsCommand
         if (isJson)
         {
             using var output = Console.OpenStandardOutput();
-            TargetsJson.Write(answer, output);
+            JsonNumbers.WriteObject(output, json => TargetsJson.WriteMembers(json, answer));
         }
         else
         {

@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text;
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Flight.Targets;
+using SpeedCommand.Replay.Conditions;
 
 namespace SpeedCommand.Commands;
 
