@@ -15,7 +15,13 @@ public sealed partial class CommandLineTests : IDisposable
 
     private Process Start(params string[] args)
     {
-        var start = new ProcessStartInfo("dotnet") { RedirectStandardOutput = true, RedirectStandardError = true, RedirectStandardInput = true };
+        var start = new ProcessStartInfo("dotnet")
+        {
+            WorkingDirectory = AppContext.BaseDirectory,
+            RedirectStandardOutput = true,
+            RedirectStandardError = true,
+            RedirectStandardInput = true,
+        };
         start.ArgumentList.Add(Path.Combine(AppContext.BaseDirectory, "speedcommand.dll"));
         foreach (var arg in args)
         {
@@ -78,7 +84,8 @@ public sealed partial class CommandLineTests : IDisposable
     [InlineData(66, "nowhere.json: expected a settings file", "check", "--settings", "nowhere.json")]
     [InlineData(66, "nowhere.log", "replay", "nowhere.log")]
     [InlineData(2, "--pace: expected max or a number from 0.1 to 1000, found 'fast'", "replay", "a.log", "--pace", "fast")]
-    [InlineData(78, "ports: expected at least one port, found none", "run", "--with", "glider=marram-15.json")]
+    [InlineData(78, "--settings: expected a settings file, found none here or at ", "run", "--with", "glider=marram-15.json")]
+    [InlineData(74, "/no-such-folder/x.jsonl", "replay", "demo.log", "--out", "/no-such-folder/x.jsonl")]
     public async Task BadInput_GivesItsStatus_AndOneLineThatNamesIt(int exitStatus, string message, params string[] args)
     {
         var outcome = await RunAsync(args);

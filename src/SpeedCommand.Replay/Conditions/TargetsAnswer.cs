@@ -7,7 +7,9 @@ namespace SpeedCommand.Replay.Conditions;
 /// <param name="MinSink">Least sink, at the bank asked for.</param>
 /// <param name="BestGlide">Flattest glide over the ground.</param>
 /// <param name="SpeedToFly">Speed to fly between climbs.</param>
-public sealed record TargetsAnswer(FlightConditions Conditions, TargetSpeed MinSink, GlideTarget BestGlide, SpeedToFlyTarget SpeedToFly)
+/// <param name="Circle">The circle at the speed of least sink; not known with wings level.</param>
+public sealed record TargetsAnswer(
+    FlightConditions Conditions, TargetSpeed MinSink, GlideTarget BestGlide, SpeedToFlyTarget SpeedToFly, ThermallingTarget Circle)
 {
     /// <summary>Works them out.</summary>
     /// <param name="conditions">The conditions.</param>
@@ -20,6 +22,7 @@ public sealed record TargetsAnswer(FlightConditions Conditions, TargetSpeed MinS
             conditions,
             targets.MinSink(conditions.Air, conditions.Loading),
             targets.BestGlide(conditions.Air, conditions.Loading, conditions.HeadwindMps, conditions.AirMps),
-            targets.SpeedToFly(conditions.Air, conditions.Loading, conditions.ClimbMps, conditions.AirMps));
+            targets.SpeedToFly(conditions.Air, conditions.Loading, conditions.ClimbMps, conditions.AirMps),
+            conditions.BankRad == 0 ? default : targets.Thermalling(conditions.Air, conditions.Loading, conditions.BankRad));
     }
 }

@@ -37,6 +37,11 @@ internal static class CheckCommand
             return exitStatus;
         }
 
+        if (!SettingsOptions.HasFile(source))
+        {
+            return ExitStatus.BadSettings;
+        }
+
         var settings = CockpitSettingsReader.Read(source, null, null, needsPorts: true);
         SettingsOptions.Tell(source);
         if (settings is null)
@@ -44,7 +49,7 @@ internal static class CheckCommand
             return ExitStatus.BadSettings;
         }
 
-        Console.WriteLine($"settings: {(source.File.Length > 0 ? source.File : "no file")}: good");
+        Console.WriteLine($"settings: {source.File}: good");
         Console.WriteLine(FormattableString.Invariant($"glider: {settings.Flight.Glider.Name}, flown at {settings.Flight.MassKg:F0} kg: good"));
         if (settings.Flight.Glider.Limits is null)
         {

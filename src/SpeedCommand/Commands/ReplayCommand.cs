@@ -58,6 +58,11 @@ internal static class ReplayCommand
 
     private static int ReplayOne(string path, Request request, double pace, CancellationToken cancel)
     {
+        if (!File.Exists(path))
+        {
+            return Fail(ExitStatus.NoInput, $"{path}: expected a flight log, found no such file");
+        }
+
         try
         {
             using var log = FlightLogFile.Open(path);
@@ -79,10 +84,6 @@ internal static class ReplayCommand
         catch (FormatException fault)
         {
             return Fail(ExitStatus.BadData, $"{path}: {fault.Message}");
-        }
-        catch (Exception fault) when (fault is FileNotFoundException or DirectoryNotFoundException)
-        {
-            return Fail(ExitStatus.NoInput, fault.Message);
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {

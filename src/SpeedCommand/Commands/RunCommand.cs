@@ -50,9 +50,20 @@ internal static class RunCommand
             return exitStatus;
         }
 
+        if (!isBench && !SettingsOptions.HasFile(source))
+        {
+            return ExitStatus.BadSettings;
+        }
+
+        var log = benchLog?.ToString() ?? Path.Combine(AppContext.BaseDirectory, "demo.log");
+        if (isBench && !File.Exists(log))
+        {
+            return Fail(ExitStatus.NoInput, $"--bench: expected a flight log, found no file '{log}'");
+        }
+
         try
         {
-            using var flight = isBench ? new BenchFlight(benchLog?.ToString() ?? Path.Combine(AppContext.BaseDirectory, "demo.log")) : null;
+            using var flight = isBench ? new BenchFlight(log) : null;
             var settings = CockpitSettingsReader.Read(source, null, flight?.Header.GliderFile, needsPorts: !isBench);
             SettingsOptions.Tell(source);
             return settings is null
@@ -61,11 +72,7 @@ internal static class RunCommand
         }
         catch (FormatException fault)
         {
-            return Fail(ExitStatus.BadData, $"--bench: {benchLog}: {fault.Message}");
-        }
-        catch (FileNotFoundException fault)
-        {
-            return Fail(ExitStatus.NoInput, $"--bench: {fault.Message}");
+            return Fail(ExitStatus.BadData, $"--bench: {log}: {fault.Message}");
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {

@@ -50,6 +50,17 @@ internal static class SettingsOptions
         return false;
     }
 
+    /// <summary>Whether there is a settings file, without which there are no ports; tells where one is looked for.</summary>
+    public static bool HasFile(SettingsSource source)
+    {
+        if (source.File.Length == 0)
+        {
+            Console.Error.WriteLine($"--settings: expected a settings file, found none here or at {string.Join(" or ", StateFolder.SettingsFiles)}; docs/settings.md has one to copy");
+        }
+
+        return source.File.Length > 0;
+    }
+
     /// <summary>Tells every fault, one a line.</summary>
     public static void Tell(SettingsSource source)
     {

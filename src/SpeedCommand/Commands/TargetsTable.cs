@@ -15,13 +15,17 @@ internal static class TargetsTable
         text.Append(ConditionsHeading.Write(answer.Conditions, units, isAltitudeShown: true)).Append('\n');
         text.Append(CultureInfo.InvariantCulture,
             $"{"",-14}{"indicated",10}{"true",10}{"sink",10}\n{"",-14}{units.Speed.Symbol,10}{units.Speed.Symbol,10}{units.Vertical.Symbol,10}\n");
-        AppendRow(text, "minimum sink", answer.MinSink, units, "");
+        AppendRow(text, "minimum sink", answer.MinSink, units, CircleNote(answer, units));
         AppendRow(text, "best glide", answer.BestGlide.Speed, units,
             string.Create(CultureInfo.InvariantCulture, $"{answer.BestGlide.GlideRatio:F1} : 1{(answer.Conditions.HeadwindMps == 0 ? "" : " over the ground")}"));
         AppendRow(text, "speed to fly", answer.SpeedToFly.Speed, units, SpeedToFlyNote(answer, units));
         text.Append("\nAdvisory only: the flight manual and the placards prevail.\n");
         return text.ToString();
     }
+
+    private static string CircleNote(TargetsAnswer answer, DisplayUnits units) => answer.Circle.Speed.IsKnown
+        ? string.Create(CultureInfo.InvariantCulture, $"a circle of radius {Show(answer.Circle.RadiusM, units.Height, 0)} in {answer.Circle.CircleTimeS:F0} s")
+        : "";
 
     private static string SpeedToFlyNote(TargetsAnswer answer, DisplayUnits units)
     {

@@ -22,32 +22,19 @@ internal sealed class SerialPortReader(
     private readonly byte[] _buffer = new byte[4096];
     private readonly int _stream = machine.AddStream(settings.Name, settings.Checksum);
     private long _arrivalUs;
+    private string _lastComplaint = "";
 
     void ILineSink.OnLine(ReadOnlySpan<byte> line) => machine.Accept(_arrivalUs, _stream, line);
 
     protected override async Task ExecuteAsync(CancellationToken stoppingToken)
     {
         var delay = FirstDelay;
-        var lastComplaint = "";
         while (!stoppingToken.IsCancellationRequested)
         {
-            try
+            if (TryOpen() is { } port)
             {
-                var port = SerialPorts.Open(settings.Device, settings.Baud);
-                log.LogInformation("{Port}: {Device} is open at {Baud} baud", settings.Name, settings.Device, settings.Baud);
                 delay = FirstDelay;
-                lastComplaint = "";
                 await ReadUntilGoneAsync(port, stoppingToken).ConfigureAwait(false);
-            }
-            catch (Exception fault) when (SerialPorts.IsPortFault(fault))
-            {
-                // The same complaint every second would bury the others.
-                var complaint = PortFault.Explain(settings.Device, fault);
-                if (complaint != lastComplaint)
-                {
-                    log.LogWarning("{Port}: {Complaint}", settings.Name, complaint);
-                    lastComplaint = complaint;
-                }
             }
 
             await Task.Delay(delay, time, stoppingToken).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing);
@@ -55,33 +42,70 @@ internal sealed class SerialPortReader(
         }
     }
 
+    private SerialPort? TryOpen()
+    {
+        try
+        {
+            var port = SerialPorts.Open(settings.Device, settings.Baud);
+            log.LogInformation("{Port}: {Device} is open at {Baud} baud", settings.Name, settings.Device, settings.Baud);
+            _lastComplaint = "";
+            return port;
+        }
+        catch (Exception fault) when (SerialPorts.IsPortFault(fault))
+        {
+            // The same complaint every second would bury the others.
+            var complaint = PortFault.Explain(settings.Device, fault);
+            if (complaint != _lastComplaint)
+            {
+                log.LogWarning("{Port}: {Complaint}", settings.Name, complaint);
+                _lastComplaint = complaint;
+            }
+
+            return null;
+        }
+    }
+
+    /// <summary>Only reading is guarded: what throws while a line is taken is our own bug, and must end the service.</summary>
     private async Task ReadUntilGoneAsync(SerialPort port, CancellationToken stop)
     {
         _framer.Reset();
         state.IsOpen = true;
         try
         {
-            var bytes = port.BaseStream;
-            while (await bytes.ReadAsync(_buffer, stop).ConfigureAwait(false) is var count and > 0)
+            while (await ReadAsync(port.BaseStream, stop).ConfigureAwait(false) is var count and > 0)
             {
                 _arrivalUs = clock.NowUs;
                 _framer.Push(_buffer.AsSpan(0, count), this);
             }
-
-            log.LogWarning("{Port}: {Device} is gone", settings.Name, settings.Device);
-        }
-        catch (OperationCanceledException) when (stop.IsCancellationRequested)
-        {
-            // The host stops.
-        }
-        catch (Exception fault) when (SerialPorts.IsPortFault(fault))
-        {
-            log.LogWarning("{Port}: {Device} is gone ({Cause})", settings.Name, settings.Device, fault.Message);
         }
         finally
         {
             state.IsOpen = false;
             await SerialPorts.CloseAsync(port).ConfigureAwait(false);
+        }
+    }
+
+    /// <summary>The bytes that came, or 0 when the device is gone or the host stops.</summary>
+    private async ValueTask<int> ReadAsync(Stream bytes, CancellationToken stop)
+    {
+        try
+        {
+            var count = await bytes.ReadAsync(_buffer, stop).ConfigureAwait(false);
+            if (count == 0)
+            {
+                log.LogWarning("{Port}: {Device} is gone", settings.Name, settings.Device);
+            }
+
+            return count;
+        }
+        catch (OperationCanceledException) when (stop.IsCancellationRequested)
+        {
+            return 0;
+        }
+        catch (Exception fault) when (SerialPorts.IsPortFault(fault))
+        {
+            log.LogWarning("{Port}: {Device} is gone ({Cause})", settings.Name, settings.Device, fault.Message);
+            return 0;
         }
     }
 }

@@ -9,12 +9,12 @@ internal static class StateFolder
     /// <summary>The service's own log, when the terminal is taken by the panel.</summary>
     public static string LogFile => Path.Combine(Root, "speedcommand.log");
 
+    /// <summary>Where a settings file is looked for when none is named, in order.</summary>
+    public static IReadOnlyList<string> SettingsFiles =>
+        [Path.Combine(BaseFolder("XDG_CONFIG_HOME", ".config"), "speedcommand", "settings.json"), "/etc/speedcommand/settings.json"];
+
     /// <summary>The settings file that is read when none is named; null when there is none.</summary>
-    public static string? DefaultSettings => new[]
-    {
-        Path.Combine(BaseFolder("XDG_CONFIG_HOME", ".config"), "speedcommand", "settings.json"),
-        "/etc/speedcommand/settings.json",
-    }.FirstOrDefault(File.Exists);
+    public static string? DefaultSettings => SettingsFiles.FirstOrDefault(File.Exists);
 
     private static string Root => Path.Combine(BaseFolder("XDG_STATE_HOME", ".local/state"), "speedcommand");
 

@@ -1,0 +1,65 @@
+namespace SpeedCommand.Estimation.Energy;
+
+/// <summary>The five noise parameters, each learnt with the help of a filter that has a little more of it.</summary>
+internal sealed class NoiseLearner
+{
+    private const int Parameters = 5;
+
+    private readonly EnergyStateFilter[] _filters = new EnergyStateFilter[Parameters];
+    private readonly LearntNoise[] _learnt;
+    private readonly EnergyNoise[] _perturbed = new EnergyNoise[Parameters];
+
+    public NoiseLearner()
+    {
+        _learnt = [new(0.05, 2.5, 0.01), new(1, 3, 0.1), new(0.03, 2.5, 0.0025), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6)];
+        Usual = new EnergyStateFilter();
+        for (var i = 0; i < Parameters; i++)
+        {
+            _filters[i] = new EnergyStateFilter();
+        }
+
+        Publish();
+    }
+
+    /// <summary>The noise as learnt so far.</summary>
+    public EnergyNoise Noise { get; private set; }
+
+    /// <summary>The filter with that noise.</summary>
+    public EnergyStateFilter Usual { get; }
+
+    public void Start(double heightM, double kineticM)
+    {
+        Usual.Start(heightM, kineticM, Noise);
+        for (var i = 0; i < Parameters; i++)
+        {
+            _filters[i].Start(heightM, kineticM, _perturbed[i]);
+        }
+    }
+
+    /// <summary>Learns from a sample; returns the surprise of the filter with the usual noise.</summary>
+    public Innovation Take(in EnergyStep step, in EnergySample sample)
+    {
+        var usual = Usual.Take(step, sample, Noise);
+        for (var i = 0; i < Parameters; i++)
+        {
+            _learnt[i].Learn(usual, _filters[i].Take(step, sample, _perturbed[i]), step.Dt);
+        }
+
+        Publish();
+        return usual;
+    }
+
+    private void Publish()
+    {
+        Noise = With(-1);
+        for (var i = 0; i < Parameters; i++)
+        {
+            _perturbed[i] = With(i);
+        }
+    }
+
+    private EnergyNoise With(int perturbed) =>
+        new(Of(0, perturbed), Of(1, perturbed), Of(2, perturbed), Of(3, perturbed), Of(4, perturbed));
+
+    private double Of(int parameter, int perturbed) => parameter == perturbed ? _learnt[parameter].Perturbed : _learnt[parameter].Value;
+}
