@@ -15,11 +15,14 @@ internal sealed record CardRequest(FlightConditions Conditions, IReadOnlyList<do
     private static readonly double[] WindsKmh = [-20, 0, 20, 40, 60], WindsKt = [-10, 0, 10, 20, 30];
     private static readonly double[] BanksDegrees = [0, 30, 45];
 
-    public IEnumerable<double> Climbs => Joined(Units.Vertical.Symbol == "m/s" ? ClimbsMps : ClimbsKt, Units.Vertical, Conditions.ClimbMps).Order();
+    public IEnumerable<double> Climbs =>
+        Joined(Units.Vertical.Symbol == "m/s" ? ClimbsMps : ClimbsKt, Units.Vertical, Conditions.ClimbMps).Order();
 
-    public IEnumerable<double> Airs => Joined(Units.Vertical.Symbol == "m/s" ? AirsMps : AirsKt, Units.Vertical, Conditions.AirMps).OrderDescending();
+    public IEnumerable<double> Airs =>
+        Joined(Units.Vertical.Symbol == "m/s" ? AirsMps : AirsKt, Units.Vertical, Conditions.AirMps).OrderDescending();
 
-    public IEnumerable<double> Headwinds => Joined(Units.Speed.Symbol == "km/h" ? WindsKmh : WindsKt, Units.Speed, Conditions.HeadwindMps).Order();
+    public IEnumerable<double> Headwinds =>
+        Joined(Units.Speed.Symbol == "km/h" ? WindsKmh : WindsKt, Units.Speed, Conditions.HeadwindMps).Order();
 
     public IEnumerable<double> BanksRad
     {

@@ -7,4 +7,8 @@ namespace SpeedCommand.Desk.Cards;
 /// <param name="Columns">The heads of the columns of one group.</param>
 /// <param name="Rows">Each row's name and its cells, group by group.</param>
 internal sealed record CardTable(
-    string Title, string RowHead, IReadOnlyList<string> Groups, IReadOnlyList<string> Columns, IReadOnlyList<(string Name, IReadOnlyList<CardCell> Cells)> Rows);
+    string Title,
+    string RowHead,
+    IReadOnlyList<string> Groups,
+    IReadOnlyList<string> Columns,
+    IReadOnlyList<(string Name, IReadOnlyList<CardCell> Cells)> Rows);

@@ -8,6 +8,9 @@ namespace SpeedCommand.Desk.Cards;
 /// <summary>A knee-board card: every number worked out and rounded, ready to be laid out as text or as a page.</summary>
 internal sealed class SpeedCard
 {
+    /// <summary>Rounding in binary must not push a whole number over itself.</summary>
+    private const double Hair = 1e-6;
+
     private readonly CardRequest _request;
     private readonly SpeedTargets _targets;
     private readonly DisplayUnits _units;
@@ -88,12 +91,14 @@ internal sealed class SpeedCard
         }
 
         // One mass a stall margin; the others do not depend on it. A margin is rounded up, the others down.
-        var margins = _loads.Select(load => $"{ConditionLines.Number(Math.Ceiling(_units.Speed.Convert(load.Limits.StallMarginMps) - 1e-6), 0)} at {Mass(load.Loading.MassKg)}");
+        var margins = _loads.Select(load => $"{Ceiling(load.Limits.StallMarginMps)} at {Mass(load.Loading.MassKg)}");
         var limits = _loads[0].Limits;
         return [$"stall margin {string.Join(", ", margins)}; rough air {Floor(limits.RoughAirMps)}; never exceed {Floor(limits.NeverExceedMps)}"];
     }
 
-    private string Floor(double mps) => ConditionLines.Number(Math.Floor(_units.Speed.Convert(mps) + 1e-6), 0);
+    private string Ceiling(double mps) => ConditionLines.Number(Math.Ceiling(_units.Speed.Convert(mps) - Hair), 0);
+
+    private string Floor(double mps) => ConditionLines.Number(Math.Floor(_units.Speed.Convert(mps) + Hair), 0);
 
     private static string Mass(double massKg) => string.Create(CultureInfo.InvariantCulture, $"{massKg:F0} kg");
 }

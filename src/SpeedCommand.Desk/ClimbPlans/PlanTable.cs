@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Text;
 using SpeedCommand.Desk.Polars;
 using SpeedCommand.Displays.Units;
@@ -17,9 +16,11 @@ internal static class PlanTable
     {
         var limits = SpeedLimits.At(new SpeedTargets(conditions.Glider), conditions.Air, conditions.Loading);
         var text = new StringBuilder();
-        text.Append(CultureInfo.InvariantCulture, $"{conditions.Glider.Name}, {ConditionLines.Load(conditions)}\n{ConditionLines.Air(conditions, units)}\n");
-        text.Append(CultureInfo.InvariantCulture,
-            $"climbs {ConditionLines.Show(prospect.MeanMps, units.Vertical, 1)} give or take {ConditionLines.Show(prospect.SpreadMps, units.Vertical, 1)}, one every {ConditionLines.Show(prospect.SpacingM, units.Distance, 1)}, landing costs {prospect.LandingCostS / 60:F0} min\n\n");
+        text.Append($"{conditions.Glider.Name}, {ConditionLines.Load(conditions)}\n{ConditionLines.Air(conditions, units)}\n");
+        text.Append($"climbs {ConditionLines.Show(prospect.MeanMps, units.Vertical, 1)} ")
+            .Append($"give or take {ConditionLines.Show(prospect.SpreadMps, units.Vertical, 1)}, ")
+            .Append($"one every {ConditionLines.Show(prospect.SpacingM, units.Distance, 1)}, ")
+            .Append($"landing costs {ConditionLines.Number(prospect.LandingCostS / 60, 0)} min\n\n");
         var (height, speed, vertical) = (units.Height.Symbol, units.Speed.Symbol, units.Vertical.Symbol);
         text.Append($"{"height",8}{"speed to fly",14}{"setting",10}{"climb if over",15}{"landing first",15}\n");
         text.Append($"{height,8}{speed + " ind.",14}{vertical,10}{vertical,15}{"%",15}\n");
@@ -28,14 +29,18 @@ internal static class PlanTable
         {
             if (plan.At(Math.Min(units.Height.DifferenceToSi(shown), prospect.TopM)) is { } at)
             {
-                var airspeed = at.Speed.IsKnown ? ConditionLines.Number(limits.Rounded(at.Speed.IndicatedAirspeedMps, units.Speed), 0) : "--";
-                text.Append(CultureInfo.InvariantCulture,
-                    $"{shown,8:F0}{airspeed,14}{ConditionLines.Number(units.Vertical.Convert(at.SettingMps), 2),10}{ConditionLines.Number(units.Vertical.Convert(at.WeakestClimbMps), 2),15}{ConditionLines.Number(at.LandingProbability * 100, 1),15}\n");
+                var airspeed = at.Speed.IsKnown
+                    ? ConditionLines.Number(limits.Rounded(at.Speed.IndicatedAirspeedMps, units.Speed), 0)
+                    : "--";
+                text.Append(ConditionLines.Number(shown, 0).PadLeft(8)).Append(airspeed.PadLeft(14))
+                    .Append(ConditionLines.Number(units.Vertical.Convert(at.SettingMps), 2).PadLeft(10))
+                    .Append(ConditionLines.Number(units.Vertical.Convert(at.WeakestClimbMps), 2).PadLeft(15))
+                    .Append(ConditionLines.Number(at.LandingProbability * 100, 1).PadLeft(15)).Append('\n');
             }
         }
 
-        text.Append(CultureInfo.InvariantCulture,
-            $"\nheights above the landing place; average speed, landings included: {ConditionLines.Show(plan.AverageSpeedMps, units.Speed, 0)}\n{ConditionLines.Caution}\n");
+        text.Append("\nheights above the landing place; average speed, landings included: ")
+            .Append($"{ConditionLines.Show(plan.AverageSpeedMps, units.Speed, 0)}\n{ConditionLines.Caution}\n");
         return text.ToString();
     }
 }

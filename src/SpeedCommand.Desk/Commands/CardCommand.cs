@@ -20,9 +20,14 @@ internal static class CardCommand
             HelpName = "MASS,MASS",
             Description = "The two weights, \"340kg,400kg\"; standard is --mass and the glider's greatest mass.",
         };
-        var output = new Option<string?>("--out") { HelpName = "FILE", Description = "Write it to a file (.txt, .svg, .pdf or .png) instead of printing it." };
+        var output = new Option<string?>("--out")
+        {
+            HelpName = "FILE",
+            Description = "Write it to a file (.txt, .svg, .pdf or .png) instead of printing it.",
+        };
         var options = new ConditionInput();
-        var command = new Command("card", "One page of speeds: over climb and air motion, for two weights. --climb, --air, --headwind and --bank join its ranges.");
+        var command = new Command("card", "One page of speeds over climb and air motion, for two weights. "
+            + "--climb, --air, --headwind and --bank join its ranges.");
         options.AddTo(command);
         command.Add(units);
         command.Add(masses);

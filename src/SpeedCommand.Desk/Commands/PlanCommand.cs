@@ -27,7 +27,10 @@ internal static class PlanCommand
         var json = AnswerOptions.Json();
         // The plan is for straight flight through still air.
         var options = new ConditionInput("--air", "--headwind", "--bank");
-        var command = new Command("plan", "Speed to fly over height when climbs are uncertain; --climb is their mean.") { spread, spacing, top, cost };
+        var command = new Command("plan", "Speed to fly over height when climbs are uncertain; --climb is their mean.")
+        {
+            spread, spacing, top, cost,
+        };
         options.AddTo(command);
         command.Add(units);
         command.Add(json);
@@ -77,7 +80,8 @@ internal static class PlanCommand
 
         return value >= least && value <= most
             ? value
-            : throw new DeskFailure(ExitStatus.Usage, FormattableString.Invariant($"{option.Name}: expected {least:G6} to {most:G6} {SiName(kind)}, found '{text}'"));
+            : throw new DeskFailure(ExitStatus.Usage,
+                FormattableString.Invariant($"{option.Name}: expected {least:G6} to {most:G6} {SiName(kind)}, found '{text}'"));
     }
 
     private static string SiName(QuantityKind kind) => kind switch

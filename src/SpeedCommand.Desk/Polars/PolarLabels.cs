@@ -164,7 +164,8 @@ internal sealed class PolarLabels(SinkCurve curve, DisplayUnits units, PlotArea 
                 path.AddRect(SKRect.Create(at.X - MarkerRadius + 1, at.Y - MarkerRadius + 1, 2 * MarkerRadius - 2, 2 * MarkerRadius - 2));
                 break;
             case Marker.Diamond:
-                path.AddPoly([new(at.X, at.Y - MarkerRadius - 1.5f), new(at.X + MarkerRadius + 1.5f, at.Y), new(at.X, at.Y + MarkerRadius + 1.5f), new(at.X - MarkerRadius - 1.5f, at.Y)]);
+                const float Reach = MarkerRadius + 1.5f;
+                path.AddPoly([new(at.X, at.Y - Reach), new(at.X + Reach, at.Y), new(at.X, at.Y + Reach), new(at.X - Reach, at.Y)]);
                 break;
             default:
                 path.AddCircle(at.X, at.Y, shape == Marker.Ring ? MarkerRadius - 2 : MarkerRadius);

@@ -46,12 +46,16 @@ internal sealed class PolarTable(SinkCurve curve, DisplayUnits units)
     private void AppendPoint(string name, in SinkCurvePoint point, string note)
     {
         var speed = units.Speed;
-        _text.Append(CultureInfo.InvariantCulture,
-            $"{name,-13}{ConditionLines.Number(curve.Limits.Rounded(point.IndicatedMps, speed), 0),10}{ConditionLines.Number(speed.Convert(point.EquivalentMps), 0),11}{ConditionLines.Number(speed.Convert(point.TrueMps), 0),7}{ConditionLines.Number(units.Vertical.Convert(point.SinkMps), 2),8}{ConditionLines.Number(point.GlideRatio, 1),8}");
+        _text.Append(name.PadRight(13))
+            .Append(ConditionLines.Number(curve.Limits.Rounded(point.IndicatedMps, speed), 0).PadLeft(10))
+            .Append(ConditionLines.Number(speed.Convert(point.EquivalentMps), 0).PadLeft(11))
+            .Append(ConditionLines.Number(speed.Convert(point.TrueMps), 0).PadLeft(7))
+            .Append(ConditionLines.Number(units.Vertical.Convert(point.SinkMps), 2).PadLeft(8))
+            .Append(ConditionLines.Number(point.GlideRatio, 1).PadLeft(8));
         if (_isGroundShown)
         {
             var ratio = point.RatioOverGround(_conditions.HeadwindMps, _conditions.AirMps);
-            _text.Append(CultureInfo.InvariantCulture, $"{(double.IsInfinity(ratio) ? "climbs" : ConditionLines.Number(ratio, 1)),8}");
+            _text.Append((double.IsInfinity(ratio) ? "climbs" : ConditionLines.Number(ratio, 1)).PadLeft(8));
         }
 
         _text.Append(note.Length > 0 ? "   " + note : "").Append('\n');
@@ -98,6 +102,8 @@ internal sealed class PolarTable(SinkCurve curve, DisplayUnits units)
         }
 
         var limits = curve.Limits;
-        return $"limits, indicated: stall margin {ConditionLines.Show(limits.StallMarginMps, units.Speed, 0)}, rough air {ConditionLines.Show(limits.RoughAirMps, units.Speed, 0)}, never exceed {ConditionLines.Show(limits.NeverExceedMps, units.Speed, 0)}";
+        return $"limits, indicated: stall margin {ConditionLines.Show(limits.StallMarginMps, units.Speed, 0)}, "
+            + $"rough air {ConditionLines.Show(limits.RoughAirMps, units.Speed, 0)}, "
+            + $"never exceed {ConditionLines.Show(limits.NeverExceedMps, units.Speed, 0)}";
     }
 }
