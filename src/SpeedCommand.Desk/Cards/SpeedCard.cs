@@ -28,7 +28,7 @@ internal sealed class SpeedCard
             $"speeds: indicated, {units.Speed.Symbol}; climb, sink and air (positive up): {units.Vertical.Symbol}",
         ];
         Tables = [SpeedsToFly(), MinSinks(), BestGlides()];
-        Notes = [.. Limits(), .. new[] { LimitSigns.Legend(Tables) }.Where(legend => legend.Length > 0), ConditionLines.Caution];
+        Notes = [.. MissingSpeeds(), .. Limits(), .. new[] { LimitSigns.Legend(Tables) }.Where(legend => legend.Length > 0), ConditionLines.Caution];
     }
 
     public string Title => _request.Conditions.Glider.Name + ConditionLines.Bugs(_request.Conditions);
@@ -83,11 +83,15 @@ internal sealed class SpeedCard
 
     private string Vertical(double mps, int decimals) => ConditionLines.Number(_units.Vertical.Convert(mps), decimals);
 
+    private IEnumerable<string> MissingSpeeds() => _loads
+        .Select(load => LimitNames.WhyNoSpeedToFly(_request.Conditions.Glider, load.Limits)).Where(reason => reason.Length > 0)
+        .Distinct().Select(reason => "no speed to fly: " + reason);
+
     private IEnumerable<string> Limits()
     {
         if (_request.Conditions.Glider.Limits is null)
         {
-            return ["no speed to fly: the glider file has no limits"];
+            return [];
         }
 
         // One mass a stall margin; the others do not depend on it. A margin is rounded up, the others down.

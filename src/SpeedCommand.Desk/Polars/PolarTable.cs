@@ -64,17 +64,21 @@ internal sealed class PolarTable(SinkCurve curve, DisplayUnits units)
     private void AppendTargets()
     {
         var answer = curve.Answer;
-        AppendTarget("minimum sink", answer.MinSink, "");
+        AppendTarget("minimum sink", answer.MinSink, answer.Circle.Speed.IsKnown ? CircleNote(answer.Circle) : "");
         AppendTarget("best glide", answer.BestGlide.Speed, "");
-        if (_conditions.Glider.Limits is null)
+        var missing = LimitNames.WhyNoSpeedToFly(_conditions.Glider, curve.Limits);
+        if (missing.Length > 0)
         {
-            _text.Append("speed to fly  not shown: the glider file has no limits\n");
+            _text.Append("speed to fly  not shown: ").Append(missing).Append('\n');
             return;
         }
 
         var average = answer.SpeedToFly.AverageSpeedMps;
         AppendTarget("speed to fly", answer.SpeedToFly.Speed, average > 0 ? $"average {ConditionLines.Show(average, units.Speed, 0)}" : "");
     }
+
+    private string CircleNote(in ThermallingTarget circle) =>
+        $"circle of radius {ConditionLines.Show(circle.RadiusM, units.Height, 0)}, {ConditionLines.Number(circle.CircleTimeS, 0)} s";
 
     private void AppendTarget(string name, in TargetSpeed target, string note)
     {
