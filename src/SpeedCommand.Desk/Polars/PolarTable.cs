@@ -58,7 +58,9 @@ internal sealed class PolarTable(SinkCurve curve, DisplayUnits units)
             _text.Append((double.IsInfinity(ratio) ? "climbs" : ConditionLines.Number(ratio, 1)).PadLeft(8));
         }
 
-        _text.Append(note.Length > 0 ? "   " + note : "").Append('\n');
+        var flaps = curve.FlapSettingAt(point) is { } setting ? "flaps " + setting : "";
+        var notes = string.Join(", ", new[] { flaps, note }.Where(part => part.Length > 0));
+        _text.Append(notes.Length > 0 ? "   " + notes : "").Append('\n');
     }
 
     private void AppendTargets()

@@ -121,6 +121,22 @@ public sealed class PolarCommandTests(ReferenceGlider glider) : IClassFixture<Re
     public void Bank_TellsTheCircle() => Assert.Contains(
         "circle of radius 63 m, 17 s", glider.Text("polar", "--bank", "40deg"), StringComparison.Ordinal);
 
+    [Fact] // of two tables the one with less sink: +8 below their crossing between 90 and 110 km/h, 0 above it
+    public void Flaps_RowsNameTheSettingThatSinksLeast()
+    {
+        var file = glider.PathOf("flapped.json");
+        File.WriteAllText(file, """
+            { "name": "Flapped", "referenceMass": "450 kg", "flaps": [
+                { "setting": "+8", "sinkTable": [ { "airspeed": "70 km/h", "sink": "0.60 m/s" }, { "airspeed": "90 km/h", "sink": "0.62 m/s" }, { "airspeed": "110 km/h", "sink": "0.90 m/s" } ] },
+                { "setting": "0", "sinkTable": [ { "airspeed": "80 km/h", "sink": "0.70 m/s" }, { "airspeed": "110 km/h", "sink": "0.72 m/s" }, { "airspeed": "160 km/h", "sink": "1.60 m/s" } ] } ] }
+            """);
+        var (status, output, _) = DeskConsole.RunToText("polar", "--glider", file);
+        Assert.Equal(0, status);
+        var flaps = output.Split('\n').Where(line => line.StartsWith("        ", StringComparison.Ordinal) && line.Contains("flaps", StringComparison.Ordinal))
+            .Select(line => line.Split(' ', StringSplitOptions.RemoveEmptyEntries)).ToDictionary(cells => cells[0], cells => cells[^1]);
+        Assert.Equal(("+8", "+8", "0", "0"), (flaps["70"], flaps["90"], flaps["110"], flaps["160"]));
+    }
+
     [Fact]
     public void TableNotConvex_WarnsAndWorks()
     {
