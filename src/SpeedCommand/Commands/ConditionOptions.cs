@@ -29,7 +29,7 @@ internal sealed class ConditionOptions
             Console.Error.WriteLine(fault);
         }
 
-        exitStatus = reader.OptionFaults.Count > 0 ? ExitStatus.Usage : ExitStatus.BadSettings;
+        exitStatus = reader.OptionFaults.Count > 0 ? ExitStatus.Usage : reader.IsGliderMissing ? ExitStatus.NoInput : ExitStatus.BadSettings;
         return conditions;
     }
 }
