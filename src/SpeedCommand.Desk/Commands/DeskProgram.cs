@@ -10,6 +10,8 @@ internal static class DeskProgram
         var root = new RootCommand("SpeedCommand at the desk: polars, knee-board cards, plans, simulated flights. Advisory only; not a flight instrument.")
         {
             PolarCommand.Create(),
+            CardCommand.Create(),
+            PlanCommand.Create(),
             SimulateCommand.Create(),
         };
         var parsed = root.Parse(args);
