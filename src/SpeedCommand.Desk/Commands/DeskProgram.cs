@@ -7,9 +7,10 @@ internal static class DeskProgram
 {
     public static int Run(string[] args)
     {
-        var root = new RootCommand("SpeedCommand at the desk: simulates flights. Advisory only; not a flight instrument.")
+        var root = new RootCommand("SpeedCommand at the desk: simulates flights, scores estimators, measures sensors. Advisory only; not a flight instrument.")
         {
             SimulateCommand.Create(),
+            ScoreCommand.Create(),
         };
         var parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)
