@@ -7,16 +7,25 @@ internal static class DeskConsole
 {
     public static (int Status, string Errors) Run(params string[] args)
     {
-        var before = Console.Error;
+        var (status, _, errors) = RunAll(args);
+        return (status, errors);
+    }
+
+    public static (int Status, string Output, string Errors) RunAll(params string[] args)
+    {
+        var (outBefore, errorBefore) = (Console.Out, Console.Error);
+        using var output = new StringWriter();
         using var errors = new StringWriter();
+        Console.SetOut(output);
         Console.SetError(errors);
         try
         {
-            return (DeskProgram.Run(args), errors.ToString());
+            return (DeskProgram.Run(args), output.ToString(), errors.ToString());
         }
         finally
         {
-            Console.SetError(before);
+            Console.SetOut(outBefore);
+            Console.SetError(errorBefore);
         }
     }
 }

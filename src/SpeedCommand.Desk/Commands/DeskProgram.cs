@@ -11,6 +11,8 @@ internal static class DeskProgram
         {
             SimulateCommand.Create(),
             ScoreCommand.Create(),
+            GuidanceCommand.Create(),
+            NoiseCommand.Create(),
         };
         var parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)
