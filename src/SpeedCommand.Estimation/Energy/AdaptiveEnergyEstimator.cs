@@ -8,13 +8,16 @@ namespace SpeedCommand.Estimation.Energy;
 public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
 {
     /// <summary>A climb less certain than this says nothing to a pilot, m/s.</summary>
-    private const double MaxUsefulSigmaMps = 1.5;
+    private const double MaxUsefulSigmaMps = 2.5;
 
     /// <summary>A sample that comes later than this is dropped, microseconds.</summary>
     private const long MaxLateUs = 500_000;
 
     /// <summary>Over a longer gap in either channel than this the old state is no guide to the new one, microseconds.</summary>
     private const long MaxGapUs = 2_000_000;
+
+    /// <summary>No height or kinetic height of a glider lies beyond it, m.</summary>
+    private const double MaxMetres = 50_000;
 
     private readonly NoiseLearner _learner = new();
     private readonly ModeMixture _modes;
@@ -67,7 +70,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
 
     private void Add(long timeUs, double metres, bool isHeight)
     {
-        if (!double.IsFinite(metres) || (_started && _timeUs - timeUs > MaxLateUs))
+        if (!(Math.Abs(metres) <= MaxMetres) || (_started && _timeUs - timeUs > MaxLateUs))
         {
             return;
         }

@@ -13,7 +13,6 @@ public sealed class EstimatorTrial : ISimulatedFlightSink, IPictureSink
     private readonly IEnergyEstimator[] _candidates;
     private readonly FlightPipeline _pipeline;
     private readonly Dictionary<string, int> _streams = [];
-    private double _nettoMps = double.NaN;
 
     /// <summary>Makes ready.</summary>
     /// <param name="settings">The glider and its settings.</param>
@@ -23,6 +22,9 @@ public sealed class EstimatorTrial : ISimulatedFlightSink, IPictureSink
         _candidates = [.. candidates];
         _pipeline = new FlightPipeline(settings, this, new EstimatorPanel(_candidates));
     }
+
+    /// <summary>The newest picture's netto, m/s; NaN when blank.</summary>
+    public double NettoMps { get; private set; } = double.NaN;
 
     /// <summary>What was noted, in the order of time.</summary>
     public List<ScoredPoint> Points { get; } = [];
@@ -45,9 +47,9 @@ public sealed class EstimatorTrial : ISimulatedFlightSink, IPictureSink
     {
         _pipeline.AdvanceTo(truth.TimeUs);
         var timeUs = truth.TimeUs;
-        Points.Add(new ScoredPoint(truth, Array.ConvertAll(_candidates, candidate => candidate.EstimateAt(timeUs)), _nettoMps));
+        Points.Add(new ScoredPoint(truth, Array.ConvertAll(_candidates, candidate => candidate.EstimateAt(timeUs)), NettoMps));
     }
 
     /// <inheritdoc/>
-    public void OnPicture(in CockpitPicture picture) => _nettoMps = picture.NettoMps.Value;
+    public void OnPicture(in CockpitPicture picture) => NettoMps = picture.NettoMps.Value;
 }

@@ -1,0 +1,21 @@
+using SpeedCommand.Estimation.Energy;
+
+namespace SpeedCommand.Simulation.Scoring;
+
+/// <summary>The estimators that can be scored by name. A new one is one file that implements <see cref="IEnergyEstimator"/> and one line here.</summary>
+public static class EstimatorCatalogue
+{
+    /// <summary>All of them; the first is the one flown.</summary>
+    public static IReadOnlyList<NamedEstimator> All { get; } =
+    [
+        new("adaptive", (heightLagS, kineticLagS) => new AdaptiveEnergyEstimator(heightLagS, kineticLagS)),
+        new("adaptive-no-lag", (_, _) => new AdaptiveEnergyEstimator()),
+        new("plain", (_, _) => new EnergyHeightFilter()),
+        new("canary", (_, _) => new HeightOnlyCanary()),
+    ];
+
+    /// <summary>Finds one.</summary>
+    /// <param name="name">Its name.</param>
+    /// <returns>The estimator; null when there is none of that name.</returns>
+    public static NamedEstimator? Find(string name) => All.FirstOrDefault(estimator => estimator.Name == name);
+}
