@@ -180,6 +180,14 @@ public sealed class PolarCommandTests(ReferenceGlider glider) : IClassFixture<Re
     }
 
     [Fact]
+    public void GliderFileThatIsNotThere_Exit66()
+    {
+        var (status, errors) = DeskConsole.Run("polar", "--glider", "paper-plane.json");
+        Assert.Equal(66, status);
+        Assert.StartsWith("speedcommand-desk: paper-plane.json: ", errors, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void NoGlider_NamesThoseThatComeWithTheProgram()
     {
         var (status, errors) = DeskConsole.Run("polar");
