@@ -7,13 +7,13 @@ internal static class DeskConsole
 {
     public static (int Status, string Errors) Run(params string[] args)
     {
-        var (status, _, errors) = RunAll(args);
+        var (status, _, errors) = RunToText(args);
         return (status, errors);
     }
 
-    public static (int Status, string Output, string Errors) RunAll(params string[] args)
+    public static (int Status, string Output, string Errors) RunToText(params string[] args)
     {
-        var (outBefore, errorBefore) = (Console.Out, Console.Error);
+        var (outputBefore, errorsBefore) = (Console.Out, Console.Error);
         using var output = new StringWriter();
         using var errors = new StringWriter();
         Console.SetOut(output);
@@ -24,8 +24,8 @@ internal static class DeskConsole
         }
         finally
         {
-            Console.SetOut(outBefore);
-            Console.SetError(errorBefore);
+            Console.SetOut(outputBefore);
+            Console.SetError(errorsBefore);
         }
     }
 }

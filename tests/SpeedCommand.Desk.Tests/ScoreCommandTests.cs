@@ -13,7 +13,7 @@ public sealed class ScoreCommandTests : IDisposable
     public void Run_ScenarioAsJson_HasARowForEachEstimatorAndAPicture()
     {
         var picture = Path.Combine(_folder, "step.png");
-        var (status, output, _) = DeskConsole.RunAll("score", "step", "--seeds", "2", "--estimators", "adaptive,canary", "--json", "--plot", picture);
+        var (status, output, _) = DeskConsole.RunToText("score", "step", "--seeds", "2", "--estimators", "adaptive,canary", "--json", "--plot", picture);
         Assert.Equal(0, status);
         using var json = JsonDocument.Parse(output);
         Assert.Equal(["adaptive", "canary"], json.RootElement.EnumerateArray().Select(row => row.GetProperty("estimator").GetString()));
@@ -27,7 +27,7 @@ public sealed class ScoreCommandTests : IDisposable
     {
         var log = Path.Combine(_folder, "demo.log");
         Assert.Equal(0, DeskConsole.Run("simulate", "demo", "--seed", "3", "--out", log).Status);
-        var (status, output, _) = DeskConsole.RunAll("score", log, "--estimators", "adaptive");
+        var (status, output, _) = DeskConsole.RunToText("score", log, "--estimators", "adaptive");
         Assert.Equal(0, status);
         Assert.Contains("| demo.log |  | adaptive |", output, StringComparison.Ordinal);
     }
@@ -37,7 +37,7 @@ public sealed class ScoreCommandTests : IDisposable
     {
         var log = Path.Combine(_folder, "demo.log");
         DeskConsole.Run("simulate", "demo", "--seed", "3", "--out", log);
-        var (status, output, _) = DeskConsole.RunAll("noise", log);
+        var (status, output, _) = DeskConsole.RunToText("noise", log);
         Assert.Equal(0, status);
         var row = output.Split('\n').Single(line => line.Contains("StaticPressurePa", StringComparison.Ordinal)).Split('|');
         // 1.2 Pa of noise and a quantum of 1 Pa: root of 1.44 + 1/12.

@@ -108,6 +108,42 @@ public sealed class PictureTests
         Assert.Equal(FlightPhase.Gliding, cockpit.Last.Phase);
     }
 
+    [Theory]
+    [InlineData("G,1.50,,LOAD")]
+    [InlineData("A,40.0,D,BANK")]
+    public void UnderLoad_NoTargetLiesBelowTheStallOfThatLoad(string load)
+    {
+        // Stall speed goes with the square root of the load factor (textbook), here 66 km/h at 1 g with 5 per cent of margin.
+        var loadFactor = load[0] == 'G' ? 1.5 : 1 / Math.Cos(40 * Math.PI / 180);
+        var cockpit = new Cockpit();
+        cockpit.Fly(5, t => 90_000 - 40 * t, _ => 400, load);
+        cockpit.Fly(10, t => 90_000 - 40 * t, _ => 400, load);
+        var floor = 66 / 3.6 * 1.05 * Math.Sqrt(loadFactor) - 0.05;
+        Assert.All(cockpit.Pictures.Skip(50), picture => Assert.InRange(picture.HoldIndicatedMps.Value, floor, 60));
+        Assert.All(cockpit.Pictures.Skip(50), picture => Assert.InRange(picture.SpeedToFlyIndicatedMps.Value, floor, 60));
+    }
+
+    [Fact]
+    public void ThermalWithoutLoadSensor_HoldsTheSpeedOfAUsualTurn()
+    {
+        var cockpit = new Cockpit();
+        cockpit.Fly(5, _ => 90_000, _ => 300);
+        var straight = cockpit.Last.MinSinkIndicatedMps.Value;
+        cockpit.Fly(30, t => 90_000 - 30 * t, _ => 300);
+        Assert.Equal(FlightPhase.Climbing, cockpit.Last.Phase);
+        Assert.Equal(Math.Sqrt(1 / Math.Cos(40 * Math.PI / 180)), cockpit.Last.HoldIndicatedMps.Value / straight, 0.005);
+    }
+
+    [Fact]
+    public void SlowerThanThePolarBegins_TheCallToSpeedUpStays_AndTheReasonIsNamed()
+    {
+        var cockpit = new Cockpit();
+        cockpit.Fly(10, _ => 90_000, _ => 150);
+        Assert.False(cockpit.Last.NettoMps.IsKnown);
+        Assert.True(cockpit.Last.HoldIndicatedMps.Value > cockpit.Last.IndicatedAirspeedMps.Value);
+        Assert.Equal(Faults.OutsidePolar | Faults.TemperatureSilent, cockpit.Last.Faults);
+    }
+
     [Fact]
     public void ShortPull_IsNoThermal()
     {

@@ -13,30 +13,30 @@ public sealed partial class CommandLineTests : IDisposable
 
     private sealed record Outcome(int ExitStatus, string Output, string Error);
 
-    private Process Start(params string[] args)
+    private Process Start(string program, params string[] args)
     {
-        var start = new ProcessStartInfo("dotnet")
+        var start = new ProcessStartInfo(program, args)
         {
             WorkingDirectory = AppContext.BaseDirectory,
             RedirectStandardOutput = true,
             RedirectStandardError = true,
             RedirectStandardInput = true,
         };
-        start.ArgumentList.Add(Path.Combine(AppContext.BaseDirectory, "speedcommand.dll"));
-        foreach (var arg in args)
-        {
-            start.ArgumentList.Add(arg);
-        }
-
         start.Environment["XDG_STATE_HOME"] = _folder.FullName;
         start.Environment["XDG_CONFIG_HOME"] = _folder.FullName;
         start.Environment["LANG"] = "de_DE.UTF-8";
         return Process.Start(start)!;
     }
 
-    private async Task<Outcome> RunAsync(params string[] args)
+    private Process StartProgram(params string[] args) => Start("dotnet", [Path.Combine(AppContext.BaseDirectory, "speedcommand.dll"), .. args]);
+
+    private Task<Outcome> RunAsync(params string[] args) => EndAsync(StartProgram(args));
+
+    private Task<Outcome> RunShellAsync(string command) => EndAsync(Start("sh", "-c", command));
+
+    private static async Task<Outcome> EndAsync(Process started)
     {
-        using var process = Start(args);
+        using var process = started;
         var output = process.StandardOutput.ReadToEndAsync();
         var error = process.StandardError.ReadToEndAsync();
         await process.WaitForExitAsync();
@@ -76,13 +76,16 @@ public sealed partial class CommandLineTests : IDisposable
     [InlineData(2, "--mass: expected a number with a unit (kg, g, lb), found '340'", "targets", "--glider", "marram-15.json", "--mass", "340")]
     [InlineData(2, "--glider: expected a glider file", "targets")]
     [InlineData(2, "--units: expected metric, aviation, british or american, found 'imperial'", "targets", "--glider", "marram-15.json", "--units", "imperial")]
-    [InlineData(78, "nowhere.json: expected a glider file", "targets", "--glider", "nowhere.json")]
+    [InlineData(66, "nowhere.json: expected a glider file", "targets", "--glider", "nowhere.json")]
     [InlineData(2, "--pace: expected together with --bench", "run", "--pace", "3")]
     [InlineData(2, "--pace: expected 0.1 to 50, found 100", "run", "--bench", "--pace", "100")]
     [InlineData(2, "--with: expected NAME=VALUE, found 'bugs'", "run", "--with", "bugs")]
     [InlineData(66, "nowhere.log", "run", "--bench", "nowhere.log")]
     [InlineData(66, "nowhere.json: expected a settings file", "check", "--settings", "nowhere.json")]
     [InlineData(66, "nowhere.log", "replay", "nowhere.log")]
+    [InlineData(2, "--out: expected another file than the log, found 'demo.log'", "replay", "demo.log", "--out", "demo.log")]
+    [InlineData(2, "--out: expected logs of different names, found two that both give", "replay", "a/f.log", "b/f.log.gz", "--out", "out")]
+    [InlineData(78, "/: expected a settings file, found a folder", "check", "--settings", "/")]
     [InlineData(2, "--pace: expected max or a number from 0.1 to 1000, found 'fast'", "replay", "a.log", "--pace", "fast")]
     [InlineData(78, "--settings: expected a settings file, found none here or at ", "run", "--with", "glider=marram-15.json")]
     [InlineData(74, "/no-such-folder/x.jsonl", "replay", "demo.log", "--out", "/no-such-folder/x.jsonl")]
@@ -128,14 +131,55 @@ public sealed partial class CommandLineTests : IDisposable
         Assert.Equal(10, outcome.Output.TrimEnd().Split('\n').Length);
     }
 
+    [Fact]
+    public async Task Check_TellsDevicesNamedTwice_AndTextsThatAreNone()
+    {
+        var settings = Save("settings.json", """
+            { "glider": true,
+              "ports": [ { "name": "static", "device": "/dev/a" },
+                         { "name": "pitot", "device": "/dev/a" } ],
+              "displays": { "serialText": { "device": "/dev/a" } },
+              "recorder": { "folder": 5 } }
+            """);
+        var outcome = await RunAsync("check", "--settings", settings);
+        Assert.Equal(78, outcome.ExitStatus);
+        string[] expected =
+        [
+            $"{settings}:1: glider: expected a text in quotes, found true", $"{settings}: glider: expected a glider file",
+            $"{settings}:3: ports.pitot.device: expected a device of its own, found that of port 'static'",
+            $"{settings}:4: displays.serialText.device: expected a device of its own, found that of port 'static'",
+            $"{settings}:5: recorder.folder: expected a text in quotes, found 5",
+        ];
+        Assert.All(expected.Zip(outcome.Error.Split('\n')), pair => Assert.StartsWith(pair.First, pair.Second, StringComparison.Ordinal));
+    }
+
     [LinuxFact]
-    public async Task Bench_StoppedByASignal_EndsTheFlightCleanly()
+    public async Task Run_OntoAFullDisk_FliesOn()
+    {
+        // The panel's lines have nowhere to go; the bench flight is flown to its end all the same.
+        var log = TestFlightLog.Write(_folder.FullName, 20);
+        var outcome = await RunShellAsync($"dotnet '{Path.Combine(AppContext.BaseDirectory, "speedcommand.dll")}' run --bench '{log}' --pace 10 --with glider=marram-15.json > /dev/full");
+        Assert.Equal(74, outcome.ExitStatus);
+        Assert.Contains("StatusLineService stopped", outcome.Error, StringComparison.Ordinal);
+        Assert.DoesNotContain("   at ", outcome.Error, StringComparison.Ordinal);
+        var record = Directory.GetFiles(Path.Combine(_folder.FullName, "speedcommand", "flights")).Single();
+        Assert.StartsWith("#end ", File.ReadAllLines(record)[^1], StringComparison.Ordinal);
+        Assert.Equal(800, File.ReadLines(record).Count(line => line.Contains('$')));
+    }
+
+    [LinuxFact]
+    public Task Bench_StoppedByTerminate_EndsTheFlightCleanly() => StopBySignalAsync(TerminateSignal);
+
+    [LinuxFact]
+    public Task Bench_StoppedByHangUp_EndsTheFlightCleanly() => StopBySignalAsync(HangUpSignal);
+
+    private async Task StopBySignalAsync(int signal)
     {
         var log = TestFlightLog.Write(_folder.FullName, 60);
-        using var process = Start("run", "--bench", log, "--pace", "1", "--with", "glider=marram-15.json");
+        using var process = StartProgram("run", "--bench", log, "--pace", "1", "--with", "glider=marram-15.json");
         await process.StandardOutput.ReadLineAsync();
         await Task.Delay(1500);
-        Assert.Equal(0, Kill(process.Id, TerminateSignal));
+        Assert.Equal(0, Kill(process.Id, signal));
         var output = await process.StandardOutput.ReadToEndAsync();
         await process.WaitForExitAsync();
         Assert.Equal(0, process.ExitCode);
@@ -144,7 +188,7 @@ public sealed partial class CommandLineTests : IDisposable
         Assert.StartsWith("#end ", File.ReadAllLines(record)[^1], StringComparison.Ordinal);
     }
 
-    private const int TerminateSignal = 15;
+    private const int TerminateSignal = 15, HangUpSignal = 1;
 
     [LibraryImport("libc", EntryPoint = "kill")]
     private static partial int Kill(int process, int signal);

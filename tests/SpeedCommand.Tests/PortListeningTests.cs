@@ -49,6 +49,38 @@ public sealed class PortListeningTests
     }
 
     [LinuxFact]
+    public async Task NoiseWithDollarSigns_IsNotTakenForSentencesWithoutChecksum()
+    {
+        var (_, verdict) = await ListenAsync([0x80, (byte)'$', 0xFE, (byte)'\n', (byte)'$', 0x1C, (byte)'\n']);
+        Assert.Contains("is 115200 baud what the board sends at?", verdict, StringComparison.Ordinal);
+    }
+
+    [LinuxFact]
+    public async Task WrongChecksums_PointToTheChecksum()
+    {
+        var wrong = (byte[])Good.Clone();
+        wrong[8] ^= 1;
+        var (isGood, verdict) = await ListenAsync(wrong);
+        Assert.False(isGood);
+        Assert.Contains("lines with a wrong checksum", verdict, StringComparison.Ordinal);
+    }
+
+    [LinuxFact]
+    public async Task NoLineEnds_AreNamed()
+    {
+        var (_, verdict) = await ListenAsync(Good[..^2]);
+        Assert.Contains("without a line end", verdict, StringComparison.Ordinal);
+    }
+
+    [LinuxFact]
+    public async Task ImpossibleValues_AreNotGood()
+    {
+        var (isGood, verdict) = await ListenAsync([.. TestFlightLog.Sentence($"P,5.0,P,STATIC"), (byte)'\n']);
+        Assert.False(isGood);
+        Assert.Contains("every one impossible", verdict, StringComparison.Ordinal);
+    }
+
+    [LinuxFact]
     public async Task NoChecksum_NamesTheSetting()
     {
         var (isGood, verdict) = await ListenAsync([.. Good.AsSpan(0, Good.Length - 5), (byte)'\n']);

@@ -7,8 +7,9 @@ internal static class DeskProgram
 {
     public static int Run(string[] args)
     {
-        var root = new RootCommand("SpeedCommand at the desk: simulates flights, scores estimators, measures sensors. Advisory only; not a flight instrument.")
+        var root = new RootCommand("SpeedCommand at the desk: polars, knee-board cards, plans, simulated flights, estimators scored. Advisory only; not a flight instrument.")
         {
+            PolarCommand.Create(),
             SimulateCommand.Create(),
             ScoreCommand.Create(),
             GuidanceCommand.Create(),
@@ -26,7 +27,7 @@ internal static class DeskProgram
         }
         catch (DeskFailure failure)
         {
-            return Fail(failure.Status, failure.Message);
+            return Fail(failure.Status, [.. failure.Messages]);
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {
@@ -34,9 +35,13 @@ internal static class DeskProgram
         }
     }
 
-    private static int Fail(ExitStatus status, string message)
+    private static int Fail(ExitStatus status, params string[] messages)
     {
-        Console.Error.WriteLine($"speedcommand-desk: {message.ReplaceLineEndings(" ")}");
+        foreach (var message in messages)
+        {
+            Console.Error.WriteLine($"speedcommand-desk: {message.ReplaceLineEndings(" ")}");
+        }
+
         return (int)status;
     }
 }

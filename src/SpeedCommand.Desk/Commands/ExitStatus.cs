@@ -8,4 +8,5 @@ internal enum ExitStatus
     BadData = 65,
     NoInput = 66,
     InputOutput = 74,
+    BadSettings = 78,
 }

@@ -15,7 +15,9 @@ public static class FaultWords
         "bad static",
         "bad airspeed",
         "bad temperature",
+        "bad load",
         "unreadable data",
+        "off the polar",
         "no speed limits",
         "not recording",
     ];

@@ -34,6 +34,11 @@ public static class JsonPlaces
         });
         try
         {
+            if (utf8.Trim(" \t\r\n"u8).IsEmpty)
+            {
+                throw new JsonException("an empty file", "", 0, 0);
+            }
+
             reader.Read();
             var lines = new LineCounter(utf8);
             top = ReadValue(ref reader, ref lines, "");

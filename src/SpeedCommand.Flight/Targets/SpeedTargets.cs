@@ -34,6 +34,9 @@ public sealed class SpeedTargets
     /// <summary>The glider.</summary>
     public Glider Glider => _glider;
 
+    /// <summary>How far every speed stays above the stall, as a fraction of it.</summary>
+    public double StallMargin => _stallMargin;
+
     /// <summary>The glider's own sink at an airspeed, as netto needs it.</summary>
     /// <param name="airspeed">True airspeed.</param>
     /// <param name="air">The air.</param>

@@ -14,6 +14,7 @@ public static class FaultNames
         new(Faults.TemperatureRange, "temperature-range"),
         new(Faults.LoadRange, "load-range"),
         new(Faults.BadLines, "bad-lines"),
+        new(Faults.OutsidePolar, "outside-polar"),
         new(Faults.NoLimits, "no-limits"),
         new(Faults.RecorderStopped, "recorder-stopped"),
     ];

@@ -31,9 +31,12 @@ public enum Faults
     /// <summary>Lines came in lately that no valid sentence could be read from.</summary>
     BadLines = 1 << 7,
 
+    /// <summary>The glider flies slower or faster than its polar knows: netto is blank, the speed to fly is that of still air.</summary>
+    OutsidePolar = 1 << 8,
+
     /// <summary>The glider file has no limits, or none for this altitude: the speed to fly is not shown.</summary>
-    NoLimits = 1 << 8,
+    NoLimits = 1 << 9,
 
     /// <summary>The flight is no longer being recorded; set by the service, never by the pipeline.</summary>
-    RecorderStopped = 1 << 9,
+    RecorderStopped = 1 << 10,
 }

@@ -1,12 +1,17 @@
+using SpeedCommand.Pipeline.Picture;
+
 namespace SpeedCommand.Pipeline.Stages;
 
 /// <summary>
-/// Load factor from an accelerometer, else from the bank of a level turn, else 1. The present load serves netto; the steady
+/// Load factor from an accelerometer, else from the bank of a level turn, else assumed. The present load serves netto; the steady
 /// load, smoothed over a second, serves targets and phase, since a gust is no turn.
 /// </summary>
 internal sealed class LoadStage
 {
     private const double SmoothingS = 1;
+
+    /// <summary>Load factor of a 40-degree bank, the usual one in a thermal (common practice).</summary>
+    private const double ThermallingLoad = 1.3054;
 
     private TimedValue _loadFactor;
     private TimedValue _bankRad;
@@ -42,7 +47,12 @@ internal sealed class LoadStage
         return _bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs) ? 1 / Math.Cos(_bankRad.Value) : 1;
     }
 
-    public double Steady(long nowUs) => IsMeasured(nowUs) ? _steady : 1;
+    /// <summary>Never below 1: a push-over is no reason to fly nearer the stall. Without a sensor, circling is taken as a usual turn.</summary>
+    public double Steady(long nowUs, FlightPhase phase)
+    {
+        var assumed = phase == FlightPhase.Climbing ? ThermallingLoad : 1;
+        return IsMeasured(nowUs) ? Math.Max(1, _steady) : assumed;
+    }
 
     private void Smooth(long timeUs, double loadFactor)
     {

@@ -11,6 +11,9 @@ internal sealed class PictureStage
 {
     private const double AverageSpanS = 30;
 
+    /// <summary>No glider flies slower; a parked one in the wind may read less (40 km/h).</summary>
+    private const double SlowestFlightMps = 40 / 3.6;
+
     /// <summary>Handbook polars are measured to about this share of the sink (common practice: "a few per cent").</summary>
     private const double PolarUncertainty = 0.05;
 
@@ -52,7 +55,7 @@ internal sealed class PictureStage
             _targets.Reset();
         }
 
-        var phase = _phase.Judge(new PhaseEvidence(_load.IsMeasured(nowUs), _load.Steady(nowUs),
+        var phase = _phase.Judge(new PhaseEvidence(_load.IsMeasured(nowUs), _load.Steady(nowUs, FlightPhase.Gliding),
             picture.ClimbMps.Value, picture.IndicatedAirspeedMps.Value, picture.MinSinkIndicatedMps.Value));
         return picture with
         {
@@ -99,7 +102,8 @@ internal sealed class PictureStage
 
     private CockpitPicture WithTargets(in CockpitPicture picture, long nowUs)
     {
-        var targets = _targets.At(new TargetInputs(_airData.Air, _load.Steady(nowUs), picture.NettoMps, AgeS(nowUs)));
+        var targets = _targets.At(new TargetInputs(
+            _airData.Air, _load.Steady(nowUs, _phase.Phase), picture.NettoMps, IsOutsidePolar(picture), AgeS(nowUs)));
         var inHand = _heightInHand.At(_airData.Air, _airData.StaticAgeS(nowUs));
         return picture with
         {
@@ -111,6 +115,11 @@ internal sealed class PictureStage
             RangeM = inHand.RangeM,
         };
     }
+
+    /// <summary>In flight, netto goes blank where the polar ends; standing on the ground is no fault.</summary>
+    private static bool IsOutsidePolar(in CockpitPicture picture) =>
+        picture.ClimbMps.IsKnown && !picture.NettoMps.IsKnown && picture.IndicatedAirspeedMps.IsKnown
+        && picture.IndicatedAirspeedMps.Value > SlowestFlightMps;
 
     /// <summary>A number that rests on both inputs is as old as the older of them.</summary>
     private double AgeS(long nowUs) => Math.Max(_airData.StaticAgeS(nowUs), _airData.AirspeedAgeS(nowUs));
@@ -133,6 +142,7 @@ internal sealed class PictureStage
         faults |= _airData.IsStaticFresh(nowUs) ? Faults.None : Faults.StaticSilent;
         faults |= _airData.IsAirspeedFresh(nowUs) ? Faults.None : Faults.AirspeedSilent;
         faults |= _airData.IsTemperatureFresh(nowUs) ? Faults.None : Faults.TemperatureSilent;
+        faults |= IsOutsidePolar(picture) ? Faults.OutsidePolar : Faults.None;
         faults |= picture.NettoMps.IsKnown && !picture.SpeedToFlyIndicatedMps.IsKnown ? Faults.NoLimits : Faults.None;
         return faults;
     }

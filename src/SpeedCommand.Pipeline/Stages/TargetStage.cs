@@ -5,12 +5,13 @@ using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Pipeline.Stages;
 
-/// <summary>What the targets rest on. Every value is fresh; a blank netto is taken as still air for no target but the speed to fly.</summary>
+/// <summary>What the targets rest on. Every value is fresh; without netto there is no speed to fly, but for where the polar ends.</summary>
 /// <param name="Air">The air at the glider.</param>
 /// <param name="SteadyLoad">Load factor smoothed over a second.</param>
 /// <param name="Netto">Vertical motion of the air, m/s.</param>
+/// <param name="IsOutsidePolar">Whether netto is blank because the polar does not know the present airspeed.</param>
 /// <param name="AgeS">Age of the older of static pressure and airspeed, s.</param>
-internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, double AgeS);
+internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, bool IsOutsidePolar, double AgeS);
 
 /// <summary>The speeds to fly and how they came about.</summary>
 internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy);
@@ -35,13 +36,19 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
     public Targets At(in TargetInputs inputs)
     {
         var straight = LoadingAt(1);
-        var minSink = targets.MinSink(inputs.Air, LoadingAt(Math.Max(1, inputs.SteadyLoad)));
+        var minSink = targets.MinSink(inputs.Air, LoadingAt(inputs.SteadyLoad));
         var bestGlide = targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
-        var netto = SmoothNetto(inputs.Netto);
+        var netto = inputs.IsOutsidePolar ? 0 : SmoothNetto(inputs.Netto);
         var speedToFly = double.IsNaN(netto)
             ? default
             : targets.SpeedToFly(inputs.Air, straight, settings.ExpectedClimbMps, netto);
-        var sigma = Math.Abs(speedToFly.AirSensitivity) * inputs.Netto.Sigma;
+        var sigma = inputs.IsOutsidePolar ? double.NaN : Math.Abs(speedToFly.AirSensitivity) * inputs.Netto.Sigma;
+        if (speedToFly.Speed.IsKnown && minSink.IsKnown && speedToFly.Speed.IndicatedAirspeedMps < minSink.IndicatedAirspeedMps)
+        {
+            // In a turn or a pull-up the stall comes up; so does the slowest speed that may be asked for.
+            speedToFly = speedToFly with { Speed = minSink };
+        }
+
         return new Targets(
             Show(minSink, 0, inputs.AgeS),
             Show(bestGlide.Speed, 0, inputs.AgeS),

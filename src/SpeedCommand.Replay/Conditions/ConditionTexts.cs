@@ -35,4 +35,22 @@ public sealed record ConditionTexts
 
     /// <summary>Extra sink of a dirty wing.</summary>
     public string? Bugs { get; init; }
+
+    /// <summary>Collects the options.</summary>
+    /// <param name="valueOf">The text given for the option of a name in <see cref="ConditionOption.All"/>; null when not given.</param>
+    /// <returns>The texts.</returns>
+    public static ConditionTexts From(Func<string, string?> valueOf) => new()
+    {
+        Glider = valueOf("--glider"),
+        Mass = valueOf("--mass"),
+        Altitude = valueOf("--altitude"),
+        Pressure = valueOf("--pressure"),
+        Oat = valueOf("--oat"),
+        Humidity = valueOf("--humidity"),
+        Climb = valueOf("--climb"),
+        Air = valueOf("--air"),
+        Headwind = valueOf("--headwind"),
+        Bank = valueOf("--bank"),
+        Bugs = valueOf("--bugs"),
+    };
 }

@@ -24,6 +24,9 @@ public sealed class ConditionsReader
     /// <summary>What is wrong or doubtful in the glider file.</summary>
     public IReadOnlyList<JsonProblem> GliderProblems { get; private set; } = [];
 
+    /// <summary>Whether the glider file named does not exist.</summary>
+    public bool IsGliderMissing { get; private set; }
+
     /// <summary>Reads the options.</summary>
     /// <param name="texts">The options as written.</param>
     /// <returns>The conditions, or null when something is wrong.</returns>
@@ -56,6 +59,7 @@ public sealed class ConditionsReader
             return null;
         }
 
+        IsGliderMissing = !GliderFiles.Exists(name, "");
         var result = GliderFiles.Read(name, "");
         GliderProblems = result.Problems;
         return result.Glider;

@@ -19,6 +19,9 @@ internal static class FlightLogFormat
     /// <summary>A truth record carries JSON and may be longer than any sentence; headers and truth share this bound.</summary>
     public const int MaxLineLength = 8192;
 
+    /// <summary>Longer than any silence of a cockpit that is switched on; a stamp beyond it is a spoilt digit.</summary>
+    public const long MaxSilenceUs = 6L * 3600 * 1_000_000;
+
     public static ReadOnlySpan<byte> Magic => "#speedcommand-log "u8;
 
     public static ReadOnlySpan<byte> Start => "#start "u8;

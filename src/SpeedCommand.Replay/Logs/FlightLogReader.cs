@@ -172,11 +172,17 @@ public sealed class FlightLogReader : IDisposable
             return false;
         }
 
+        if (length > FlightLogFormat.MaxContentLength)
+        {
+            Report($"expected at most {FlightLogFormat.MaxContentLength} bytes from a stream, found {length}");
+            return false;
+        }
+
         record = new LogRecord(LogRecordKind.Line, timeUs, name, _content.AsSpan(0, length));
         return true;
     }
 
-    /// <summary>A stamp must not lie before the one ahead of it: the pipeline's time never runs backwards.</summary>
+    /// <summary>The pipeline's time never runs backwards, and makes ten pictures for each second it runs forwards.</summary>
     private bool TryReadStamp(ReadOnlySpan<byte> text, out long timeUs)
     {
         if (!LogStamp.TryParse(text, out timeUs))
@@ -185,9 +191,10 @@ public sealed class FlightLogReader : IDisposable
             return false;
         }
 
-        if (timeUs < _lastTimeUs)
+        if (timeUs < _lastTimeUs || timeUs - _lastTimeUs > FlightLogFormat.MaxSilenceUs)
         {
-            Report($"expected a time not before {_lastTimeUs / 1e6:F6}, found '{FlightLogFormat.Show(text)}'");
+            Report(FormattableString.Invariant(
+                $"expected a time not before {_lastTimeUs / 1e6:F6} and at most six hours after it, found '{FlightLogFormat.Show(text)}'"));
             return false;
         }
 

@@ -38,7 +38,7 @@ internal sealed class LogLines(Stream stream) : IDisposable
 
             if (!Fill())
             {
-                IsCut = _end > _start || IsTooLong;
+                IsCut |= _end > _start || IsTooLong;
                 _lineLength = 0;
                 return false;
             }

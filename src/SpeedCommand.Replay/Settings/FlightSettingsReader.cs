@@ -48,7 +48,7 @@ public static class FlightSettingsReader
 
     private static Glider? ReadGlider(SettingsSource source, string? gliderOption, string? gliderFallback)
     {
-        var setting = source.Find("glider");
+        var setting = source.Text("glider");
         var name = gliderOption ?? setting?.Text ?? gliderFallback;
         if (string.IsNullOrEmpty(name))
         {
@@ -58,6 +58,12 @@ public static class FlightSettingsReader
         }
 
         var result = GliderFiles.Read(name, source.File);
+        if (result.Glider is null && gliderOption is null && setting is not null && !GliderFiles.Exists(name, source.File))
+        {
+            source.Report(setting, result.Problems[0].Message + $"; '{name}' is none");
+            return null;
+        }
+
         source.Report(result.Problems);
         return result.Glider;
     }

@@ -31,6 +31,12 @@ public static class GliderFiles
             $"expected a glider file, found none by that path, beside the settings or among {string.Join(", ", Bundled())}")]);
     }
 
+    /// <summary>Whether there is a glider file of that name in any of the places searched.</summary>
+    /// <param name="name">Path or bare file name.</param>
+    /// <param name="besideFile">A file whose folder is searched next; empty for none.</param>
+    /// <returns>Whether there is a file, readable or not.</returns>
+    public static bool Exists(string name, string besideFile) => Candidates(name, besideFile).Any(File.Exists);
+
     /// <summary>The glider files that lie beside the program.</summary>
     /// <returns>File names in order.</returns>
     public static IEnumerable<string> Bundled() => Directory.Exists(BundledFolder)

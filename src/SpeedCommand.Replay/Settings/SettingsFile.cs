@@ -17,7 +17,11 @@ public static class SettingsFile
     {
         problem = default;
         JsonPlace? top = null;
-        if (path is not null)
+        if (Directory.Exists(path))
+        {
+            problem = new JsonProblem(path, 0, "", "expected a settings file, found a folder");
+        }
+        else if (path is not null)
         {
             try
             {

@@ -79,6 +79,21 @@ public sealed class SettingsSource
         return new SettingText(place.Text, File, place.Line, path);
     }
 
+    /// <summary>A setting that must be a text: a path, a name.</summary>
+    /// <param name="path">The setting's path.</param>
+    /// <returns>The text and where it stands, or null when nothing sets it or it is no text.</returns>
+    public SettingText? Text(string path)
+    {
+        var setting = Find(path);
+        if (setting is { Line: > 0 } && InFile(path) is { Kind: not JsonPlaceKind.Text })
+        {
+            Report(setting, $"expected a text in quotes, found {setting.Text}");
+            return null;
+        }
+
+        return setting;
+    }
+
     /// <summary>A quantity with a unit.</summary>
     /// <param name="path">The setting's path.</param>
     /// <param name="kind">What it measures.</param>

@@ -1,4 +1,5 @@
 using System.Text;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Replay.Logs;
 
 namespace SpeedCommand.Bench;
@@ -24,6 +25,11 @@ internal sealed class BenchFlight : IDisposable
                 var name = Encoding.ASCII.GetString(record.StreamName);
                 if (!_lines.ContainsKey(name))
                 {
+                    if (_lines.Count == PipelineBounds.MaxStreams)
+                    {
+                        throw new FormatException($"expected at most {PipelineBounds.MaxStreams} streams, found one more: '{name}'");
+                    }
+
                     _lines.Add(name, new PseudoTerminal());
                 }
             }

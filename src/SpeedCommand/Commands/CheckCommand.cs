@@ -1,5 +1,6 @@
 using System.CommandLine;
 using SpeedCommand.Ports;
+using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
 namespace SpeedCommand.Commands;
@@ -56,7 +57,26 @@ internal static class CheckCommand
             Console.WriteLine("glider: warning: the file has no limits, so no speed to fly will be shown");
         }
 
-        return await ListenAsync(settings.Ports, portName, TimeSpan.FromSeconds(seconds), cancel).ConfigureAwait(false);
+        var isFolderGood = settings.Recorder is null || CheckFolder(settings.Recorder.Folder);
+        var status = await ListenAsync(settings.Ports, portName, TimeSpan.FromSeconds(seconds), cancel).ConfigureAwait(false);
+        return isFolderGood ? status : ExitStatus.InputOutput;
+    }
+
+    private static bool CheckFolder(string folder)
+    {
+        try
+        {
+            Directory.CreateDirectory(folder);
+            using var probe = new FileStream(Path.Combine(folder, $".check-{Environment.ProcessId}"), FileMode.CreateNew, FileAccess.Write,
+                FileShare.None, 1, FileOptions.DeleteOnClose);
+            Console.WriteLine($"recorder: {folder}: good");
+            return true;
+        }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            Console.WriteLine($"recorder: {folder}: flights cannot be recorded there: {fault.Message}");
+            return false;
+        }
     }
 
     /// <summary>All ports at once: a pilot checks a cockpit, not a cable.</summary>
@@ -76,6 +96,25 @@ internal static class CheckCommand
             Console.WriteLine(port.Verdict);
         }
 
+        if (portName is null)
+        {
+            TellMissing(chosen);
+        }
+
         return good.All(isGood => isGood) ? ExitStatus.Done : ExitStatus.InputOutput;
+    }
+
+    private static void TellMissing(PortListening[] ports)
+    {
+        var kinds = ports.SelectMany(port => port.Kinds).ToHashSet();
+        if (!kinds.Contains(ReadingKind.StaticPressurePa))
+        {
+            Console.WriteLine("missing: no static pressure (STATIC) from any port; without it everything stays blank");
+        }
+
+        if (!kinds.Contains(ReadingKind.ImpactPressurePa) && !kinds.Contains(ReadingKind.IndicatedAirspeedMps))
+        {
+            Console.WriteLine("missing: no airspeed (IMPACT or IAS) from any port; without it every target stays blank");
+        }
     }
 }

@@ -28,7 +28,13 @@ internal static class CommandTree
             return ExitStatus.Usage;
         }
 
-        // The host, not the command line library, answers signals: the flight's log must be closed first.
-        return await parsed.InvokeAsync(new InvocationConfiguration { ProcessTerminationTimeout = null }).ConfigureAwait(false);
+        // In the service the host answers signals: the flight's log must be closed first. Other commands are simply cancelled.
+        var configuration = new InvocationConfiguration();
+        if (parsed.CommandResult.Command.Name == RunCommand.Name)
+        {
+            configuration.ProcessTerminationTimeout = null;
+        }
+
+        return await parsed.InvokeAsync(configuration).ConfigureAwait(false);
     }
 }

@@ -77,7 +77,13 @@ internal static class DescentCommand
         if (isJson)
         {
             using var output = Console.OpenStandardOutput();
-            WriteJson(output, fromM, toM, minSink, bestGlide);
+            JsonNumbers.WriteObject(output, json =>
+            {
+                json.WriteNumber("fromM", fromM);
+                json.WriteNumber("toM", toM);
+                WriteResult(json, "minSink", minSink);
+                WriteResult(json, "bestGlide", bestGlide);
+            });
         }
         else
         {
@@ -85,21 +91,6 @@ internal static class DescentCommand
         }
 
         return ExitStatus.Done;
-    }
-
-    private static void WriteJson(Stream output, double fromM, double toM, DescentResult? minSink, DescentResult? bestGlide)
-    {
-        using (var json = new Utf8JsonWriter(output, new JsonWriterOptions { Indented = true }))
-        {
-            json.WriteStartObject();
-            json.WriteNumber("fromM", fromM);
-            json.WriteNumber("toM", toM);
-            WriteResult(json, "minSink", minSink);
-            WriteResult(json, "bestGlide", bestGlide);
-            json.WriteEndObject();
-        }
-
-        output.WriteByte((byte)'\n');
     }
 
     private static void WriteResult(Utf8JsonWriter json, string name, DescentResult? result)

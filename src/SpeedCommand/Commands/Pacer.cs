@@ -3,8 +3,11 @@ using System.Globalization;
 namespace SpeedCommand.Commands;
 
 /// <summary>Makes a replay wait so that it runs a given number of times faster than life.</summary>
-internal sealed class Pacer(TimeProvider time, double pace)
+internal sealed class Pacer(TimeProvider time, double pace, CancellationToken cancel)
 {
+    /// <summary>Far below what a wait may last at most, whatever the log says.</summary>
+    private static readonly TimeSpan LongestWait = TimeSpan.FromMinutes(1);
+
     private readonly long _start = time.GetTimestamp();
 
     public bool IsPaced => double.IsFinite(pace);
@@ -29,10 +32,10 @@ internal sealed class Pacer(TimeProvider time, double pace)
 
     public void WaitUntil(long timeUs)
     {
-        var ahead = TimeSpan.FromMicroseconds(timeUs / pace) - time.GetElapsedTime(_start);
-        if (ahead > TimeSpan.Zero)
+        while (!cancel.IsCancellationRequested
+            && TimeSpan.FromMicroseconds(timeUs / pace) - time.GetElapsedTime(_start) is var ahead && ahead > TimeSpan.Zero)
         {
-            Thread.Sleep(ahead);
+            cancel.WaitHandle.WaitOne(ahead < LongestWait ? ahead : LongestWait);
         }
     }
 }

@@ -14,6 +14,7 @@ namespace SpeedCommand.Commands;
 internal static class ReplayCommand
 {
     private const string StandardOutput = "-";
+    private static readonly string[] LogEndings = [".log.gz", ".log"];
 
     private sealed record Request(
         string[] Logs, FileInfo? Settings, string[]? With, string? Glider, string? Pace, string? Out, string Display);
@@ -45,6 +46,11 @@ internal static class ReplayCommand
         if (request.Logs.Length > 1 && request.Out is not null and not StandardOutput && File.Exists(request.Out))
         {
             return Fail(ExitStatus.Usage, $"--out: expected a folder for several logs, found the file '{request.Out}'");
+        }
+
+        if (OutputFault(request) is { } fault)
+        {
+            return Fail(ExitStatus.Usage, fault);
         }
 
         var worst = ExitStatus.Done;
@@ -115,7 +121,7 @@ internal static class ReplayCommand
         var rules = settings.Ports.ToDictionary(port => port.Name, port => port.Checksum, StringComparer.Ordinal);
         var replay = new FlightReplay(log, new FlightPipeline(settings.Flight, new PictureFan([.. sinks])),
             name => rules.GetValueOrDefault(name, ChecksumRule.Required));
-        var pacer = new Pacer(TimeProvider.System, pace);
+        var pacer = new Pacer(TimeProvider.System, pace, cancel);
         while (!cancel.IsCancellationRequested && replay.Step(pacer.IsPaced ? pacer.WaitUntil : null))
         {
         }
@@ -135,8 +141,33 @@ internal static class ReplayCommand
         }
 
         Directory.CreateDirectory(request.Out);
+        return Path.Combine(request.Out, StemOf(log) + ".jsonl");
+    }
+
+    /// <summary>A recording is not to be written over, by its own replay or by another's.</summary>
+    private static string? OutputFault(Request request)
+    {
+        if (request.Out is null or StandardOutput)
+        {
+            return null;
+        }
+
+        var outputs = request.Logs.Length == 1 ? [request.Out] : request.Logs.Select(log => Path.Combine(request.Out, StemOf(log) + ".jsonl")).ToArray();
+        var inputs = request.Logs.Select(Path.GetFullPath).ToHashSet(StringComparer.Ordinal);
+        if (outputs.FirstOrDefault(output => inputs.Contains(Path.GetFullPath(output))) is { } overwritten)
+        {
+            return $"--out: expected another file than the log, found '{overwritten}'";
+        }
+
+        var twice = outputs.GroupBy(output => output, StringComparer.Ordinal).FirstOrDefault(group => group.Count() > 1);
+        return twice is null ? null : $"--out: expected logs of different names, found two that both give '{twice.Key}'";
+    }
+
+    private static string StemOf(string log)
+    {
         var name = Path.GetFileName(log);
-        return Path.Combine(request.Out, name[..name.IndexOf(".log", StringComparison.Ordinal)] + ".jsonl");
+        var ending = LogEndings.FirstOrDefault(one => name.EndsWith(one, StringComparison.OrdinalIgnoreCase)) ?? Path.GetExtension(name);
+        return name[..^ending.Length];
     }
 
     /// <summary>What could not be used is told with its line; the rest was replayed all the same.</summary>

@@ -8,6 +8,8 @@ namespace SpeedCommand.Commands;
 /// <summary>speedcommand run: the cockpit service, on real ports or on a bench flight.</summary>
 internal static class RunCommand
 {
+    public const string Name = "run";
+
     private const double StandardBenchPace = 10;
 
     public static Command Create()
@@ -26,7 +28,7 @@ internal static class RunCommand
             HelpName = "N",
             DefaultValueFactory = _ => StandardBenchPace,
         };
-        var command = new Command("run", "Run the cockpit service until it is stopped.") { settings, with, bench, pace };
+        var command = new Command(Name, "Run the cockpit service until it is stopped.") { settings, with, bench, pace };
         command.SetAction((parsed, cancel) => RunAsync(
             parsed.GetValue(settings), parsed.GetValue(with), parsed.GetResult(bench) is not null, parsed.GetValue(bench),
             parsed.GetResult(pace) is { Implicit: false } ? parsed.GetValue(pace) : null));

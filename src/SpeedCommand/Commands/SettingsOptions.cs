@@ -46,7 +46,7 @@ internal static class SettingsOptions
         }
 
         Console.Error.WriteLine(problem);
-        exitStatus = System.IO.File.Exists(path) ? ExitStatus.BadSettings : ExitStatus.NoInput;
+        exitStatus = System.IO.Path.Exists(path) ? ExitStatus.BadSettings : ExitStatus.NoInput;
         return false;
     }
 

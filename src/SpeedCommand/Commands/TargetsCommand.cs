@@ -1,6 +1,5 @@
 using System.CommandLine;
 using SpeedCommand.Displays.Units;
-using SpeedCommand.Flight.Targets;
 using SpeedCommand.Replay.Conditions;
 
 namespace SpeedCommand.Commands;
@@ -41,25 +40,11 @@ internal static class TargetsCommand
         if (isJson)
         {
             using var output = Console.OpenStandardOutput();
-            TargetsJson.Write(answer, output);
+            JsonNumbers.WriteObject(output, json => TargetsJson.WriteMembers(json, answer));
         }
         else
         {
             Console.Out.Write(TargetsTable.Write(answer, units));
         }
-    }
-}
-
-/// <summary>The answer of the targets command.</summary>
-internal sealed record TargetsAnswer(FlightConditions Conditions, TargetSpeed MinSink, GlideTarget BestGlide, SpeedToFlyTarget SpeedToFly)
-{
-    public static TargetsAnswer For(FlightConditions conditions)
-    {
-        var targets = new SpeedTargets(conditions.Glider);
-        return new TargetsAnswer(
-            conditions,
-            targets.MinSink(conditions.Air, conditions.Loading),
-            targets.BestGlide(conditions.Air, conditions.Loading, conditions.HeadwindMps, conditions.AirMps),
-            targets.SpeedToFly(conditions.Air, conditions.Loading, conditions.ClimbMps, conditions.AirMps));
     }
 }

@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text;
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Flight.Targets;
+using SpeedCommand.Replay.Conditions;
 
 namespace SpeedCommand.Commands;
 
@@ -14,19 +15,38 @@ internal static class TargetsTable
         text.Append(ConditionsHeading.Write(answer.Conditions, units, isAltitudeShown: true)).Append('\n');
         text.Append(CultureInfo.InvariantCulture,
             $"{"",-14}{"indicated",10}{"true",10}{"sink",10}\n{"",-14}{units.Speed.Symbol,10}{units.Speed.Symbol,10}{units.Vertical.Symbol,10}\n");
-        AppendRow(text, "minimum sink", answer.MinSink, units, "");
+        AppendRow(text, "minimum sink", answer.MinSink, units, CircleNote(answer, units));
         AppendRow(text, "best glide", answer.BestGlide.Speed, units,
-            string.Create(CultureInfo.InvariantCulture, $"{answer.BestGlide.GlideRatio:F1} : 1{(answer.Conditions.HeadwindMps == 0 ? "" : " over the ground")}"));
+            GlideNote(answer));
         AppendRow(text, "speed to fly", answer.SpeedToFly.Speed, units, SpeedToFlyNote(answer, units));
         text.Append("\nAdvisory only: the flight manual and the placards prevail.\n");
         return text.ToString();
     }
 
+    private static string CircleNote(TargetsAnswer answer, DisplayUnits units) => answer.Circle.Speed.IsKnown
+        ? string.Create(CultureInfo.InvariantCulture, $"a circle of radius {Show(answer.Circle.RadiusM, units.Height, 0)} in {answer.Circle.CircleTimeS:F0} s")
+        : "";
+
+    private static string GlideNote(TargetsAnswer answer)
+    {
+        if (!answer.BestGlide.Speed.IsKnown)
+        {
+            return "no speed known here makes headway within the limits";
+        }
+
+        var ground = answer.Conditions.HeadwindMps == 0 ? "" : " over the ground";
+        return double.IsFinite(answer.BestGlide.GlideRatio)
+            ? string.Create(CultureInfo.InvariantCulture, $"{answer.BestGlide.GlideRatio:F1} : 1{ground}")
+            : "the air carries the glider";
+    }
+
     private static string SpeedToFlyNote(TargetsAnswer answer, DisplayUnits units)
     {
-        if (answer.Conditions.Glider.Limits is null)
+        if (!answer.SpeedToFly.Speed.IsKnown)
         {
-            return "not shown: the glider file has no limits";
+            return answer.Conditions.Glider.Limits is null
+                ? "not shown: the glider file has no limits"
+                : "not shown: the glider file has no limits for this altitude";
         }
 
         var limit = answer.SpeedToFly.LimitedBy switch
@@ -37,7 +57,7 @@ internal static class TargetsTable
             LimitedBy.PolarRange => ", held at the end of the polar",
             _ => "",
         };
-        return double.IsFinite(answer.SpeedToFly.AverageSpeedMps)
+        return answer.SpeedToFly.AverageSpeedMps > 0
             ? $"average {Show(answer.SpeedToFly.AverageSpeedMps, units.Speed, 0)}{limit}"
             : limit.TrimStart(',', ' ');
     }

@@ -1,4 +1,5 @@
 using Microsoft.Extensions.Hosting;
+using Microsoft.Extensions.Logging;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Service;
 
@@ -8,7 +9,7 @@ namespace SpeedCommand.Displaying;
 /// What every display of the service shares: the caution first, then the newest picture at the display's own pace, then a
 /// last word when the service stops, so that no display is left showing a number.
 /// </summary>
-internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time) : BackgroundService
+internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time, ILogger log) : BackgroundService
 {
     /// <summary>Long enough to read the caution's first line, short enough not to be in the way.</summary>
     private static readonly TimeSpan CautionTime = TimeSpan.FromSeconds(2);
@@ -20,33 +21,43 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time) : B
     /// <summary>Time between two frames.</summary>
     protected abstract TimeSpan FramePeriod { get; }
 
-    protected TimeProvider Time => time;
-
     protected override async Task ExecuteAsync(CancellationToken stoppingToken)
     {
         // The host waits for the first await of each service; no display may hold it up.
         await Task.Yield();
-        await ShowCautionAsync(stoppingToken).ConfigureAwait(false);
-        await PauseAsync(CautionTime, stoppingToken).ConfigureAwait(false);
+        try
+        {
+            await ShowCautionAsync(stoppingToken).ConfigureAwait(false);
+            await PauseAsync(CautionTime, stoppingToken).ConfigureAwait(false);
+            await ShowPicturesAsync(stoppingToken).ConfigureAwait(false);
+            await ShowStoppedAsync().ConfigureAwait(false);
+        }
+        catch (IOException fault)
+        {
+            // A full disk or a closed pipe behind a display is no reason to stop the others.
+            log.LogError("{Display} stopped: {Cause}", GetType().Name, fault.Message);
+        }
+    }
+
+    private async Task ShowPicturesAsync(CancellationToken stop)
+    {
         var shown = 0L;
         var shownAt = time.GetTimestamp();
-        while (!stoppingToken.IsCancellationRequested)
+        while (!stop.IsCancellationRequested)
         {
             if (latest.TryGet(out var picture, out var count) && count != shown)
             {
                 (shown, shownAt) = (count, time.GetTimestamp());
-                await ShowAsync(picture, stoppingToken).ConfigureAwait(false);
+                await ShowAsync(picture, stop).ConfigureAwait(false);
             }
             else if (shown > 0 && time.GetElapsedTime(shownAt) > LongestWithoutPicture)
             {
                 // The pipeline makes pictures even when every port is silent; if it does not, nothing on the display is true.
-                await ShowAsync(CockpitPicture.Blank(picture.TimeUs, Silence), stoppingToken).ConfigureAwait(false);
+                await ShowAsync(CockpitPicture.Blank(picture.TimeUs, Silence), stop).ConfigureAwait(false);
             }
 
-            await PauseAsync(FramePeriod, stoppingToken).ConfigureAwait(false);
+            await PauseAsync(FramePeriod, stop).ConfigureAwait(false);
         }
-
-        await ShowStoppedAsync().ConfigureAwait(false);
     }
 
     protected abstract ValueTask ShowCautionAsync(CancellationToken stop);

@@ -13,7 +13,7 @@ namespace SpeedCommand.Displaying;
 /// <summary>A character display of 4 lines of 20 on a serial port. Blocked or unplugged, it delays nobody but itself.</summary>
 internal sealed class SerialTextService(
     SerialTextSettings serialText, LatestPicture latest, CockpitSettings settings, TimeProvider time, ILogger<SerialTextService> log)
-    : DisplayLoop(latest, time)
+    : DisplayLoop(latest, time, log)
 {
     /// <summary>A frame takes a tenth of a second at 9600 baud; a display that takes nothing for this long is stuck.</summary>
     private const int WriteLimitMs = 500;
@@ -52,10 +52,10 @@ internal sealed class SerialTextService(
             {
                 _port = SerialPorts.Open(serialText.Device, serialText.Baud);
                 _port.WriteTimeout = WriteLimitMs;
-                _lastComplaint = "";
             }
 
             _port.Write(_frame, 0, length);
+            _lastComplaint = "";
         }
         catch (Exception fault) when (SerialPorts.IsPortFault(fault) || fault is TimeoutException)
         {

@@ -1,3 +1,4 @@
+using Microsoft.Extensions.Logging;
 using SpeedCommand.Displays;
 using SpeedCommand.Displays.Terminal;
 using SpeedCommand.Pipeline.Picture;
@@ -7,7 +8,8 @@ using SpeedCommand.Settings;
 namespace SpeedCommand.Displaying;
 
 /// <summary>One line a second where the output is a file or a pipe, which a panel would fill with control sequences.</summary>
-internal sealed class StatusLineService(LatestPicture latest, CockpitSettings settings, TimeProvider time) : DisplayLoop(latest, time)
+internal sealed class StatusLineService(
+    LatestPicture latest, CockpitSettings settings, TimeProvider time, ILogger<StatusLineService> log) : DisplayLoop(latest, time, log)
 {
     protected override TimeSpan FramePeriod => TimeSpan.FromSeconds(1);
 

@@ -1,3 +1,4 @@
+using Microsoft.Extensions.Logging;
 using SpeedCommand.Displays;
 using SpeedCommand.Displays.Readings;
 using SpeedCommand.Displays.Terminal;
@@ -8,7 +9,8 @@ using SpeedCommand.Settings;
 namespace SpeedCommand.Displaying;
 
 /// <summary>The live panel on the terminal the service was started from.</summary>
-internal sealed class TerminalPanelService(LatestPicture latest, CockpitSettings settings, TimeProvider time) : DisplayLoop(latest, time)
+internal sealed class TerminalPanelService(
+    LatestPicture latest, CockpitSettings settings, TimeProvider time, ILogger<TerminalPanelService> log) : DisplayLoop(latest, time, log)
 {
     private readonly SpeedSteadier _steadier = new(settings.Units.Speed);
 

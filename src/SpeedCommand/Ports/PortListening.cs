@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
@@ -13,9 +14,14 @@ internal sealed class PortListening(PortSettings settings) : ILineSink
     private long _sentences;
     private long _readings;
     private long _withoutChecksum;
+    private long _wrongChecksum;
+    private long _impossible;
 
     /// <summary>The verdict in one line.</summary>
     public string Verdict { get; private set; } = "";
+
+    /// <summary>The kinds of reading that came, as far as their values were possible.</summary>
+    public HashSet<ReadingKind> Kinds { get; } = [];
 
     void ILineSink.OnLine(ReadOnlySpan<byte> line)
     {
@@ -24,11 +30,31 @@ internal sealed class PortListening(PortSettings settings) : ILineSink
         {
             case SentenceFault.None:
                 _sentences++;
-                _readings += new XdrReadings(sentence).Count;
+                foreach (var reading in new XdrReadings(sentence))
+                {
+                    Take(reading);
+                }
+
                 break;
-            case SentenceFault.MissingChecksum:
+            case SentenceFault.MissingChecksum when SentenceReader.TryRead(line, ChecksumRule.Optional, out _) == SentenceFault.None:
                 _withoutChecksum++;
                 break;
+            case SentenceFault.WrongChecksum:
+                _wrongChecksum++;
+                break;
+        }
+    }
+
+    private void Take(in Reading reading)
+    {
+        if (ReadingRanges.IsPossible(reading, out _))
+        {
+            _readings++;
+            Kinds.Add(reading.Kind);
+        }
+        else
+        {
+            _impossible++;
         }
     }
 
@@ -80,13 +106,36 @@ internal sealed class PortListening(PortSettings settings) : ILineSink
 
         if (_sentences == 0)
         {
-            return _withoutChecksum > 0
-                ? $"{_withoutChecksum} sentences without a checksum; if the board cannot send one, set \"checksum\": \"optional\" for this port"
-                : $"{_bytes} bytes but no valid line; is {settings.Baud} baud what the board sends at?";
+            return WithoutSentence();
         }
 
-        return _readings == 0
-            ? $"{_sentences} valid sentences, but none with a measurement of ours; docs/sentences.md lists them"
-            : FormattableString.Invariant($"good: {_lines / seconds:F1} lines and {_readings / seconds:F1} readings a second, {_lines - _sentences} bad lines");
+        if (_readings == 0)
+        {
+            return _impossible > 0
+                ? $"{_impossible} readings, every one impossible; are the units those of docs/sentences.md?"
+                : $"{_sentences} valid sentences, but none with a measurement of ours; docs/sentences.md lists them";
+        }
+
+        var rejected = _impossible > 0 ? $", {_impossible} impossible readings" : "";
+        return FormattableString.Invariant(
+            $"good: {_lines / seconds:F1} lines and {_readings / seconds:F1} readings a second, {_lines - _sentences} bad lines{rejected}");
+    }
+
+    /// <summary>Readable lines point to the board's sentences, unreadable ones to the line.</summary>
+    private string WithoutSentence()
+    {
+        if (_lines == 0)
+        {
+            return $"{_bytes} bytes without a line end; is {settings.Baud} baud what the board sends at, and does it end lines with CR LF?";
+        }
+
+        if (_wrongChecksum * 2 > _lines)
+        {
+            return $"{_wrongChecksum} lines with a wrong checksum; docs/sentences.md shows how the board must compute it";
+        }
+
+        return _withoutChecksum * 2 > _lines
+            ? $"{_withoutChecksum} sentences without a checksum; if the board cannot send one, set \"checksum\": \"optional\" for this port"
+            : $"{_bytes} bytes but no valid line; is {settings.Baud} baud what the board sends at?";
     }
 }

@@ -1,3 +1,4 @@
+using System.Runtime.InteropServices;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
@@ -20,6 +21,12 @@ internal static class CockpitService
     public static async Task<int> RunAsync(CockpitSettings settings, BenchFlight? flight, double pace, params IPictureSink[] extraSinks)
     {
         using var host = Build(settings, flight, pace, extraSinks);
+        // A terminal that closes must not leave a number standing on another display, nor the flight's log without its end.
+        using var hangUp = PosixSignalRegistration.Create(PosixSignal.SIGHUP, signal =>
+        {
+            signal.Cancel = true;
+            host.Services.GetRequiredService<IHostApplicationLifetime>().StopApplication();
+        });
         await host.StartAsync().ConfigureAwait(false);
         await host.WaitForShutdownAsync().ConfigureAwait(false);
         host.Services.GetRequiredService<CockpitMachine>().Finish();
@@ -51,7 +58,7 @@ internal static class CockpitService
             .AddSingleton(settings)
             .AddSingleton(clock)
             .AddSingleton(latest)
-            .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, clock, services), [latest, .. extraSinks]));
+            .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, flight, clock, services), [latest, .. extraSinks]));
         AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight));
         builder.Services.AddHostedService<PictureTicker>();
         AddDisplays(builder.Services, settings, isPanelShown);
@@ -95,20 +102,21 @@ internal static class CockpitService
     }
 
     /// <summary>A recorder that cannot start is a fault to show, not a reason to stay on the ground.</summary>
-    private static FlightRecorder? OpenRecorder(CockpitSettings settings, CockpitClock clock, IServiceProvider services)
+    private static FlightRecorder? OpenRecorder(CockpitSettings settings, BenchFlight? flight, CockpitClock clock, IServiceProvider services)
     {
         if (settings.Recorder is not { } recorder)
         {
             return null;
         }
 
+        string[] notes = flight is null ? [] : [$"bench flight, played from {Path.GetFileName(flight.LogPath)}"];
         var log = services.GetRequiredService<ILoggerFactory>().CreateLogger<FlightRecorder>();
         var stamp = clock.StartUtc.ToString("yyyy-MM-dd'T'HHmmss'Z'", System.Globalization.CultureInfo.InvariantCulture);
         var path = Path.Combine(recorder.Folder, $"{stamp}-{Environment.ProcessId}.log");
         try
         {
             Directory.CreateDirectory(recorder.Folder);
-            var opened = new FlightRecorder(path, new FlightLogHeader(clock.StartUtc, settings.GliderName, []), recorder.MaxBytes);
+            var opened = new FlightRecorder(path, new FlightLogHeader(clock.StartUtc, settings.GliderName, notes), recorder.MaxBytes);
             log.LogInformation("recording to {Path}", path);
             return opened;
         }

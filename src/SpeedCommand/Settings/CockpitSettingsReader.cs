@@ -1,4 +1,5 @@
 using SpeedCommand.Displays.Units;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Replay.Settings;
 using SpeedCommand.Sentences;
 
@@ -19,9 +20,9 @@ internal static class CockpitSettingsReader
         var ports = ReadPorts(source, needsPorts);
         var units = ReadUnits(source);
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
-        var serialText = ReadSerialText(source);
+        var serialText = ReadSerialText(source, ports);
         var recorder = ReadRecorder(source);
-        var logFile = source.Find("logFile")?.Text ?? "";
+        var logFile = source.Text("logFile")?.Text ?? "";
         source.ReportUnknown();
         if (flight is null || source.HasErrors)
         {
@@ -38,7 +39,7 @@ internal static class CockpitSettingsReader
         foreach (var name in source.NamedElements("ports"))
         {
             var path = $"ports.{name}";
-            var device = source.Find($"{path}.device");
+            var device = source.Text($"{path}.device");
             var baud = source.Integer($"{path}.baud", 115_200, 1_200, 4_000_000);
             var rule = source.Word($"{path}.checksum", ChecksumWords, "required") == "required" ? ChecksumRule.Required : ChecksumRule.Optional;
             if (device is null || device.Text.Length == 0)
@@ -47,7 +48,15 @@ internal static class CockpitSettingsReader
             }
             else if (!IsStreamName(name))
             {
-                source.Report(device, $"expected a port name of 1 to 32 letters, digits, '-' or '_', found '{name}'");
+                source.Report(source.Find($"{path}.name")!, $"expected a port name of 1 to 32 letters, digits, '-' or '_', found '{name}'");
+            }
+            else if (ports.Find(port => port.Device == device.Text) is { } other)
+            {
+                source.Report(device, $"expected a device of its own, found that of port '{other.Name}'");
+            }
+            else if (ports.Count == PipelineBounds.MaxStreams)
+            {
+                source.Report(device, $"expected at most {PipelineBounds.MaxStreams} ports, found one more");
             }
             else
             {
@@ -93,17 +102,22 @@ internal static class CockpitSettingsReader
         return units;
     }
 
-    private static SerialTextSettings? ReadSerialText(SettingsSource source)
+    private static SerialTextSettings? ReadSerialText(SettingsSource source, List<PortSettings> ports)
     {
-        var device = source.Find("displays.serialText.device");
+        var device = source.Text("displays.serialText.device");
         var baud = source.Integer("displays.serialText.baud", 9_600, 1_200, 4_000_000);
+        if (device is not null && ports.FirstOrDefault(port => port.Device == device.Text) is { } taken)
+        {
+            source.Report(device, $"expected a device of its own, found that of port '{taken.Name}'");
+        }
+
         return device is null ? null : new SerialTextSettings(device.Text, baud);
     }
 
     private static RecorderSettings? ReadRecorder(SettingsSource source)
     {
         var isOn = source.Word("recorder.active", OnOff, "on") == "on";
-        var folder = source.Find("recorder.folder")?.Text ?? StateFolder.Flights;
+        var folder = source.Text("recorder.folder")?.Text ?? StateFolder.Flights;
         var maxMegabytes = source.Integer("recorder.maxMegabytes", 64, 1, 4_096);
         return isOn ? new RecorderSettings(folder, (long)maxMegabytes * Megabyte) : null;
     }

@@ -1,12 +1,15 @@
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Sentences;
 
-namespace SpeedCommand.Pipeline.Stages;
+namespace SpeedCommand.Pipeline;
 
 /// <summary>Which values a reading may have at all, and the fault to name when it lies outside.</summary>
-internal static class ReadingRanges
+public static class ReadingRanges
 {
-    /// <summary>True when the value is possible; else the fault to name.</summary>
+    /// <summary>Judges one reading.</summary>
+    /// <param name="reading">The reading, SI units.</param>
+    /// <param name="fault">The fault to name when it is impossible.</param>
+    /// <returns>Whether the value is possible.</returns>
     public static bool IsPossible(in Reading reading, out Faults fault)
     {
         (fault, var possible) = reading.Kind switch

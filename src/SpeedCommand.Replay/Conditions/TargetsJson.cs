@@ -3,29 +3,27 @@ using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline.Picture;
 
-namespace SpeedCommand.Commands;
+namespace SpeedCommand.Replay.Conditions;
 
-/// <summary>The answer of the targets command as one JSON object: unrounded SI numbers, null for what is not known.</summary>
-internal static class TargetsJson
+/// <summary>The three targets as JSON: SI numbers.</summary>
+public static class TargetsJson
 {
-    public static void Write(TargetsAnswer answer, Stream output)
+    /// <summary>Writes the members "air", "minSink", "bestGlide" and "speedToFly" into an open object.</summary>
+    /// <param name="json">Where to.</param>
+    /// <param name="answer">The targets.</param>
+    public static void WriteMembers(Utf8JsonWriter json, TargetsAnswer answer)
     {
-        using (var json = new Utf8JsonWriter(output, new JsonWriterOptions { Indented = true }))
+        ArgumentNullException.ThrowIfNull(json);
+        ArgumentNullException.ThrowIfNull(answer);
+        WriteAir(json, answer.Conditions.Air);
+        WriteSpeed(json, "minSink", answer.MinSink, static (_, _) => { }, answer);
+        WriteSpeed(json, "bestGlide", answer.BestGlide.Speed,
+            static (json, answer) => JsonNumbers.Write(json, "glideRatio", answer.BestGlide.GlideRatio), answer);
+        WriteSpeed(json, "speedToFly", answer.SpeedToFly.Speed, static (json, answer) =>
         {
-            json.WriteStartObject();
-            WriteAir(json, answer.Conditions.Air);
-            WriteSpeed(json, "minSink", answer.MinSink, static (_, _) => { }, answer);
-            WriteSpeed(json, "bestGlide", answer.BestGlide.Speed,
-                static (json, answer) => JsonNumbers.Write(json, "glideRatio", answer.BestGlide.GlideRatio), answer);
-            WriteSpeed(json, "speedToFly", answer.SpeedToFly.Speed, static (json, answer) =>
-            {
-                JsonNumbers.Write(json, "averageSpeedMps", answer.SpeedToFly.AverageSpeedMps);
-                json.WriteString("limitedBy", LimitWords.Of(answer.SpeedToFly.LimitedBy));
-            }, answer);
-            json.WriteEndObject();
-        }
-
-        output.WriteByte((byte)'\n');
+            JsonNumbers.Write(json, "averageSpeedMps", answer.SpeedToFly.AverageSpeedMps);
+            json.WriteString("limitedBy", LimitWords.Of(answer.SpeedToFly.LimitedBy));
+        }, answer);
     }
 
     private static void WriteAir(Utf8JsonWriter json, in Air air)

@@ -1,0 +1,86 @@
+using System.Globalization;
+using System.Text;
+using System.Text.RegularExpressions;
+using SkiaSharp;
+using SpeedCommand.Desk.Commands;
+
+namespace SpeedCommand.Desk.Plots;
+
+/// <summary>A picture or page to write; the kind is in the file's name.</summary>
+internal sealed partial class PictureFile
+{
+    private readonly string _path;
+    private readonly string _ending;
+
+    private PictureFile(string path, string ending) => (_path, _ending) = (path, ending);
+
+    /// <summary>Checks the name an option gave before any work is done.</summary>
+    /// <exception cref="DeskFailure">The name's ending is none of those that can be written.</exception>
+    public static PictureFile Named(string option, string path, params string[] endings)
+    {
+        var ending = endings.FirstOrDefault(ending => path.EndsWith(ending, StringComparison.OrdinalIgnoreCase))
+            ?? throw new DeskFailure(ExitStatus.Usage, $"{option}: expected a file name ending in {string.Join(" or ", endings)}, found '{path}'");
+        return new PictureFile(path, ending);
+    }
+
+    /// <summary>Draws and writes it. The same drawing gives the same bytes.</summary>
+    public void Write(int width, int height, Action<SKCanvas> draw)
+    {
+        using var content = new MemoryStream();
+        switch (_ending)
+        {
+            case ".png":
+                WritePng(content, width, height, draw);
+                break;
+            case ".svg":
+                WriteSvg(content, width, height, draw);
+                break;
+            case ".pdf":
+                WritePdf(content, width, height, draw);
+                break;
+            default:
+                throw new InvalidOperationException($"no way to write {_ending}");
+        }
+
+        // Only a whole picture reaches the disk.
+        File.WriteAllBytes(_path, content.ToArray());
+    }
+
+    private static void WritePng(Stream content, int width, int height, Action<SKCanvas> draw)
+    {
+        using var surface = SKSurface.Create(new SKImageInfo(width, height));
+        surface.Canvas.Clear(SKColors.White);
+        draw(surface.Canvas);
+        using var image = surface.Snapshot();
+        using var bytes = image.Encode(SKEncodedImageFormat.Png, 100);
+        bytes.SaveTo(content);
+    }
+
+    private static void WriteSvg(Stream content, int width, int height, Action<SKCanvas> draw)
+    {
+        using var drawn = new MemoryStream();
+        using (var canvas = SKSvgCanvas.Create(SKRect.Create(width, height), drawn))
+        {
+            draw(canvas);
+        }
+
+        // Skia numbers its clips through the life of the process; the same drawing shall give the same bytes.
+        var numbers = new Dictionary<string, string>();
+        content.Write(Encoding.UTF8.GetBytes(ClipName().Replace(Encoding.UTF8.GetString(drawn.ToArray()), match =>
+        {
+            numbers.TryAdd(match.Value, string.Create(CultureInfo.InvariantCulture, $"clip{numbers.Count + 1}"));
+            return numbers[match.Value];
+        })));
+    }
+
+    [GeneratedRegex("(?<=id=\"|url\\(#)cl_[0-9a-f]+")]
+    private static partial Regex ClipName();
+
+    private static void WritePdf(Stream content, int width, int height, Action<SKCanvas> draw)
+    {
+        using var document = SKDocument.CreatePdf(content);
+        draw(document.BeginPage(width, height));
+        document.EndPage();
+        document.Close();
+    }
+}
