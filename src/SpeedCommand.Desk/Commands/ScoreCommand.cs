@@ -10,7 +10,7 @@ namespace SpeedCommand.Desk.Commands;
 internal static class ScoreCommand
 {
     private sealed record Request(
-        string[] Inputs, string Grade, int Seeds, IReadOnlyList<NamedEstimator> Estimators, bool AsJson, string? Plot);
+        string[] Inputs, string Grade, int Seeds, IReadOnlyList<NamedEstimator> Estimators, bool AsJson, PictureFile? Plot);
 
     public static Command Create()
     {
@@ -34,7 +34,8 @@ internal static class ScoreCommand
             }
 
             Run(new Request(parsed.GetRequiredValue(inputs), parsed.GetValue(grade)!, parsed.GetValue(seeds),
-                EstimatorsOf(parsed.GetValue(estimators)!), parsed.GetValue(json), parsed.GetValue(plot)));
+                EstimatorsOf(parsed.GetValue(estimators)!), parsed.GetValue(json),
+                parsed.GetValue(plot) is { } path ? PictureFile.Named("--plot", path, ".png", ".svg") : null));
             return (int)ExitStatus.Done;
         });
         return command;
@@ -55,9 +56,9 @@ internal static class ScoreCommand
             foreach (var (found, flight) in IsLog(input) ? [OfLog(input, request)] : OfScenario(input, request))
             {
                 rows.AddRange(found);
-                if (request.Plot is { } path && !plotted)
+                if (request.Plot is { } picture && !plotted)
                 {
-                    ClimbPlot.Save(path, $"{found[0].Flight} {found[0].Grade}", flight, request.Estimators);
+                    ClimbPlot.Write(picture, $"{found[0].Flight}, {(found[0].Grade.Length > 0 ? found[0].Grade + " sensors" : "as recorded")}", flight, request.Estimators);
                     plotted = true;
                 }
             }

@@ -11,9 +11,6 @@ internal static class PictureFonts
     private static readonly SKTypeface Regular = Load("DejaVuSans.ttf", isBold: false);
     private static readonly SKTypeface Bold = Load("DejaVuSans-Bold.ttf", isBold: true);
 
-    /// <summary>Makes the fonts known to the plotting library; they are loaded with this class, once.</summary>
-    public static void Use() => ArgumentNullException.ThrowIfNull(Regular);
-
     /// <summary>A font of a size in pixels or points of the picture.</summary>
     public static SKFont Of(float size, bool isBold = false) =>
         new(isBold ? Bold : Regular, size) { Subpixel = true, Edging = SKFontEdging.Antialias, Hinting = SKFontHinting.None };

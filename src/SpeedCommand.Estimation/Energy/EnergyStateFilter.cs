@@ -23,6 +23,9 @@ public sealed class EnergyStateFilter
     /// <summary>The staying climb changes with this share of the passing climb's density.</summary>
     private const double StayingShare = 0.05;
 
+    /// <summary>But never slower than this, (m/s²)²/Hz: wave as smooth as glass still changes by a metre per second in a quarter of a minute.</summary>
+    private const double LeastStayingDensity = 0.004;
+
     private readonly double[] _state = new double[States];
     private readonly double[] _covariance = new double[States * States];
     private readonly double[] _cross = new double[States];
@@ -86,7 +89,7 @@ public sealed class EnergyStateFilter
         }
 
         var dt = step.Dt;
-        AddIntegratedNoise(Energy, Staying, StayingShare * noise.ClimbDensity * dt, dt);
+        AddIntegratedNoise(Energy, Staying, Math.Max(LeastStayingDensity, StayingShare * noise.ClimbDensity) * dt, dt);
         AddIntegratedNoise(Energy, Passing, noise.ClimbDensity * dt, dt);
         AddIntegratedNoise(KineticRate, KineticAcceleration, noise.KineticDensity * dt, dt);
         var gust = noise.GustVarianceM2 * (1 - step.Gust.Kept * step.Gust.Kept);
