@@ -30,7 +30,7 @@ public sealed class FlightPipeline
     public FlightPipeline(FlightSettings settings, IPictureSink sink, IEnergyEstimator? energy = null)
     {
         ArgumentNullException.ThrowIfNull(settings);
-        _energy = energy ?? new EnergyHeightFilter();
+        _energy = energy ?? new AdaptiveEnergyEstimator(settings.StaticLagS, settings.ImpactLagS);
         _sink = sink;
         _airData = new AirDataStage(settings);
         _pictures = new PictureStage(settings, _airData, _load, _energy, _events);

@@ -1,4 +1,5 @@
 using SpeedCommand.Flight.Gliders;
+using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Pipeline;
 
@@ -23,6 +24,15 @@ public sealed record FlightSettings(Glider Glider)
 
     /// <summary>Share of the full kinetic heating the thermometer senses, 0 to 1; default 0, a shaded probe out of the stream.</summary>
     public double ThermometerRecovery { get; init; }
+
+    /// <summary>Lag of the tubes to the static pressure sensor, s, 0 to 2; default 0.</summary>
+    public double StaticLagS { get; init; }
+
+    /// <summary>Lag of the tubes to the impact pressure sensor, s, 0 to 2; default 0.</summary>
+    public double ImpactLagS { get; init; }
+
+    /// <summary>The phase the pilot insists on; null, the default, lets the air data decide.</summary>
+    public FlightPhase? ForcedPhase { get; init; }
 
     /// <summary>Pressure altitude that endurance and range are counted down to, m; default 300.</summary>
     public double SafetyHeightM { get; init; } = 300;

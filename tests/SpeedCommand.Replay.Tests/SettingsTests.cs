@@ -1,5 +1,6 @@
 using System.Text;
 using SpeedCommand.Flight.LocatedJson;
+using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Settings;
 
 namespace SpeedCommand.Replay.Tests;
@@ -41,6 +42,8 @@ public sealed class SettingsTests : IDisposable
         Assert.Equal(0, settings.TemperatureOffsetK);
         Assert.Equal(0, settings.ThermometerRecovery);
         Assert.Equal(300, settings.SafetyHeightM);
+        Assert.Equal((0, 0), (settings.StaticLagS, settings.ImpactLagS));
+        Assert.Null(settings.ForcedPhase);
     }
 
     [Fact]
@@ -48,7 +51,7 @@ public sealed class SettingsTests : IDisposable
     {
         var source = Open("""
             { "glider": "test-15.json", "mass": "350 kg", "ballast": "50 kg", "bugs": "10 %", "expectedClimb": "4 kt", "stallMargin": "8 %",
-              "temperatureOffset": "5 C", "thermometerRecovery": "70 %", "safetyHeight": "1000 ft" }
+              "temperatureOffset": "5 C", "thermometerRecovery": "70 %", "safetyHeight": "1000 ft", "staticLag": "200 ms", "impactLag": "0.05 s", "phase": "climbing" }
             """);
         var settings = FlightSettingsReader.Read(source, null, null)!;
         source.ReportUnknown();
@@ -60,6 +63,8 @@ public sealed class SettingsTests : IDisposable
         Assert.Equal(5, settings.TemperatureOffsetK);
         Assert.Equal(0.7, settings.ThermometerRecovery, 12);
         Assert.Equal(304.8, settings.SafetyHeightM, 9);
+        Assert.Equal((0.2, 0.05), (settings.StaticLagS, settings.ImpactLagS));
+        Assert.Equal(FlightPhase.Climbing, settings.ForcedPhase);
     }
 
     [Fact]

@@ -12,9 +12,10 @@ internal readonly record struct PhaseEvidence(bool IsLoadMeasured, double Steady
 
 /// <summary>
 /// Climbing or gliding. With a load or bank sensor a lasting turn means climbing; without one, slow flight that climbs does.
-/// The evidence must last, and the thresholds to enter and to leave lie apart, so that the display does not flicker.
+/// The evidence must last, and the thresholds to enter and to leave lie apart, so that the display does not flicker. A phase
+/// the pilot insists on stays.
 /// </summary>
-internal sealed class PhaseStage
+internal sealed class PhaseStage(FlightPhase? forced)
 {
     /// <summary>A pull-up or a bend in the track is over sooner than this.</summary>
     private const long LastingUs = 6_000_000;
@@ -33,7 +34,7 @@ internal sealed class PhaseStage
     private double _smoothClimbMps;
     private long _contraryUs;
 
-    public FlightPhase Phase { get; private set; } = FlightPhase.Gliding;
+    public FlightPhase Phase { get; private set; } = forced ?? FlightPhase.Gliding;
 
     /// <summary>Judges once a picture.</summary>
     public FlightPhase Judge(in PhaseEvidence evidence)
@@ -43,7 +44,7 @@ internal sealed class PhaseStage
         var speedRatio = evidence.IndicatedMps / evidence.MinSinkMps;
         var contrary = Phase == FlightPhase.Gliding ? LooksLikeClimbing(evidence, speedRatio) : LooksLikeGliding(evidence, speedRatio);
         _contraryUs = contrary ? _contraryUs + PipelineBounds.PicturePeriodUs : 0;
-        if (_contraryUs >= LastingUs)
+        if (forced is null && _contraryUs >= LastingUs)
         {
             Phase = Phase == FlightPhase.Gliding ? FlightPhase.Climbing : FlightPhase.Gliding;
             _contraryUs = 0;

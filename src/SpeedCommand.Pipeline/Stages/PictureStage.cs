@@ -17,7 +17,7 @@ internal sealed class PictureStage
     /// <summary>Handbook polars are measured to about this share of the sink (common practice: "a few per cent").</summary>
     private const double PolarUncertainty = 0.05;
 
-    private readonly PhaseStage _phase = new();
+    private readonly PhaseStage _phase;
     private readonly AverageClimb _average = new(AverageSpanS, PipelineBounds.PicturePeriodUs * 1e-6);
     private readonly TargetStage _targets;
     private readonly HeightInHandStage _heightInHand;
@@ -35,6 +35,7 @@ internal sealed class PictureStage
         _energy = energy;
         _events = events;
         var targets = new SpeedTargets(settings.Glider, settings.StallMargin);
+        _phase = new PhaseStage(settings.ForcedPhase);
         _targets = new TargetStage(settings, targets);
         _heightInHand = new HeightInHandStage(settings, targets);
     }
@@ -103,7 +104,7 @@ internal sealed class PictureStage
     private CockpitPicture WithTargets(in CockpitPicture picture, long nowUs)
     {
         var targets = _targets.At(new TargetInputs(
-            _airData.Air, _load.Steady(nowUs, _phase.Phase), picture.NettoMps, IsOutsidePolar(picture), AgeS(nowUs)));
+            _airData.Air, _load.Steady(nowUs, _phase.Phase), picture.NettoMps, IsOutsidePolar(picture), nowUs, AgeS(nowUs)));
         var inHand = _heightInHand.At(_airData.Air, _airData.StaticAgeS(nowUs));
         return picture with
         {

@@ -1,3 +1,4 @@
+using SpeedCommand.Estimation.Command;
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
@@ -10,8 +11,9 @@ namespace SpeedCommand.Pipeline.Stages;
 /// <param name="SteadyLoad">Load factor smoothed over a second.</param>
 /// <param name="Netto">Vertical motion of the air, m/s.</param>
 /// <param name="IsOutsidePolar">Whether netto is blank because the polar does not know the present airspeed.</param>
+/// <param name="TimeUs">The moment, microseconds.</param>
 /// <param name="AgeS">Age of the older of static pressure and airspeed, s.</param>
-internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, bool IsOutsidePolar, double AgeS);
+internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, bool IsOutsidePolar, long TimeUs, double AgeS);
 
 /// <summary>The speeds to fly and how they came about.</summary>
 internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy);
@@ -19,10 +21,7 @@ internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge Sp
 /// <summary>Air, load and netto in, speeds to fly out.</summary>
 internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
 {
-    /// <summary>A speed command that follows every gust is chased in vain; the air a glider flies through lasts seconds.</summary>
-    private const double NettoSmoothingS = 2;
-
-    private double _smoothNettoMps = double.NaN;
+    private readonly SmoothNetto _smoothNetto = new();
 
     public Loading LoadingAt(double loadFactor) => new(settings.MassKg, loadFactor, settings.BugsFraction);
 
@@ -30,7 +29,7 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
         targets.TrySink(airspeed, air, LoadingAt(loadFactor), out sinkMps);
 
     /// <summary>Forgets the air flown through, as after a silence.</summary>
-    public void Reset() => _smoothNettoMps = double.NaN;
+    public void Reset() => _smoothNetto.Reset();
 
     /// <summary>Computes once a picture.</summary>
     public Targets At(in TargetInputs inputs)
@@ -38,8 +37,8 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
         var straight = LoadingAt(1);
         var minSink = targets.MinSink(inputs.Air, LoadingAt(inputs.SteadyLoad));
         var bestGlide = targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
-        var netto = inputs.IsOutsidePolar ? 0 : SmoothNetto(inputs.Netto);
-        var speedToFly = double.IsNaN(netto)
+        var netto = inputs.IsOutsidePolar ? 0 : _smoothNetto.Add(inputs.TimeUs, inputs.Netto.Value);
+        var speedToFly = double.IsNaN(netto) || !(inputs.Netto.IsKnown || inputs.IsOutsidePolar)
             ? default
             : targets.SpeedToFly(inputs.Air, straight, settings.ExpectedClimbMps, netto);
         var sigma = inputs.IsOutsidePolar ? double.NaN : Math.Abs(speedToFly.AirSensitivity) * inputs.Netto.Sigma;
@@ -58,15 +57,4 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
 
     private static Gauge Show(in TargetSpeed speed, double sigma, double ageS) =>
         speed.IsKnown ? new Gauge(speed.IndicatedAirspeedMps, sigma, ageS) : Gauge.Blank;
-
-    private double SmoothNetto(in Gauge netto)
-    {
-        const double Step = PipelineBounds.PicturePeriodUs * 1e-6 / NettoSmoothingS;
-        if (netto.IsKnown)
-        {
-            _smoothNettoMps = double.IsNaN(_smoothNettoMps) ? netto.Value : _smoothNettoMps + (netto.Value - _smoothNettoMps) * Step;
-        }
-
-        return netto.IsKnown ? _smoothNettoMps : double.NaN;
-    }
 }

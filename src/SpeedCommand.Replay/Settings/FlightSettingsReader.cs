@@ -2,12 +2,15 @@ using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Flight.LocatedJson;
 using SpeedCommand.Flight.Quantities;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Replay.Settings;
 
 /// <summary>Reads what the pipeline must know from the settings and the glider file they name.</summary>
 public static class FlightSettingsReader
 {
+    private static readonly string[] PhaseWords = ["automatic", "climbing", "gliding"];
+
     /// <summary>Reads the flight's part of the settings; faults go to the source.</summary>
     /// <param name="source">The settings.</param>
     /// <param name="gliderOption">A glider file that beats the settings; null for none.</param>
@@ -33,6 +36,9 @@ public static class FlightSettingsReader
         var stallMargin = source.Quantity("stallMargin", QuantityKind.Fraction, 0.05, 0, 1);
         var offset = source.Quantity("temperatureOffset", QuantityKind.TemperatureDifference, 0, -50, 50);
         var recovery = source.Quantity("thermometerRecovery", QuantityKind.Fraction, 0, 0, 1);
+        var staticLag = source.Quantity("staticLag", QuantityKind.Duration, 0, 0, 2);
+        var impactLag = source.Quantity("impactLag", QuantityKind.Duration, 0, 0, 2);
+        var phase = source.Word("phase", PhaseWords, PhaseWords[0]);
         var safetyHeight = source.Quantity("safetyHeight", QuantityKind.Length, 300, -500, 9000);
         return glider is null ? null : new FlightSettings(glider)
         {
@@ -42,6 +48,14 @@ public static class FlightSettingsReader
             StallMargin = stallMargin,
             TemperatureOffsetK = offset,
             ThermometerRecovery = recovery,
+            StaticLagS = staticLag,
+            ImpactLagS = impactLag,
+            ForcedPhase = phase switch
+            {
+                "climbing" => FlightPhase.Climbing,
+                "gliding" => FlightPhase.Gliding,
+                _ => null,
+            },
             SafetyHeightM = safetyHeight,
         };
     }
