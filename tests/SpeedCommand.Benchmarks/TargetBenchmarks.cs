@@ -1,10 +1,11 @@
 using BenchmarkDotNet.Attributes;
 using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.HeightInHand;
 using SpeedCommand.Flight.Targets;
 
 namespace SpeedCommand.Benchmarks;
 
-/// <summary>The three speeds, for a polar given by coefficients and one given as a table.</summary>
+/// <summary>The three speeds and what the height is worth, for a polar given by coefficients and one given as a table.</summary>
 public class TargetBenchmarks
 {
     private SpeedTargets _targets = null!;
@@ -36,4 +37,11 @@ public class TargetBenchmarks
     /// <summary>The air changes from call to call, as it does in flight.</summary>
     [Benchmark(Description = "speed to fly")]
     public SpeedToFlyTarget SpeedToFly() => _targets.SpeedToFly(_air, _loading, 2, _airMps = 0.7 - _airMps);
+
+    [Benchmark(Description = "best glide in wind")]
+    public GlideTarget BestGlideInWind() => _targets.BestGlide(_air, _loading, 10, 0);
+
+    [Benchmark(Description = "height in hand")]
+    public LiveHeight HeightInHand() =>
+        LiveHeight.TryEstimate(_targets, _air, _loading, 300, 0, out var height) ? height : throw new InvalidOperationException("expected a height");
 }

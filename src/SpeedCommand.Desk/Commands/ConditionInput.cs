@@ -25,7 +25,7 @@ internal sealed class ConditionInput(params string[] without)
         {
             throw reader.OptionFaults.Count > 0
                 ? new DeskFailure(ExitStatus.Usage, [.. reader.OptionFaults.Select(fault => Renamed(fault, mass?.Option))])
-                : new DeskFailure(ExitStatus.BadSettings, [.. reader.GliderProblems.Select(problem => problem.ToString())]);
+                : new DeskFailure(reader.IsGliderMissing ? ExitStatus.NoInput : ExitStatus.BadSettings, [.. reader.GliderProblems.Select(problem => problem.ToString())]);
         }
 
         foreach (var warning in reader.GliderProblems)

@@ -7,9 +7,11 @@ internal static class DeskProgram
 {
     public static int Run(string[] args)
     {
-        var root = new RootCommand("SpeedCommand at the desk: polars, knee-board cards, plans, simulated flights, estimators scored. Advisory only; not a flight instrument.")
+        var root = new RootCommand("SpeedCommand at the desk: polars, cards, plans, simulated flights, scored estimators. Advisory only; not a flight instrument.")
         {
             PolarCommand.Create(),
+            CardCommand.Create(),
+            PlanCommand.Create(),
             SimulateCommand.Create(),
             ScoreCommand.Create(),
             GuidanceCommand.Create(),

@@ -11,7 +11,11 @@ internal static class PolarCommand
     {
         var units = AnswerOptions.Units();
         var json = AnswerOptions.Json();
-        var plot = new Option<string?>("--plot") { HelpName = "FILE", Description = "Draw the curve, its tangents and targets too (.png or .svg)." };
+        var plot = new Option<string?>("--plot")
+        {
+            HelpName = "FILE",
+            Description = "Draw the curve, its tangents and targets too (.png or .svg).",
+        };
         var options = new ConditionInput();
         var command = new Command("polar", "The sink curve for given air and glider, with the three targets and the limits.");
         options.AddTo(command);

@@ -34,12 +34,17 @@ internal sealed class LabelPlacer(SKRect area)
         }
     }
 
-    /// <summary>The nearest free place for a label, tried first in a direction of its own; null when the area is full.</summary>
+    /// <summary>
+    /// The nearest free place for a label, tried first in a direction of its own; null when the area is full. The line that leads
+    /// to it crosses other lines, and as the last resort other labels, only where it cannot be helped.
+    /// </summary>
     /// <param name="anchor">What the label names.</param>
     /// <param name="size">Size of the label.</param>
     /// <param name="angleRad">The first direction, 0 to the right, a quarter turn downwards.</param>
     public SKRect? Place(SKPoint anchor, SKSize size, float angleRad) =>
-        Place(anchor, size, angleRad, mayCrossLines: false) ?? Place(anchor, size, angleRad, mayCrossLines: true);
+        Place(anchor, size, angleRad, mayCrossLines: false, mayCrossLabels: false)
+            ?? Place(anchor, size, angleRad, mayCrossLines: true, mayCrossLabels: false)
+            ?? Place(anchor, size, angleRad, mayCrossLines: true, mayCrossLabels: true);
 
     /// <summary>The first free place for a tall label that must stand at one x, sliding down from the top or up from the bottom.</summary>
     public SKRect PlaceUpright(float left, SKSize size, bool isLow)
@@ -52,7 +57,7 @@ internal sealed class LabelPlacer(SKRect area)
         return place;
     }
 
-    private SKRect? Place(SKPoint anchor, SKSize size, float angleRad, bool mayCrossLines)
+    private SKRect? Place(SKPoint anchor, SKSize size, float angleRad, bool mayCrossLines, bool mayCrossLabels)
     {
         foreach (var distance in Distances)
         {
@@ -62,7 +67,7 @@ internal sealed class LabelPlacer(SKRect area)
                 var steps = (turn + 1) / 2 * (turn % 2 == 0 ? -1 : 1);
                 var angle = angleRad + steps * 2 * MathF.PI / Directions;
                 var candidate = At(anchor, size, distance, angle);
-                if (IsFree(candidate, Clearance) && IsLeaderFree(anchor, candidate, mayCrossLines))
+                if (IsFree(candidate, Clearance) && (mayCrossLabels || IsLeaderFree(anchor, candidate, mayCrossLines)))
                 {
                     _rectangles.Add(candidate);
                     return candidate;

@@ -6,7 +6,7 @@ using SpeedCommand.Desk.Commands;
 
 namespace SpeedCommand.Desk.Plots;
 
-/// <summary>A picture or page to write; the kind is in the file's name.</summary>
+/// <summary>A picture, page or text to write; the kind is in the file's name.</summary>
 internal sealed partial class PictureFile
 {
     private readonly string _path;
@@ -23,14 +23,23 @@ internal sealed partial class PictureFile
         return new PictureFile(path, ending);
     }
 
+    public bool IsText => _ending == ".txt";
+
+    /// <summary>Writes text.</summary>
+    public void Write(string text) => File.WriteAllText(_path, text);
+
     /// <summary>Draws and writes it. The same drawing gives the same bytes.</summary>
-    public void Write(int width, int height, Action<SKCanvas> draw)
+    /// <param name="width">Width in the drawing's units: points of a page, pixels of a plain picture.</param>
+    /// <param name="height">Height in the same units.</param>
+    /// <param name="draw">Draws it.</param>
+    /// <param name="pixelsPerUnit">How fine a page becomes as a picture of pixels.</param>
+    public void Write(int width, int height, Action<SKCanvas> draw, int pixelsPerUnit = 1)
     {
         using var content = new MemoryStream();
         switch (_ending)
         {
             case ".png":
-                WritePng(content, width, height, draw);
+                WritePng(content, width, height, draw, pixelsPerUnit);
                 break;
             case ".svg":
                 WriteSvg(content, width, height, draw);
@@ -46,10 +55,11 @@ internal sealed partial class PictureFile
         File.WriteAllBytes(_path, content.ToArray());
     }
 
-    private static void WritePng(Stream content, int width, int height, Action<SKCanvas> draw)
+    private static void WritePng(Stream content, int width, int height, Action<SKCanvas> draw, int pixelsPerUnit)
     {
-        using var surface = SKSurface.Create(new SKImageInfo(width, height));
+        using var surface = SKSurface.Create(new SKImageInfo(width * pixelsPerUnit, height * pixelsPerUnit));
         surface.Canvas.Clear(SKColors.White);
+        surface.Canvas.Scale(pixelsPerUnit);
         draw(surface.Canvas);
         using var image = surface.Snapshot();
         using var bytes = image.Encode(SKEncodedImageFormat.Png, 100);

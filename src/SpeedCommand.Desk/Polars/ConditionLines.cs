@@ -26,12 +26,14 @@ internal static class ConditionLines
     {
         var air = conditions.Air;
         var source = air.TemperatureSource == TemperatureSource.Measured ? "measured" : "standard";
-        return $"pressure altitude {Show(air.PressureAltitudeM, units.Height, 0)}, density altitude {Show(air.DensityAltitudeM, units.Height, 0)}, {Show(air.TemperatureK, units.Temperature, 1)} ({source})";
+        return $"pressure altitude {Show(air.PressureAltitudeM, units.Height, 0)}, "
+            + $"density altitude {Show(air.DensityAltitudeM, units.Height, 0)}, {Show(air.TemperatureK, units.Temperature, 1)} ({source})";
     }
 
     /// <summary>"expected climb 2.0 m/s, air -0.5 m/s, headwind 20 km/h".</summary>
     public static string Motion(FlightConditions conditions, DisplayUnits units) =>
-        $"expected climb {Show(conditions.ClimbMps, units.Vertical, 1)}, air {Show(conditions.AirMps, units.Vertical, 1)}, {Wind(conditions.HeadwindMps, units)}";
+        $"expected climb {Show(conditions.ClimbMps, units.Vertical, 1)}, "
+        + $"air {Show(conditions.AirMps, units.Vertical, 1)}, {Wind(conditions.HeadwindMps, units)}";
 
     /// <summary>"headwind 20 km/h" or "tailwind 20 km/h".</summary>
     public static string Wind(double headwindMps, DisplayUnits units) =>

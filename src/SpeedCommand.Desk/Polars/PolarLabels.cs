@@ -14,6 +14,9 @@ internal sealed class PolarLabels(SinkCurve curve, DisplayUnits units, PlotArea 
     /// <summary>The share of the MacCready tangent at which it is named: before the curve begins, as a rule.</summary>
     private const double NamedPart = 0.22;
 
+    /// <summary>The same for the glide tangent, further on, where the MacCready tangent's labels are not.</summary>
+    private const double GlideNamedPart = 0.4;
+
     private readonly LabelPlacer _placer = new(area.Pixels);
     private readonly List<(SKPoint At, Marker Shape, SKColor Color, string[] Lines, float AngleRad)> _labels = [];
     private readonly List<SKRect?> _places = [];
@@ -54,8 +57,14 @@ internal sealed class PolarLabels(SinkCurve curve, DisplayUnits units, PlotArea 
     {
         var wind = tangent.OriginTrueMps;
         var origin = wind == 0 ? "from no wind" : $"from {ConditionLines.Wind(wind, units)}";
+        if (wind >= 0)
+        {
+            Add(curve.IndicatedAtTrue(wind), tangent.OriginSinkMps, Marker.Ring, PictureColors.Green, 0);
+        }
+
         var start = Math.Max(0, wind);
-        Add(curve.IndicatedAtTrue(start), tangent.SinkAt(start), wind < 0 ? Marker.None : Marker.Ring, PictureColors.Green, 0.9f, "glide tangent", origin);
+        var part = start + GlideNamedPart * (tangent.TouchTrueMps - start);
+        Add(curve.IndicatedAtTrue(part), tangent.SinkAt(part), Marker.None, PictureColors.Green, 1.7f, "glide tangent", origin);
     }
 
     /// <summary>Where each label stands, once laid out, those of the limits included; null where none could be found.</summary>
@@ -155,7 +164,8 @@ internal sealed class PolarLabels(SinkCurve curve, DisplayUnits units, PlotArea 
                 path.AddRect(SKRect.Create(at.X - MarkerRadius + 1, at.Y - MarkerRadius + 1, 2 * MarkerRadius - 2, 2 * MarkerRadius - 2));
                 break;
             case Marker.Diamond:
-                path.AddPoly([new(at.X, at.Y - MarkerRadius - 1.5f), new(at.X + MarkerRadius + 1.5f, at.Y), new(at.X, at.Y + MarkerRadius + 1.5f), new(at.X - MarkerRadius - 1.5f, at.Y)]);
+                const float Reach = MarkerRadius + 1.5f;
+                path.AddPoly([new(at.X, at.Y - Reach), new(at.X + Reach, at.Y), new(at.X, at.Y + Reach), new(at.X - Reach, at.Y)]);
                 break;
             default:
                 path.AddCircle(at.X, at.Y, shape == Marker.Ring ? MarkerRadius - 2 : MarkerRadius);

@@ -46,6 +46,8 @@ internal sealed class PolarPicture
 
     public PolarLabels Labels { get; }
 
+    private bool IsClimbShown => _area.At(0, 0).Y > DataArea.Top + 0.25f * DataArea.Height;
+
     public void Draw(SKCanvas canvas)
     {
         _area.Draw(canvas, WidthPx, HeightPx);
@@ -64,7 +66,7 @@ internal sealed class PolarPicture
         var decimals = step < 1 ? 1 : 0;
         _area.SetTicks(
             across.Select(value => (value, ConditionLines.Number(value, 0))),
-            NiceSteps.Between(top, bottom, step).Select(value => (value, ConditionLines.Number(Math.Abs(value), decimals))));
+            NiceSteps.Between(IsClimbShown ? top : 0, bottom, step).Select(value => (value, ConditionLines.Number(Math.Abs(value), decimals))));
         (double X, double Y)[] level = [(0, 0), (limits.Right, 0)];
         _area.AddLine(level, PictureColors.Quiet, 1.2f, LinePattern.Solid);
         Labels.AvoidLine(level);
@@ -155,9 +157,8 @@ internal sealed class PolarPicture
         text.Line(canvas, $"{ConditionLines.Load(conditions)}; {ConditionLines.Air(conditions, _units)}", DataArea.Left, 61, PictureColors.Ink, false, SKTextAlign.Left);
         text.Line(canvas, ConditionLines.Motion(conditions, _units), DataArea.Left, 81, PictureColors.Ink, false, SKTextAlign.Left);
         text.Line(canvas, $"indicated airspeed, {_units.Speed.Symbol}", DataArea.MidX, DataArea.Bottom + 42, PictureColors.Ink, false, SKTextAlign.Center);
-        var isClimbShown = _area.At(0, 0).Y > DataArea.Top + 0.25f * DataArea.Height;
-        var vertical = isClimbShown ? $"\u2190 sink      {_units.Vertical.Symbol}      climb \u2192" : $"\u2190 sink, {_units.Vertical.Symbol}";
-        text.Upright(canvas, vertical, 24, isClimbShown ? _area.At(0, 0).Y : DataArea.MidY, PictureColors.Ink, SKTextAlign.Center);
+        var vertical = IsClimbShown ? $"\u2190 sink      {_units.Vertical.Symbol}      climb \u2192" : $"\u2190 sink, {_units.Vertical.Symbol}";
+        text.Upright(canvas, vertical, 24, IsClimbShown ? _area.At(0, 0).Y : DataArea.MidY, PictureColors.Ink, SKTextAlign.Center);
         small.Line(canvas, string.Create(CultureInfo.InvariantCulture,
             $"Tangents are straight in true airspeed; this axis is what the pilot reads. {ConditionLines.Caution}"),
             DataArea.Left, HeightPx - 16, PictureColors.Quiet, false, SKTextAlign.Left);

@@ -46,31 +46,41 @@ internal sealed class PolarTable(SinkCurve curve, DisplayUnits units)
     private void AppendPoint(string name, in SinkCurvePoint point, string note)
     {
         var speed = units.Speed;
-        _text.Append(CultureInfo.InvariantCulture,
-            $"{name,-13}{ConditionLines.Number(curve.Limits.Rounded(point.IndicatedMps, speed), 0),10}{ConditionLines.Number(speed.Convert(point.EquivalentMps), 0),11}{ConditionLines.Number(speed.Convert(point.TrueMps), 0),7}{ConditionLines.Number(units.Vertical.Convert(point.SinkMps), 2),8}{ConditionLines.Number(point.GlideRatio, 1),8}");
+        _text.Append(name.PadRight(13))
+            .Append(ConditionLines.Number(curve.Limits.Rounded(point.IndicatedMps, speed), 0).PadLeft(10))
+            .Append(ConditionLines.Number(speed.Convert(point.EquivalentMps), 0).PadLeft(11))
+            .Append(ConditionLines.Number(speed.Convert(point.TrueMps), 0).PadLeft(7))
+            .Append(ConditionLines.Number(units.Vertical.Convert(point.SinkMps), 2).PadLeft(8))
+            .Append(ConditionLines.Number(point.GlideRatio, 1).PadLeft(8));
         if (_isGroundShown)
         {
             var ratio = point.RatioOverGround(_conditions.HeadwindMps, _conditions.AirMps);
-            _text.Append(CultureInfo.InvariantCulture, $"{(double.IsInfinity(ratio) ? "climbs" : ConditionLines.Number(ratio, 1)),8}");
+            _text.Append((double.IsInfinity(ratio) ? "climbs" : ConditionLines.Number(ratio, 1)).PadLeft(8));
         }
 
-        _text.Append(note.Length > 0 ? "   " + note : "").Append('\n');
+        var flaps = curve.FlapSettingAt(point) is { } setting ? "flaps " + setting : "";
+        var notes = string.Join(", ", new[] { flaps, note }.Where(part => part.Length > 0));
+        _text.Append(notes.Length > 0 ? "   " + notes : "").Append('\n');
     }
 
     private void AppendTargets()
     {
         var answer = curve.Answer;
-        AppendTarget("minimum sink", answer.MinSink, "");
+        AppendTarget("minimum sink", answer.MinSink, answer.Circle.Speed.IsKnown ? CircleNote(answer.Circle) : "");
         AppendTarget("best glide", answer.BestGlide.Speed, "");
-        if (_conditions.Glider.Limits is null)
+        var missing = LimitNames.WhyNoSpeedToFly(_conditions.Glider, curve.Limits);
+        if (missing.Length > 0)
         {
-            _text.Append("speed to fly  not shown: the glider file has no limits\n");
+            _text.Append("speed to fly  not shown: ").Append(missing).Append('\n');
             return;
         }
 
         var average = answer.SpeedToFly.AverageSpeedMps;
         AppendTarget("speed to fly", answer.SpeedToFly.Speed, average > 0 ? $"average {ConditionLines.Show(average, units.Speed, 0)}" : "");
     }
+
+    private string CircleNote(in ThermallingTarget circle) =>
+        $"circle of radius {ConditionLines.Show(circle.RadiusM, units.Height, 0)}, {ConditionLines.Number(circle.CircleTimeS, 0)} s";
 
     private void AppendTarget(string name, in TargetSpeed target, string note)
     {
@@ -98,6 +108,8 @@ internal sealed class PolarTable(SinkCurve curve, DisplayUnits units)
         }
 
         var limits = curve.Limits;
-        return $"limits, indicated: stall margin {ConditionLines.Show(limits.StallMarginMps, units.Speed, 0)}, rough air {ConditionLines.Show(limits.RoughAirMps, units.Speed, 0)}, never exceed {ConditionLines.Show(limits.NeverExceedMps, units.Speed, 0)}";
+        return $"limits, indicated: stall margin {ConditionLines.Show(limits.StallMarginMps, units.Speed, 0)}, "
+            + $"rough air {ConditionLines.Show(limits.RoughAirMps, units.Speed, 0)}, "
+            + $"never exceed {ConditionLines.Show(limits.NeverExceedMps, units.Speed, 0)}";
     }
 }

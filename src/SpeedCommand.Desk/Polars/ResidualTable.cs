@@ -38,14 +38,17 @@ internal static class ResidualTable
         var fit = FitOf(table);
         text.Append(CultureInfo.InvariantCulture,
             $"\nsink table{(name.Length > 0 ? ", flap setting " + name : "")}: {table.ReferenceMassKg:F0} kg, sea level; the columns give curve minus table\n");
+        var (speed, vertical) = (units.Speed.Symbol, units.Vertical.Symbol);
         text.Append($"{"equivalent",10}{"sink",9}{"curve",9}{(fit is null ? "" : "drag polar"),12}".TrimEnd()).Append('\n');
-        text.Append($"{units.Speed.Symbol,10}{units.Vertical.Symbol,9}{units.Vertical.Symbol,9}{(fit is null ? "" : units.Vertical.Symbol),12}".TrimEnd()).Append('\n');
+        text.Append($"{speed,10}{vertical,9}{vertical,9}{(fit is null ? "" : vertical),12}".TrimEnd()).Append('\n');
         for (var i = 0; i < table.Points.Count; i++)
         {
             var point = table.Points[i];
             var fitted = fit is null ? "" : Signed(units.Vertical.Convert(fit.ResidualsMps[i]));
-            text.Append(
-                $"{ConditionLines.Number(units.Speed.Convert(point.AirspeedMps), 1),10}{ConditionLines.Number(units.Vertical.Convert(point.SinkMps), 2),9}{Signed(units.Vertical.Convert(table.ResidualsMps[i])),9}{fitted,12}".TrimEnd()).Append('\n');
+            text.Append(ConditionLines.Number(units.Speed.Convert(point.AirspeedMps), 1).PadLeft(10))
+                .Append(ConditionLines.Number(units.Vertical.Convert(point.SinkMps), 2).PadLeft(9))
+                .Append(Signed(units.Vertical.Convert(table.ResidualsMps[i])).PadLeft(9))
+                .Append(fit is null ? "" : fitted.PadLeft(12)).Append('\n');
         }
 
         if (fit is not null)
@@ -58,5 +61,6 @@ internal static class ResidualTable
         text.Append(table.IsConvex ? "" : "the table is not convex: the curve passes through each point\n");
     }
 
-    private static string Signed(double value) => Math.Abs(value) < 0.00005 ? "0.0000" : value.ToString("+0.0000;-0.0000", CultureInfo.InvariantCulture);
+    private static string Signed(double value) =>
+        Math.Abs(value) < 0.00005 ? "0.0000" : value.ToString("+0.0000;-0.0000", CultureInfo.InvariantCulture);
 }

@@ -64,6 +64,11 @@ internal sealed class SinkCurve
             : null;
     }
 
+    /// <summary>The flap setting that sinks least at a point; null without flaps.</summary>
+    public string? FlapSettingAt(in SinkCurvePoint point) => Targets.FlapSettingAt(
+        new TargetSpeed(double.NaN, point.TrueMps, point.EquivalentMps, point.IndicatedMps, point.SinkMps, LimitedBy.None, true),
+        Conditions.Loading);
+
     /// <summary>What the indicator shows at a true airspeed; NaN out of range.</summary>
     public double IndicatedAtTrue(double trueMps) =>
         Indicated(AirspeedConversion.ToEquivalent(new TrueAirspeed(trueMps), Conditions.Air));

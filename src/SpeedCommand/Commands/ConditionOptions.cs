@@ -7,7 +7,10 @@ namespace SpeedCommand.Commands;
 internal sealed class ConditionOptions
 {
     private readonly List<Option<string?>> _options =
-        [.. ConditionOption.All.Select(option => new Option<string?>(option.Name) { HelpName = option.HelpName, Description = option.Description })];
+    [
+        .. ConditionOption.All.Select(option =>
+            new Option<string?>(option.Name) { HelpName = option.HelpName, Description = option.Description }),
+    ];
 
     public void AddTo(Command command) => _options.ForEach(command.Add);
 

@@ -30,9 +30,10 @@ internal static class ReplayCommand
         var display = new Option<string>("--display") { Description = "Show the panel while replaying.", DefaultValueFactory = _ => "none" };
         display.AcceptOnlyFromAmong("terminal", "none");
         var command = new Command("replay", "Replay recorded flights.") { logs, settings, with, glider, pace, output, display };
-        command.SetAction((parsed, cancel) => Task.FromResult(Run(
+        // On a thread of its own: the library listens to signals only once the action has given its thread back.
+        command.SetAction((parsed, cancel) => Task.Run(() => Run(
             new Request(parsed.GetValue(logs)!, parsed.GetValue(settings), parsed.GetValue(with), parsed.GetValue(glider),
-                parsed.GetValue(pace), parsed.GetValue(output), parsed.GetValue(display)!), cancel)));
+                parsed.GetValue(pace), parsed.GetValue(output), parsed.GetValue(display)!), cancel), CancellationToken.None));
         return command;
     }
 

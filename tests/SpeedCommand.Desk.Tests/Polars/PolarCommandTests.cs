@@ -105,6 +105,38 @@ public sealed class PolarCommandTests(ReferenceGlider glider) : IClassFixture<Re
         Assert.Contains("speed to fly  not shown: the glider file has no limits", output, StringComparison.Ordinal);
     }
 
+    [Theory] // the Marram's limits end at 12 km; at 75 deg of bank it stalls at 66 km/h √(450/340/cos 75°) = 149 km/h
+    [InlineData("the glider file's limits end below this altitude", "--altitude", "14000m")]
+    [InlineData("the stall margin is above the limits", "--altitude", "11900m", "--bank", "75deg", "--mass", "450kg")]
+    public void NoSpeedToFly_SaysWhy(string reason, params string[] options)
+    {
+        var picture = glider.PathOf("none.svg");
+        var (status, output, _) = DeskConsole.RunToText(["polar", "--glider", "marram-15.json", .. options, "--plot", picture]);
+        Assert.Equal(0, status);
+        Assert.Contains("speed to fly  not shown: " + reason, output, StringComparison.Ordinal);
+        Assert.DoesNotContain("speed to fly", File.ReadAllText(picture), StringComparison.Ordinal);
+    }
+
+    [Fact] // level turn: radius V²/(g tan φ), time 2πV/(g tan φ); 22.79485 m/s at 40° of bank, worked out independently: 63.145 m
+    public void Bank_TellsTheCircle() => Assert.Contains(
+        "circle of radius 63 m, 17 s", glider.Text("polar", "--bank", "40deg"), StringComparison.Ordinal);
+
+    [Fact] // of two tables the one with less sink: +8 below their crossing between 90 and 110 km/h, 0 above it
+    public void Flaps_RowsNameTheSettingThatSinksLeast()
+    {
+        var file = glider.PathOf("flapped.json");
+        File.WriteAllText(file, """
+            { "name": "Flapped", "referenceMass": "450 kg", "flaps": [
+                { "setting": "+8", "sinkTable": [ { "airspeed": "70 km/h", "sink": "0.60 m/s" }, { "airspeed": "90 km/h", "sink": "0.62 m/s" }, { "airspeed": "110 km/h", "sink": "0.90 m/s" } ] },
+                { "setting": "0", "sinkTable": [ { "airspeed": "80 km/h", "sink": "0.70 m/s" }, { "airspeed": "110 km/h", "sink": "0.72 m/s" }, { "airspeed": "160 km/h", "sink": "1.60 m/s" } ] } ] }
+            """);
+        var (status, output, _) = DeskConsole.RunToText("polar", "--glider", file);
+        Assert.Equal(0, status);
+        var flaps = output.Split('\n').Where(line => line.StartsWith("        ", StringComparison.Ordinal) && line.Contains("flaps", StringComparison.Ordinal))
+            .Select(line => line.Split(' ', StringSplitOptions.RemoveEmptyEntries)).ToDictionary(cells => cells[0], cells => cells[^1]);
+        Assert.Equal(("+8", "+8", "0", "0"), (flaps["70"], flaps["90"], flaps["110"], flaps["160"]));
+    }
+
     [Fact]
     public void TableNotConvex_WarnsAndWorks()
     {
@@ -145,6 +177,14 @@ public sealed class PolarCommandTests(ReferenceGlider glider) : IClassFixture<Re
         Assert.Equal(78, status);
         Assert.Contains($"speedcommand-desk: {file}:2: wingArea: ", errors, StringComparison.Ordinal);
         Assert.Contains($"speedcommand-desk: {file}:3: referenceMass: ", errors, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void GliderFileThatIsNotThere_Exit66()
+    {
+        var (status, errors) = DeskConsole.Run("polar", "--glider", "paper-plane.json");
+        Assert.Equal(66, status);
+        Assert.StartsWith("speedcommand-desk: paper-plane.json: ", errors, StringComparison.Ordinal);
     }
 
     [Fact]

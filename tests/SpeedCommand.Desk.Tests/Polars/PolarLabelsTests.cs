@@ -13,7 +13,7 @@ public sealed class PolarLabelsTests
         Assert.True(places.Count >= 6, "three limits and three targets");
         for (var i = 0; i < places.Count; i++)
         {
-            Assert.NotNull(places[i]);
+            Assert.True(places[i] is not null, $"label {i}: {curve.Conditions}");
             Assert.DoesNotContain(places.Take(i), other => other!.Value.IntersectsWith(places[i]!.Value));
         }
     }, iter: 300);

@@ -8,7 +8,8 @@ namespace SpeedCommand.Desk.Tests.Polars;
 internal static class SinkCurves
 {
     public static readonly Gen<SinkCurve> Any = Gen.Select(
-        Gen.Bool.Select(isLight => isLight ? "marram-15.json" : "tern-18.json"), Gen.Double[340, 450], Gen.Int[0, 5000], Gen.Double[0, 6], Gen.Double[-3, 1], Gen.Double[-15, 15])
+        Gen.Bool.Select(isLight => isLight ? "marram-15.json" : "tern-18.json"), Gen.Double[340, 450], Gen.Int[0, 5000],
+        Gen.Double[0, 6], Gen.Double[-3, 1], Gen.Double[-15, 15])
         .Select((glider, mass, altitude, climb, air, headwind) => new SinkCurve(new ConditionsReader().Read(new ConditionTexts
         {
             Glider = glider,
