@@ -79,25 +79,9 @@ internal static class Pictures
     };
 
     /// <summary>Nothing works: every gauge is blank and every fault is there.</summary>
-    public static CockpitPicture Nothing => new()
+    public static CockpitPicture Nothing => CockpitPicture.Blank(0, FaultNames.All.Aggregate(Faults.None, (all, fault) => all | fault.Key)) with
     {
-        Phase = FlightPhase.Gliding,
-        PressureAltitudeM = Gauge.Blank,
-        DensityAltitudeM = Gauge.Blank,
-        TemperatureK = Gauge.Blank,
-        IndicatedAirspeedMps = Gauge.Blank,
-        TrueAirspeedMps = Gauge.Blank,
-        ClimbMps = Gauge.Blank,
-        AverageClimbMps = Gauge.Blank,
-        NettoMps = Gauge.Blank,
-        MinSinkIndicatedMps = Gauge.Blank,
-        BestGlideIndicatedMps = Gauge.Blank,
-        SpeedToFlyIndicatedMps = Gauge.Blank,
-        HoldIndicatedMps = Gauge.Blank,
         ExpectedClimbMps = double.NaN,
-        EnduranceS = Gauge.Blank,
-        RangeM = Gauge.Blank,
-        Faults = FaultNames.All.Aggregate(Faults.None, (all, fault) => all | fault.Key),
     };
 
     public static CockpitPicture Named(string name) => name switch
