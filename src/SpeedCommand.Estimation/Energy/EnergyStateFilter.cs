@@ -36,9 +36,6 @@ public sealed class EnergyStateFilter
     /// <summary>Total-energy climb, m/s, positive up.</summary>
     public double ClimbMps => _state[Staying] + _state[Passing];
 
-    /// <summary>Kinetic height without gusts, m.</summary>
-    public double KineticM => _state[Kinetic];
-
     /// <summary>Variance of the climb, (m/s)².</summary>
     public double ClimbVariance => P(Staying, Staying) + P(Passing, Passing) + 2 * P(Staying, Passing);
 

@@ -3,20 +3,13 @@ using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Pipeline.Stages;
 
-/// <summary>Faults that happen at a moment: each is shown for a while after its last occurrence, and counted.</summary>
+/// <summary>Faults that happen at a moment: each is shown for a while after its last occurrence.</summary>
 internal sealed class EventFaults
 {
     private readonly long[] _untilUs = new long[32];
-    private readonly long[] _counts = new long[32];
 
-    public void Note(Faults fault, long timeUs)
-    {
-        var index = BitOperations.TrailingZeroCount((int)fault);
-        _untilUs[index] = timeUs + PipelineBounds.EventFaultUs;
-        _counts[index]++;
-    }
-
-    public long CountOf(Faults fault) => _counts[BitOperations.TrailingZeroCount((int)fault)];
+    public void Note(Faults fault, long timeUs) =>
+        _untilUs[BitOperations.TrailingZeroCount((int)fault)] = timeUs + PipelineBounds.EventFaultUs;
 
     public Faults At(long nowUs)
     {

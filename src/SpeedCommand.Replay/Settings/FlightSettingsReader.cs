@@ -25,7 +25,8 @@ public static class FlightSettingsReader
         var minKg = glider is { EmptyMassKg: > 0 } ? glider.EmptyMassKg : 50;
         var massKg = source.Quantity("mass", QuantityKind.Mass, reference, minKg, maxKg);
         var ballastKg = source.Quantity("ballast", QuantityKind.Mass, 0, 0, 600);
-        if (massKg + ballastKg > maxKg && source.Find("ballast") is { } ballast)
+        if (glider?.TryFlyingMass(massKg, ballastKg, out _, out var reason) == false && reason == MassInvalid.AboveMax
+            && source.Find("ballast") is { } ballast)
         {
             source.Report(ballast, FormattableString.Invariant(
                 $"expected mass and ballast together at most {maxKg:G6} kg, found {massKg + ballastKg:G6} kg"));

@@ -204,11 +204,6 @@ public sealed class SettingsSource
         return names;
     }
 
-    /// <summary>Whether a path stands in the file, whatever it holds.</summary>
-    /// <param name="path">The path.</param>
-    /// <returns>Whether it is there and not null.</returns>
-    public bool IsInFile(string path) => InFile(path) is { Kind: not JsonPlaceKind.Null };
-
     /// <summary>Notes a fault of a setting.</summary>
     /// <param name="setting">The setting.</param>
     /// <param name="message">What was expected and what was found.</param>
