@@ -37,6 +37,12 @@ public enum Faults
     /// <summary>The glider file has no limits, or none for this altitude: the speed to fly is not shown.</summary>
     NoLimits = 1 << 9,
 
+    /// <summary>A port's device is missing or was unplugged; set by the service, never by the pipeline.</summary>
+    PortMissing = 1 << 10,
+
+    /// <summary>A port's device is there but cannot be used; set by the service, never by the pipeline.</summary>
+    PortRefused = 1 << 11,
+
     /// <summary>The flight is no longer being recorded; set by the service, never by the pipeline.</summary>
-    RecorderStopped = 1 << 10,
+    RecorderStopped = 1 << 12,
 }
