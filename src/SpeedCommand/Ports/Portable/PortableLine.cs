@@ -11,6 +11,7 @@ internal sealed class PortableLine : IAsyncDisposable
     private static readonly TimeSpan CloseLimit = TimeSpan.FromSeconds(1);
 
     private readonly LinuxLine? _lock;
+    private Task? _closing;
 
     private PortableLine(SerialPort port, LinuxLine? held)
     {
@@ -19,6 +20,9 @@ internal sealed class PortableLine : IAsyncDisposable
     }
 
     public SerialPort Port { get; }
+
+    /// <summary>The closing of the port, begun by asking; on a thread of its own, as it may hang.</summary>
+    public Task Closing => _closing ??= Task.Factory.StartNew(Port.Dispose, CancellationToken.None, TaskCreationOptions.LongRunning, TaskScheduler.Default);
 
     /// <summary>Opens a port; false and why when it cannot be.</summary>
     public static bool TryOpen(string device, string path, int baud, LineFraming framing, out PortableLine line, out PortTrouble trouble)
@@ -60,7 +64,7 @@ internal sealed class PortableLine : IAsyncDisposable
     {
         try
         {
-            await Task.Run(Port.Dispose).WaitAsync(CloseLimit).ConfigureAwait(false);
+            await Closing.WaitAsync(CloseLimit).ConfigureAwait(false);
         }
         catch (Exception fault) when (IsPortFault(fault) || fault is TimeoutException)
         {

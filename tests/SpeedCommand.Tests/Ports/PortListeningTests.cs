@@ -5,7 +5,7 @@ using SpeedCommand.Ports.Listening;
 using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
-namespace SpeedCommand.Tests;
+namespace SpeedCommand.Tests.Ports;
 
 /// <summary>What check says of a port, for each thing that can be wrong with one.</summary>
 public sealed class PortListeningTests
@@ -47,7 +47,7 @@ public sealed class PortListeningTests
     {
         var (isGood, verdict) = await ListenAsync([0x80, 0xFE, (byte)'\n', 0x00, 0x1C]);
         Assert.False(isGood);
-        Assert.Contains("no valid line, and 60 % of them are no text; is 115200 baud what the board sends at?", verdict, StringComparison.Ordinal);
+        Assert.Contains("no valid line, and 80 % of them are no text; is 115200 baud what the board sends at?", verdict, StringComparison.Ordinal);
     }
 
     [LinuxFact]
