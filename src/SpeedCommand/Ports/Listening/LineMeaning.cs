@@ -41,8 +41,9 @@ internal sealed record LineMeaning(
         foreach (var reading in measurements)
         {
             var isPossible = ReadingRanges.IsPossible(reading, out _);
-            words.Add(ReadingWords.Show(reading) + (isPossible ? "" : " (out of range)"));
-            names.Add(ReadingWords.Name(reading.Kind));
+            var judged = isPossible ? "" : " (out of range)";
+            words.Add(ReadingWords.Show(reading) + judged);
+            names.Add(ReadingWords.Name(reading.Kind) + judged);
             impossible += isPossible ? 0 : 1;
             if (isPossible)
             {
