@@ -23,7 +23,9 @@ public readonly record struct CockpitPicture
         TrueAirspeedMps = Gauge.Blank,
         ClimbMps = Gauge.Blank,
         AverageClimbMps = Gauge.Blank,
+        ThermalAverageMps = Gauge.Blank,
         NettoMps = Gauge.Blank,
+        RelativeNettoMps = Gauge.Blank,
         MinSinkIndicatedMps = Gauge.Blank,
         BestGlideIndicatedMps = Gauge.Blank,
         SpeedToFlyIndicatedMps = Gauge.Blank,
@@ -66,8 +68,14 @@ public readonly record struct CockpitPicture
     /// <summary>Total-energy climb averaged over the last 30 s, m/s.</summary>
     public Gauge AverageClimbMps { get; init; }
 
+    /// <summary>Total-energy climb averaged since circling began, m/s; blank when gliding.</summary>
+    public Gauge ThermalAverageMps { get; init; }
+
     /// <summary>Vertical motion of the air, m/s.</summary>
     public Gauge NettoMps { get; init; }
+
+    /// <summary>What the climb would be in this air, circling at minimum sink with the bank usual in thermals, m/s.</summary>
+    public Gauge RelativeNettoMps { get; init; }
 
     /// <summary>Indicated airspeed of least sink at the present weight and load, m/s.</summary>
     public Gauge MinSinkIndicatedMps { get; init; }

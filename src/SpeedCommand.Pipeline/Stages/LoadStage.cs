@@ -11,7 +11,7 @@ internal sealed class LoadStage
     private const double SmoothingS = 1;
 
     /// <summary>Load factor of a 40-degree bank, the usual one in a thermal (common practice).</summary>
-    private const double ThermallingLoad = 1.3054;
+    public const double ThermallingLoad = 1.3054;
 
     private TimedValue _loadFactor;
     private TimedValue _bankRad;

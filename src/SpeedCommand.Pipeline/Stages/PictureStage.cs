@@ -1,3 +1,4 @@
+using SpeedCommand.Estimation.Command;
 using SpeedCommand.Estimation.Energy;
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
@@ -18,7 +19,8 @@ internal sealed class PictureStage
     private const double PolarUncertainty = 0.05;
 
     private readonly PhaseStage _phase;
-    private readonly AverageClimb _average = new(AverageSpanS, PipelineBounds.PicturePeriodUs * 1e-6);
+    private readonly EnergyHistory _history = new(AverageSpanS, PipelineBounds.PicturePeriodUs * 1e-6);
+    private readonly ThermalAverage _thermal = new(PipelineBounds.PicturePeriodUs * 1e-6);
     private readonly TargetStage _targets;
     private readonly HeightInHandStage _heightInHand;
     private readonly FlightSettings _settings;
@@ -52,7 +54,7 @@ internal sealed class PictureStage
         }
         else
         {
-            _average.Add(double.NaN);
+            _history.Add(double.NaN);
             _targets.Reset();
         }
 
@@ -61,6 +63,7 @@ internal sealed class PictureStage
         return picture with
         {
             Phase = phase,
+            ThermalAverageMps = ThermalAverage(phase, picture.ClimbMps.AgeS),
             HoldIndicatedMps = phase == FlightPhase.Climbing ? picture.MinSinkIndicatedMps : picture.SpeedToFlyIndicatedMps,
             Faults = FaultsAt(nowUs, picture),
         };
@@ -84,7 +87,8 @@ internal sealed class PictureStage
     {
         var ageS = AgeS(nowUs);
         var estimate = _energy.EstimateAt(nowUs);
-        var average = _average.Add(estimate.EnergyHeightM);
+        _history.Add(estimate.EnergyHeightM);
+        var average = _history.AverageClimbMps(AverageSpanS);
         var climb = estimate.IsKnown ? new Gauge(estimate.ClimbMps, estimate.ClimbSigmaMps, ageS) : Gauge.Blank;
         var moved = picture with
         {
@@ -112,6 +116,7 @@ internal sealed class PictureStage
             BestGlideIndicatedMps = targets.BestGlide,
             SpeedToFlyIndicatedMps = targets.SpeedToFly,
             LimitedBy = targets.LimitedBy,
+            RelativeNettoMps = RelativeNetto(picture.NettoMps, targets.CirclingSinkMps),
             EnduranceS = inHand.EnduranceS,
             RangeM = inHand.RangeM,
         };
@@ -135,6 +140,23 @@ internal sealed class PictureStage
 
         var polarSigma = PolarUncertainty * sinkMps;
         return climb with { Value = climb.Value + sinkMps, Sigma = Math.Sqrt(climb.Sigma * climb.Sigma + polarSigma * polarSigma) };
+    }
+
+    /// <summary>The circle's sink is as doubtful as the polar, and so adds to the doubt of the air's motion.</summary>
+    private static Gauge RelativeNetto(in Gauge netto, double circlingSinkMps)
+    {
+        var polarSigma = PolarUncertainty * circlingSinkMps;
+        return netto.IsKnown && double.IsFinite(circlingSinkMps)
+            ? netto with { Value = netto.Value - circlingSinkMps, Sigma = Math.Sqrt(netto.Sigma * netto.Sigma + polarSigma * polarSigma) }
+            : Gauge.Blank;
+    }
+
+    /// <summary>The phase is noticed late; the thermal began when its evidence did, unless the pilot said so.</summary>
+    private Gauge ThermalAverage(FlightPhase phase, double ageS)
+    {
+        var noticedAfterS = _settings.ForcedPhase is null ? PhaseStage.LastingUs * 1e-6 : 0;
+        var average = _thermal.Add(phase == FlightPhase.Climbing, _history, noticedAfterS);
+        return double.IsNaN(average) ? Gauge.Blank : new Gauge(average, double.NaN, ageS);
     }
 
     private Faults FaultsAt(long nowUs, in CockpitPicture picture)
