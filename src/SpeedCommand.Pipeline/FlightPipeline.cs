@@ -1,4 +1,5 @@
 using SpeedCommand.Estimation.Energy;
+using SpeedCommand.Pipeline.Health;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Pipeline.Stages;
 using SpeedCommand.Sentences;
@@ -18,6 +19,7 @@ public sealed class FlightPipeline
     private readonly HydrostaticHeight _height = new();
     private readonly IEnergyEstimator _energy;
     private readonly EventFaults _events = new();
+    private readonly HealthStage _health;
     private readonly PictureStage _pictures;
     private readonly List<StreamHealth> _streams = [];
     private readonly List<ChecksumRule> _rules = [];
@@ -33,11 +35,15 @@ public sealed class FlightPipeline
         _energy = energy ?? new AdaptiveEnergyEstimator(settings.StaticLagS, settings.ImpactLagS);
         _sink = sink;
         _airData = new AirDataStage(settings);
+        _health = new HealthStage(_airData, _events);
         _pictures = new PictureStage(settings, _airData, _load, _energy, _events);
     }
 
     /// <summary>The streams added so far, with their counts.</summary>
     public IReadOnlyList<StreamHealth> Streams => _streams;
+
+    /// <summary>When each fault came and went.</summary>
+    public FaultHistory FaultHistory { get; } = new();
 
     /// <summary>The newest stamp seen, microseconds.</summary>
     public long TimeUs { get; private set; }
@@ -75,6 +81,7 @@ public sealed class FlightPipeline
             return;
         }
 
+        _health.WatchGnss(TimeUs, sentence, _height.HeightM);
         var readings = new XdrReadings(sentence);
         health.Readings += readings.Count;
         health.BadReadings += readings.BadCount;
@@ -99,13 +106,20 @@ public sealed class FlightPipeline
         TimeUs = Math.Max(TimeUs, timeUs);
         while (_nextPictureUs <= TimeUs)
         {
-            _sink.OnPicture(_pictures.MakeAt(_nextPictureUs));
+            var picture = _pictures.MakeAt(_nextPictureUs);
+            FaultHistory.Take(picture.TimeUs, picture.Faults);
+            _sink.OnPicture(picture);
             _nextPictureUs += PipelineBounds.PicturePeriodUs;
         }
     }
 
     private void Take(in Reading reading)
     {
+        if (!_health.Accepts(TimeUs, reading))
+        {
+            return;
+        }
+
         switch (reading.Kind)
         {
             case ReadingKind.StaticPressurePa when _airData.TrySetStatic(TimeUs, reading.Value):
@@ -119,6 +133,7 @@ public sealed class FlightPipeline
                 break;
             case ReadingKind.OutsideAirTemperatureK:
                 _airData.SetTemperature(TimeUs, reading.Value);
+                _health.WatchTemperature(TimeUs, reading.Value, _height.HeightM);
                 break;
             case ReadingKind.RelativeHumidity:
                 _airData.SetHumidity(TimeUs, reading.Value);

@@ -29,6 +29,18 @@ internal sealed class AirDataStage(FlightSettings settings)
 
     public bool IsTemperatureFresh(long nowUs) => _sensedTemperatureK.IsFresh(nowUs, PipelineBounds.TemperatureFreshnessUs);
 
+    /// <summary>Whether the airspeed is fresh and no parked glider's.</summary>
+    public bool IsFlying(long nowUs) => IsAirspeedFresh(nowUs) && _impactPa.Value > PipelineBounds.FlyingImpactPa;
+
+    /// <summary>Relative humidity, 0 to 1; NaN when not fresh.</summary>
+    public double Humidity(long nowUs) => _humidity.IsFresh(nowUs, PipelineBounds.TemperatureFreshnessUs) ? _humidity.Value : double.NaN;
+
+    /// <summary>Static pressure turned out not to be known any later than this.</summary>
+    public void TakeBackStatic(long timeUs) => _staticPa.TakeBackTo(timeUs);
+
+    /// <summary>Impact pressure turned out not to be known any later than this.</summary>
+    public void TakeBackImpact(long timeUs) => _impactPa.TakeBackTo(timeUs);
+
     public double TemperatureAgeS(long nowUs) => _sensedTemperatureK.AgeS(nowUs);
 
     public void SetTemperature(long timeUs, double sensedK) => _sensedTemperatureK.Set(timeUs, sensedK);
@@ -104,8 +116,7 @@ internal sealed class AirDataStage(FlightSettings settings)
             return Air.TryStandard(pressurePa, _offsetK, out air, out _);
         }
 
-        var humidity = _humidity.IsFresh(timeUs, PipelineBounds.TemperatureFreshnessUs) ? _humidity.Value : double.NaN;
-        if (!Air.TryMeasured(pressurePa, StaticTemperatureK(), humidity, out air, out _))
+        if (!Air.TryMeasured(pressurePa, StaticTemperatureK(), Humidity(timeUs), out air, out _))
         {
             return false;
         }

@@ -12,8 +12,11 @@ internal sealed class PictureStage
 {
     private const double AverageSpanS = 30;
 
-    /// <summary>No glider flies slower; a parked one in the wind may read less (40 km/h).</summary>
-    private const double SlowestFlightMps = 40 / 3.6;
+    /// <summary>While a receiver contradicts the pressures, vertical speeds are this much more doubtful, m/s: the speed at which they part.</summary>
+    private const double DisagreementMps = 1.25;
+
+    /// <summary>A thermometer in the sun reads some 3 K high (common practice); density altitude moves 36 m per K (ISO 2533, troposphere).</summary>
+    private const double SunK = 3, DensityAltitudeMPerK = 36;
 
     /// <summary>Handbook polars are measured to about this share of the sink (common practice: "a few per cent").</summary>
     private const double PolarUncertainty = 0.05;
@@ -73,12 +76,13 @@ internal sealed class PictureStage
     {
         var air = _airData.Air;
         var ageS = _airData.StaticAgeS(nowUs);
+        var sunK = (_events.At(nowUs) & Faults.ThermometerDoubtful) != 0 ? SunK : double.NaN;
         var temperatureAgeS = air.TemperatureSource == TemperatureSource.Measured ? _airData.TemperatureAgeS(nowUs) : ageS;
         return picture with
         {
             PressureAltitudeM = new Gauge(air.PressureAltitudeM, double.NaN, ageS),
-            DensityAltitudeM = new Gauge(air.DensityAltitudeM, double.NaN, ageS),
-            TemperatureK = new Gauge(air.TemperatureK, double.NaN, temperatureAgeS),
+            DensityAltitudeM = new Gauge(air.DensityAltitudeM, sunK * DensityAltitudeMPerK, ageS),
+            TemperatureK = new Gauge(air.TemperatureK, sunK, temperatureAgeS),
             TemperatureSource = air.TemperatureSource,
         };
     }
@@ -89,7 +93,9 @@ internal sealed class PictureStage
         var estimate = _energy.EstimateAt(nowUs);
         _history.Add(estimate.EnergyHeightM);
         var average = _history.AverageClimbMps(AverageSpanS);
-        var climb = estimate.IsKnown ? new Gauge(estimate.ClimbMps, estimate.ClimbSigmaMps, ageS) : Gauge.Blank;
+        var isContradicted = (_events.At(nowUs) & (Faults.StaticDisagrees | Faults.AirspeedDisagrees)) != 0;
+        var sigma = isContradicted ? Math.Sqrt(estimate.ClimbSigmaMps * estimate.ClimbSigmaMps + DisagreementMps * DisagreementMps) : estimate.ClimbSigmaMps;
+        var climb = estimate.IsKnown ? new Gauge(estimate.ClimbMps, sigma, ageS) : Gauge.Blank;
         var moved = picture with
         {
             ClimbMps = climb,
@@ -123,9 +129,9 @@ internal sealed class PictureStage
     }
 
     /// <summary>In flight, netto goes blank where the polar ends; standing on the ground is no fault.</summary>
-    private static bool IsOutsidePolar(in CockpitPicture picture) =>
+    private bool IsOutsidePolar(in CockpitPicture picture) =>
         picture.ClimbMps.IsKnown && !picture.NettoMps.IsKnown && picture.IndicatedAirspeedMps.IsKnown
-        && picture.IndicatedAirspeedMps.Value > SlowestFlightMps;
+        && _airData.IsFlying(picture.TimeUs);
 
     /// <summary>A number that rests on both inputs is as old as the older of them.</summary>
     private double AgeS(long nowUs) => Math.Max(_airData.StaticAgeS(nowUs), _airData.AirspeedAgeS(nowUs));

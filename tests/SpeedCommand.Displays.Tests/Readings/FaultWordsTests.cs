@@ -23,7 +23,7 @@ public class FaultWordsTests
     [InlineData(Faults.BadLines, "unreadable data")]
     [InlineData(Faults.NoLimits, "no speed limits")]
     [InlineData(Faults.RecorderStopped, "not recording")]
-    [InlineData((Faults)(1 << 20), "unknown fault")]
+    [InlineData((Faults)(1 << 30), "unknown fault")]
     [InlineData(Faults.None, "unknown fault")]
     public void Of_OneFault_SaysIt(Faults fault, string words) => Assert.Equal(words, FaultWords.Of(fault));
 
