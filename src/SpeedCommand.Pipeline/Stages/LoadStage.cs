@@ -30,18 +30,22 @@ internal sealed class LoadStage
 
     private TimedValue _loadFactor;
     private TimedValue _bankRad;
+    private LoadFilter _loadFilter;
+    private LoadFilter _bankFilter;
     private double _steady = 1;
     private long _steadyTimeUs;
 
     public void SetLoadFactor(long timeUs, double loadFactor)
     {
         _loadFactor.Set(timeUs, loadFactor);
+        _loadFilter.Add(loadFactor);
         Smooth(timeUs, loadFactor);
     }
 
     public void SetBank(long timeUs, double bankRad)
     {
         _bankRad.Set(timeUs, bankRad);
+        _bankFilter.Add(1 / Math.Cos(bankRad));
         if (!_loadFactor.IsFresh(timeUs, PipelineBounds.FreshnessUs))
         {
             Smooth(timeUs, 1 / Math.Cos(bankRad));
@@ -57,12 +61,12 @@ internal sealed class LoadStage
     {
         if (_loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs))
         {
-            return new LoadBelief(_loadFactor.Value, LoadSensorSigma);
+            return new LoadBelief(_loadFilter.Value, LoadSensorSigma);
         }
 
         if (_bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs))
         {
-            return new LoadBelief(1 / Math.Cos(_bankRad.Value), BankSensorSigma);
+            return new LoadBelief(_bankFilter.Value, BankSensorSigma);
         }
 
         return phase == FlightPhase.Climbing ? new LoadBelief(ThermallingLoad, ThermallingSigma) : new LoadBelief(1, GlidingSigma);
