@@ -133,7 +133,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
             _modes.DropProbe();
         }
 
-        Take(new EnergyStep(dt, _lags, _hasProbe), new EnergySample(metres, lateS, channel), isBack);
+        Take(new EnergyStep(dt, _lags, _hasProbe, timeUs - _times.Of(EnergyChannel.Kinetic) <= MaxGapUs), new EnergySample(metres, lateS, channel), isBack);
     }
 
     private void Take(in EnergyStep step, in EnergySample sample, bool isBack)
@@ -167,8 +167,8 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         _learner.Predict(step);
         _modes.Predict(step, _learner.Noise);
         _hasProbe = true;
-        _learner.AddProbe(probeM);
-        _modes.AddProbe(probeM, _learner.Noise);
+        _learner.AddProbe(probeM, step.HasAirspeed);
+        _modes.AddProbe(probeM, step.HasAirspeed);
     }
 
     private void TryStart(long timeUs, double metres, EnergyChannel channel)
@@ -186,7 +186,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
                 if (timeUs - _firstProbeUs >= PatienceUs)
                 {
                     Start(double.IsNaN(_firstHeightM) ? metres - TotalEnergyProbe.UsualKineticM : _firstHeightM, TotalEnergyProbe.UsualKineticM, GuessVarianceM2);
-                    StartProbe(new EnergyStep(0, _lags), metres);
+                    StartProbe(new EnergyStep(0, _lags, hasAirspeed: false), metres);
                 }
 
                 break;

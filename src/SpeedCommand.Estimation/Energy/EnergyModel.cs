@@ -13,15 +13,21 @@ internal static class EnergyModel
     public const int TubeKinetic = 7;
     public const int KineticAcceleration = 8;
 
-    /// <summary>States without a probe; the two of the probe come after them.</summary>
+    /// <summary>States without a probe; the three of the probe come after them.</summary>
     public const int StatesWithoutProbe = 9;
 
     public const int TubeProbe = 9;
     public const int ProbeError = 10;
-    public const int States = 11;
+    public const int ProbeSlope = 11;
+    public const int States = 12;
 
     /// <summary>One column of states, taken over a step. The tubes come first: they need the others as they were.</summary>
-    public static void Move(double[] x, int at, int stride, bool hasProbe, in EnergyStep step)
+    /// <param name="x">The column, or a row of the covariance.</param>
+    /// <param name="at">Where it begins.</param>
+    /// <param name="stride">From one state to the next.</param>
+    /// <param name="probe">What the probe's slope counts; null without a probe.</param>
+    /// <param name="step">The step.</param>
+    public static void Move(double[] x, int at, int stride, ProbeFactor? probe, in EnergyStep step)
     {
         ref var energy = ref x[at];
         ref var staying = ref x[at + Staying * stride];
@@ -37,11 +43,13 @@ internal static class EnergyModel
             + step.HeightTube.Integral * (climb - rate);
         tubeKinetic = step.KineticTube.Kept * tubeKinetic + (1 - step.KineticTube.Kept) * (kinetic + gust)
             + step.KineticTube.Integral * rate;
-        if (hasProbe)
+        if (probe is { } factor)
         {
             ref var tubeProbe = ref x[at + TubeProbe * stride];
+            var slope = x[at + ProbeSlope * stride];
             tubeProbe = step.ProbeTube.Kept * tubeProbe
-                + (1 - step.ProbeTube.Kept) * (energy + gust + x[at + ProbeError * stride]) + step.ProbeTube.Integral * climb;
+                + (1 - step.ProbeTube.Kept) * (energy + gust + x[at + ProbeError * stride] + factor.KineticM * slope)
+                + step.ProbeTube.Integral * (climb + factor.KineticRateMps * slope);
         }
 
         energy += step.Dt * staying + step.Passing.Integral * passing;

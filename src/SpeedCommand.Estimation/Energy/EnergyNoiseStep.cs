@@ -8,12 +8,6 @@ namespace SpeedCommand.Estimation.Energy;
 /// </summary>
 internal readonly ref struct EnergyNoiseStep
 {
-    /// <summary>The staying climb changes with this share of the passing climb's density.</summary>
-    private const double StayingShare = 0.05;
-
-    /// <summary>But never slower than this, (m/s²)²/Hz: wave as smooth as glass still changes by a metre per second in a quarter of a minute.</summary>
-    private const double LeastStayingDensity = 0.004;
-
     /// <summary>
     /// Density of the probe error's random walk, m²/s: a metre in ten minutes as a board warms, and a tenth of a metre within five
     /// seconds as the airflow about the probe changes.
@@ -32,7 +26,7 @@ internal readonly ref struct EnergyNoiseStep
     public void AddTo(double[] p, bool hasProbe)
     {
         var dt = _step.Dt;
-        var staying = Math.Max(LeastStayingDensity, StayingShare * _noise.ClimbDensity) * dt;
+        var staying = _noise.StayingDensity * dt;
         var passing = _noise.ClimbDensity * dt;
         var kinetic = _noise.KineticDensity * dt;
         Add(p, Staying, Staying, staying);

@@ -7,11 +7,14 @@ namespace SpeedCommand.Estimation.Energy;
 /// as turbulence does), kinetic height K with its rate and acceleration, the gust's part in the kinetic height as sensed, and
 /// height and kinetic height as they stand at the far end of their tubes. The staying climb is a random walk, passing climb and
 /// gust are Gauss-Markov, the kinetic rate is a critically damped second-order process; the tubes are first-order lags of
-/// E - K and of K + gust. A total-energy probe adds two: its error, a slow random walk, and the end of its tube, a lag of
-/// E + gust + error. docs/estimators.md derives it.
+/// E - K and of K + gust. A total-energy probe adds three: its error, a slow random walk, the share by which it
+/// compensates K + gust too much, and the end of its tube, a lag of E + gust + error + share (K + gust). docs/estimators.md derives it.
 /// </summary>
 public sealed class EnergyStateFilter
 {
+    /// <summary>Total-energy probes compensate to within some 5 % (checked in flight by pull-ups; common practice).</summary>
+    private const double ProbeSlopeSigma = 0.05;
+
     private readonly double[] _state = new double[States];
     private readonly double[] _covariance = new double[States * States];
     private readonly double[] _cross = new double[States];
@@ -71,23 +74,32 @@ public sealed class EnergyStateFilter
     /// A probe comes in: its first sample says what its error is, and nothing else, since its datum is its own.
     /// </summary>
     /// <param name="probeM">The sample, m.</param>
-    /// <param name="noise">The noise.</param>
-    public void AddProbe(double probeM, in EnergyNoise noise)
+    /// <param name="hasAirspeed">Whether the kinetic height is known.</param>
+    public void AddProbe(double probeM, bool hasAirspeed)
     {
         _count = States;
         _state[TubeProbe] = probeM;
         _state[ProbeError] = probeM - _state[EnergyHeight] - _state[Gust];
-        // The error is the sample less its noise, less energy height and gust; the tube's end is the sample less its noise.
+        // The error is the sample less its noise, less energy height, gust and slope; the tube's end is the sample less its noise.
         for (var i = 0; i < StatesWithoutProbe; i++)
         {
             Set(ProbeError, i, -P(EnergyHeight, i) - P(Gust, i));
             Set(TubeProbe, i, 0);
+            Set(ProbeSlope, i, 0);
         }
 
+        // One sample may lie well outside a noise that is still to be learnt; taken for exact it would pass for a gust.
+        const double SampleVarianceM2 = 1;
+        const double SlopeVariance = ProbeSlopeSigma * ProbeSlopeSigma;
+        var factor = FactorOf(hasAirspeed).KineticM;
+        _state[ProbeSlope] = 0;
+        Set(ProbeSlope, ProbeSlope, SlopeVariance);
+        Set(ProbeSlope, ProbeError, -factor * SlopeVariance);
+        Set(ProbeSlope, TubeProbe, 0);
         var energyAndGust = P(EnergyHeight, EnergyHeight) + P(Gust, Gust) + 2 * P(EnergyHeight, Gust);
-        Set(ProbeError, ProbeError, energyAndGust + noise.ProbeVarianceM2);
-        Set(TubeProbe, TubeProbe, noise.ProbeVarianceM2);
-        Set(ProbeError, TubeProbe, noise.ProbeVarianceM2);
+        Set(ProbeError, ProbeError, energyAndGust + factor * factor * SlopeVariance + SampleVarianceM2);
+        Set(TubeProbe, TubeProbe, SampleVarianceM2);
+        Set(ProbeError, TubeProbe, SampleVarianceM2);
     }
 
     /// <summary>The probe is gone. What it said of the other states stays.</summary>
@@ -112,19 +124,19 @@ public sealed class EnergyStateFilter
     /// <param name="noise">The noise.</param>
     public void Predict(in EnergyStep step, in EnergyNoise noise)
     {
-        var hasProbe = _count == States;
-        Move(_state, 0, 1, hasProbe, step);
+        ProbeFactor? probe = _count == States ? FactorOf(step.HasAirspeed) : null;
+        Move(_state, 0, 1, probe, step);
         for (var column = 0; column < _count; column++)
         {
-            Move(_covariance, column, States, hasProbe, step);
+            Move(_covariance, column, States, probe, step);
         }
 
         for (var row = 0; row < _count; row++)
         {
-            Move(_covariance, row * States, 1, hasProbe, step);
+            Move(_covariance, row * States, 1, probe, step);
         }
 
-        new EnergyNoiseStep(step, noise).AddTo(_covariance, hasProbe);
+        new EnergyNoiseStep(step, noise).AddTo(_covariance, probe is not null);
     }
 
     /// <summary>Goes on to a sample and takes it from the end of its tube.</summary>
@@ -171,6 +183,10 @@ public sealed class EnergyStateFilter
 
         return new Innovation(surprise, total);
     }
+
+    private ProbeFactor FactorOf(bool hasAirspeed) => hasAirspeed
+        ? new ProbeFactor(_state[Kinetic] + _state[Gust] - TotalEnergyProbe.UsualKineticM, _state[KineticRate])
+        : default;
 
     private double P(int i, int j) => _covariance[i * States + j];
 

@@ -16,9 +16,11 @@ public readonly struct EnergyStep
     /// <param name="dt">The step, s, not negative.</param>
     /// <param name="lags">The tubes' lags.</param>
     /// <param name="hasProbe">Whether the probe's tube is wanted too.</param>
-    public EnergyStep(double dt, in TubeLags lags, bool hasProbe = false)
+    /// <param name="hasAirspeed">Whether the kinetic height is known from its own sensor.</param>
+    public EnergyStep(double dt, in TubeLags lags, bool hasProbe = false, bool hasAirspeed = true)
     {
         Dt = dt;
+        HasAirspeed = hasAirspeed;
         Passing = Markov(dt, PassingTimeS);
         Gust = Markov(dt, GustTimeS);
         HeightTube = new EnergyTube(dt, lags.HeightS);
@@ -35,6 +37,9 @@ public readonly struct EnergyStep
 
     /// <summary>The step, s.</summary>
     public double Dt { get; }
+
+    /// <summary>Whether the kinetic height is known from its own sensor.</summary>
+    public bool HasAirspeed { get; }
 
     /// <summary>The passing climb.</summary>
     public EnergyDecay Passing { get; }

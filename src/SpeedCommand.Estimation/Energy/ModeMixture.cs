@@ -62,11 +62,11 @@ internal sealed class ModeMixture
         }
     }
 
-    public void AddProbe(double probeM, in EnergyNoise noise)
+    public void AddProbe(double probeM, bool hasAirspeed)
     {
         for (var i = 1; i < Modes; i++)
         {
-            _filters[i].AddProbe(probeM, noise);
+            _filters[i].AddProbe(probeM, hasAirspeed);
         }
     }
 
@@ -121,7 +121,7 @@ internal sealed class ModeMixture
         for (var i = 0; i < Modes; i++)
         {
             var apart = _filters[i].ClimbMps - climb;
-            variance += _weights[i] * (_filters[i].ClimbVariance + apart * apart + NoiseOf((FlightMode)i, noise).ClimbDensity * aheadS);
+            variance += _weights[i] * (_filters[i].ClimbVariance + apart * apart + DensityOf(NoiseOf((FlightMode)i, noise)) * aheadS);
         }
 
         return new EnergyEstimate(EnergyM + climb * aheadS, climb, Math.Sqrt(variance * OwnDoubt), kinetic);
@@ -149,6 +149,8 @@ internal sealed class ModeMixture
             _weights[i] /= sum;
         }
     }
+
+    private static double DensityOf(in EnergyNoise noise) => noise.ClimbDensity + noise.StayingDensity;
 
     private static EnergyNoise NoiseOf(FlightMode mode, in EnergyNoise noise) => mode switch
     {

@@ -3,10 +3,10 @@ namespace SpeedCommand.Estimation.Energy;
 /// <summary>The noise parameters, each learnt with the help of a filter that has a little more of it.</summary>
 internal sealed class NoiseLearner
 {
-    private const int Parameters = 6;
+    private const int Parameters = 7;
 
     /// <summary>The probe's variance is learnt only while there is a probe, so that without one its filter costs nothing.</summary>
-    private const int ProbeVariance = 5;
+    private const int ProbeVariance = 6;
 
     private readonly EnergyStateFilter[] _filters = new EnergyStateFilter[Parameters];
     private readonly LearntNoise[] _learnt;
@@ -17,7 +17,7 @@ internal sealed class NoiseLearner
     {
         _learnt =
         [
-            new(0.05, 2.5, 0.01), new(1, 3, 0.1), new(0.03, 2.5, 0.0025), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6),
+            new(0.05, 2.5, 0.01), new(0.008, 2.5, 0.001), new(1, 3, 0.1), new(0.03, 2.5, 0.0025), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6),
         ];
         Usual = new EnergyStateFilter();
         for (var i = 0; i < Parameters; i++)
@@ -44,14 +44,14 @@ internal sealed class NoiseLearner
         }
     }
 
-    public void AddProbe(double probeM)
+    public void AddProbe(double probeM, bool hasAirspeed)
     {
         _filters[ProbeVariance].CopyFrom(Usual);
         _running = Parameters;
-        Usual.AddProbe(probeM, Noise);
+        Usual.AddProbe(probeM, hasAirspeed);
         for (var i = 0; i < _running; i++)
         {
-            _filters[i].AddProbe(probeM, _perturbed[i]);
+            _filters[i].AddProbe(probeM, hasAirspeed);
         }
     }
 
@@ -106,7 +106,7 @@ internal sealed class NoiseLearner
     }
 
     private EnergyNoise With(int perturbed) => new(
-        Of(0, perturbed), Of(1, perturbed), Of(2, perturbed), Of(3, perturbed), Of(4, perturbed), Of(ProbeVariance, perturbed));
+        Of(0, perturbed), Of(1, perturbed), Of(2, perturbed), Of(3, perturbed), Of(4, perturbed), Of(5, perturbed), Of(ProbeVariance, perturbed));
 
     private double Of(int parameter, int perturbed) => parameter == perturbed ? _learnt[parameter].Perturbed : _learnt[parameter].Value;
 }

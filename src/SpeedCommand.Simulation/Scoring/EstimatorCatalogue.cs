@@ -10,6 +10,9 @@ public static class EstimatorCatalogue
     [
         new("adaptive", lags => new AdaptiveEnergyEstimator(lags)),
         new("adaptive-no-lag", _ => new AdaptiveEnergyEstimator()),
+        new("adaptive-no-probe", lags => new SomeChannels(new AdaptiveEnergyEstimator(lags), channel => channel != EnergyChannel.Probe)),
+        new("adaptive-probe-only", lags => new SomeChannels(new AdaptiveEnergyEstimator(lags), channel => channel == EnergyChannel.Probe)),
+        new("adaptive-probe-static", lags => new SomeChannels(new AdaptiveEnergyEstimator(lags), channel => channel != EnergyChannel.Kinetic)),
         new("plain", _ => new EnergyHeightFilter()),
         new("canary", _ => new HeightOnlyCanary()),
     ];
