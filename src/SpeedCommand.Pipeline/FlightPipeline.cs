@@ -13,10 +13,12 @@ namespace SpeedCommand.Pipeline;
 /// </summary>
 public sealed class FlightPipeline
 {
-    private readonly IPictureSink _sink;
+    private readonly IPictureSink _picturesTo;
     private readonly AirDataStage _airData;
     private readonly LoadStage _load = new();
     private readonly HydrostaticHeight _height = new();
+    private readonly TotalEnergyProbe _probe = new();
+    private readonly SinkStage _sink;
     private readonly IEnergyEstimator _energy;
     private readonly EventFaults _events = new();
     private readonly HealthStage _health;
@@ -32,10 +34,11 @@ public sealed class FlightPipeline
     public FlightPipeline(FlightSettings settings, IPictureSink sink, IEnergyEstimator? energy = null)
     {
         ArgumentNullException.ThrowIfNull(settings);
-        _energy = energy ?? new AdaptiveEnergyEstimator(settings.StaticLagS, settings.ImpactLagS);
-        _sink = sink;
+        _energy = energy ?? new AdaptiveEnergyEstimator(new TubeLags(settings.StaticLagS, settings.ImpactLagS, settings.ProbeLagS));
+        _picturesTo = sink;
         _airData = new AirDataStage(settings);
         _health = new HealthStage(_airData, _events);
+        _sink = new SinkStage(settings, _load, _energy);
         _pictures = new PictureStage(settings, _airData, _load, _energy, _events);
     }
 
@@ -108,7 +111,7 @@ public sealed class FlightPipeline
         {
             var picture = _pictures.MakeAt(_nextPictureUs);
             FaultHistory.Take(picture.TimeUs, picture.Faults);
-            _sink.OnPicture(picture);
+            _picturesTo.OnPicture(picture);
             _nextPictureUs += PipelineBounds.PicturePeriodUs;
         }
     }
@@ -126,10 +129,13 @@ public sealed class FlightPipeline
                 _energy.AddHeight(TimeUs, _height.MoveTo(_airData.Air));
                 break;
             case ReadingKind.ImpactPressurePa:
-                _energy.AddKineticHeight(TimeUs, _airData.SetImpact(TimeUs, reading.Value));
+                TakeKinetic(_airData.SetImpact(TimeUs, reading.Value));
                 break;
             case ReadingKind.IndicatedAirspeedMps:
-                _energy.AddKineticHeight(TimeUs, _airData.SetIndicated(TimeUs, reading.Value));
+                TakeKinetic(_airData.SetIndicated(TimeUs, reading.Value));
+                break;
+            case ReadingKind.TotalEnergyProbePa when _airData.TrySetProbe(TimeUs, reading.Value, out var air):
+                _energy.AddProbeHeight(TimeUs, _probe.HeightAt(reading.Value, air, _energy.EstimateAt(TimeUs).KineticHeightM));
                 break;
             case ReadingKind.OutsideAirTemperatureK:
                 _airData.SetTemperature(TimeUs, reading.Value);
@@ -140,10 +146,26 @@ public sealed class FlightPipeline
                 break;
             case ReadingKind.LoadFactor:
                 _load.SetLoadFactor(TimeUs, reading.Value);
+                FollowSink();
                 break;
             case ReadingKind.BankRad:
                 _load.SetBank(TimeUs, reading.Value);
+                FollowSink();
                 break;
+        }
+    }
+
+    private void TakeKinetic(double kineticM)
+    {
+        _energy.AddKineticHeight(TimeUs, kineticM);
+        FollowSink();
+    }
+
+    private void FollowSink()
+    {
+        if (_airData.IsStaticFresh(TimeUs))
+        {
+            _sink.Follow(TimeUs, _airData.Air);
         }
     }
 }

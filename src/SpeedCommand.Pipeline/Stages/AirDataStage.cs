@@ -10,6 +10,7 @@ internal sealed class AirDataStage(FlightSettings settings)
 {
     private TimedValue _staticPa;
     private TimedValue _impactPa;
+    private TimedValue _probePa;
     private TimedValue _sensedTemperatureK;
     private TimedValue _humidity;
     private double _staticErrorPa;
@@ -22,6 +23,10 @@ internal sealed class AirDataStage(FlightSettings settings)
     public double StaticAgeS(long nowUs) => _staticPa.AgeS(nowUs);
 
     public double AirspeedAgeS(long nowUs) => _impactPa.AgeS(nowUs);
+
+    public double ProbeAgeS(long nowUs) => _probePa.AgeS(nowUs);
+
+    public bool IsProbeFresh(long nowUs) => _probePa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
 
     public bool IsStaticFresh(long nowUs) => _staticPa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
 
@@ -101,6 +106,36 @@ internal sealed class AirDataStage(FlightSettings settings)
         if (!IsAirspeedFresh(nowUs) || !IsStaticFresh(nowUs)
             || !AirspeedConversion.TryCalibrated(_impactPa.Value, out var sensed)
             || !AirspeedConversion.TryTrue(_impactPa.Value + _staticErrorPa, Air, out trueAirspeed, out _))
+        {
+            return false;
+        }
+
+        indicated = new IndicatedAirspeed(sensed.Mps);
+        return true;
+    }
+
+    /// <summary>
+    /// Takes the pressure of a total-energy probe. Its air is the air at the newest static pressure, or without one the air at the
+    /// probe's own pressure, which for the height over which pressure falls is as good.
+    /// </summary>
+    public bool TrySetProbe(long timeUs, double sensedPa, out Air air)
+    {
+        air = Air;
+        if (!IsStaticFresh(timeUs) && !TryAir(timeUs, sensedPa, out air))
+        {
+            return false;
+        }
+
+        _probePa.Set(timeUs, sensedPa);
+        return true;
+    }
+
+    /// <summary>What the airspeed indicator would read at a true airspeed; false outside the subsonic range.</summary>
+    public bool TryIndicated(TrueAirspeed trueAirspeed, out IndicatedAirspeed indicated)
+    {
+        indicated = default;
+        if (!AirspeedConversion.TryImpactPressure(trueAirspeed, Air, out var impactPa)
+            || !AirspeedConversion.TryCalibrated(impactPa - _staticErrorPa, out var sensed))
         {
             return false;
         }
