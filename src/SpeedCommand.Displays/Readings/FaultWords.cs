@@ -32,6 +32,8 @@ public static class FaultWords
         "unreadable data",
         "off the polar",
         "no speed limits",
+        "board unplugged",
+        "port refused",
         "not recording",
     ];
 

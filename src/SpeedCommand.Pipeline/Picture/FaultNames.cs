@@ -29,6 +29,8 @@ public static class FaultNames
         new(Faults.BadLines, "bad-lines"),
         new(Faults.OutsidePolar, "outside-polar"),
         new(Faults.NoLimits, "no-limits"),
+        new(Faults.PortMissing, "port-missing"),
+        new(Faults.PortRefused, "port-refused"),
         new(Faults.RecorderStopped, "recorder-stopped"),
     ];
 }

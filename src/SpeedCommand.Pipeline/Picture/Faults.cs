@@ -76,6 +76,12 @@ public enum Faults
     /// <summary>The glider file has no limits, or none for this altitude: the speed to fly is not shown.</summary>
     NoLimits = 1 << 22,
 
+    /// <summary>A port's device is missing or was unplugged; set by the service, never by the pipeline.</summary>
+    PortMissing = 1 << 23,
+
+    /// <summary>A port's device is there but cannot be used; set by the service, never by the pipeline.</summary>
+    PortRefused = 1 << 24,
+
     /// <summary>The flight is no longer being recorded; set by the service, never by the pipeline.</summary>
-    RecorderStopped = 1 << 23,
+    RecorderStopped = 1 << 25,
 }
