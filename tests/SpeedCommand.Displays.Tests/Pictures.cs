@@ -20,7 +20,9 @@ internal static class Pictures
         TrueAirspeedMps = new Gauge(116 / 3.6, 0.2, 0.05),
         ClimbMps = new Gauge(-1.8, 0.15, 0.05),
         AverageClimbMps = new Gauge(-1.1, 0.05, 0.05),
+        ThermalAverageMps = Gauge.Blank,
         NettoMps = new Gauge(-0.64, 0.21, 0.05),
+        RelativeNettoMps = new Gauge(-1.68, 0.22, 0.05),
         MinSinkIndicatedMps = new Gauge(82 / 3.6, 0.1, 0.05),
         BestGlideIndicatedMps = new Gauge(95 / 3.6, 0.1, 0.05),
         SpeedToFlyIndicatedMps = new Gauge(120 / 3.6, 0.25, 0.05),
@@ -37,7 +39,9 @@ internal static class Pictures
         IndicatedAirspeedMps = new Gauge(96 / 3.6, 0.2, 0.05),
         ClimbMps = new Gauge(2.4, 0.2, 0.05),
         AverageClimbMps = new Gauge(1.9, 0.1, 0.05),
+        ThermalAverageMps = new Gauge(1.62, 0.05, 0.05),
         NettoMps = new Gauge(3.2, 0.3, 0.05),
+        RelativeNettoMps = new Gauge(2.2, 0.3, 0.05),
         MinSinkIndicatedMps = new Gauge(88 / 3.6, 0.1, 0.05),
         SpeedToFlyIndicatedMps = new Gauge(74 / 3.6, 0.5, 0.05),
         HoldIndicatedMps = new Gauge(88 / 3.6, 0.1, 0.05),
@@ -61,6 +65,7 @@ internal static class Pictures
         HoldIndicatedMps = new Gauge(123 / 3.6, 8 / 3.6, 0.05),
         ClimbMps = new Gauge(-1.83, 0.6, 0.05),
         NettoMps = new Gauge(-0.64, 0.7, 0.05),
+        RelativeNettoMps = new Gauge(-1.68, 0.7, 0.05),
     };
 
     /// <summary>No airspeed: everything that rests on it is blank.</summary>
@@ -71,6 +76,7 @@ internal static class Pictures
         ClimbMps = Gauge.Blank,
         AverageClimbMps = Gauge.Blank,
         NettoMps = Gauge.Blank,
+        RelativeNettoMps = Gauge.Blank,
         MinSinkIndicatedMps = Gauge.Blank,
         BestGlideIndicatedMps = Gauge.Blank,
         SpeedToFlyIndicatedMps = Gauge.Blank,

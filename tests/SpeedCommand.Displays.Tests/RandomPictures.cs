@@ -12,11 +12,11 @@ internal static class RandomPictures
 
     public static Gen<CockpitPicture> Any { get; } =
         from speeds in Between(0, 400).Array[6]
-        from verticals in Between(-200, 200).Array[3]
+        from verticals in Between(-200, 200).Array[5]
         from heights in Between(-2000, 32_000).Array[2]
         from temperature in Between(150, 350)
         from hand in Between(-1e6, 1e6).Array[2]
-        from flags in Gen.Int[0, (1 << 9) - 1]
+        from flags in Gen.Int[0, (1 << 24) - 1]
         from limit in Gen.Int[0, 4]
         from time in Gen.Long[0, 400_000_000_000]
         select new CockpitPicture
@@ -32,6 +32,8 @@ internal static class RandomPictures
             ClimbMps = verticals[0],
             AverageClimbMps = verticals[1],
             NettoMps = verticals[2],
+            ThermalAverageMps = verticals[3],
+            RelativeNettoMps = verticals[4],
             MinSinkIndicatedMps = speeds[2],
             BestGlideIndicatedMps = speeds[3],
             SpeedToFlyIndicatedMps = speeds[4],

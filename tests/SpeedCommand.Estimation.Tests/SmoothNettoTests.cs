@@ -43,20 +43,4 @@ public class SmoothNettoTests
         Assert.Equal(1, smooth.Add(200_000, double.NaN));
         Assert.Equal(-2, smooth.Add(5_000_000, -2));
     }
-
-    [Fact]
-    public void ThermalAverage_HalfTheTimeInLift_IsEnergyOverTime()
-    {
-        var average = new ThermalAverage();
-        Assert.True(double.IsNaN(average.Add(0, false, 1000)));
-        var value = double.NaN;
-        for (var i = 0; i <= 600; i++)
-        {
-            value = average.Add(i * 100_000, true, 1000 + 0.3 * Math.Min(i, 300));
-        }
-
-        Assert.Equal(1.5, value, 1e-9);
-        Assert.True(double.IsNaN(average.Add(61_000_000, false, 1090)));
-        Assert.True(double.IsNaN(average.Add(62_000_000, true, 1090)));
-    }
 }

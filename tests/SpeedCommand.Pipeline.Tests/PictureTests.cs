@@ -108,6 +108,40 @@ public sealed class PictureTests
         Assert.Equal(FlightPhase.Gliding, cockpit.Last.Phase);
     }
 
+    [Fact]
+    public void RelativeNetto_IsTheClimbOfCirclingHere_InTheCircleToo()
+    {
+        // What relative netto promised on the straight must come true in the circle: level flight in air that rises as fast as
+        // the glider sinks, then the same air circled in at 40 degrees of bank and the minimum-sink speed of that bank.
+        const double Air = 3, H = 1000;
+        var straight = new Cockpit();
+        straight.Fly(20, t => StandardPa(H + (Air - StraightSink(30)) * (t - 10)), t => ImpactPa(30, H + (Air - StraightSink(30)) * (t - 10)));
+        var promised = straight.Pictures[99];
+        Assert.Equal(Air, promised.NettoMps.Value, 0.02);
+        Assert.False(promised.ThermalAverageMps.IsKnown);
+
+        // Sink in a turn: CL n-fold (lift = n x weight), so w goes with n^1.5 at the speed times sqrt(n); least over speeds.
+        var n = 1 / Math.Cos(40 * Math.PI / 180);
+        var circlingSink = Enumerable.Range(400, 400).Min(v => Math.Pow(n, 1.5) * StraightSink(v * 0.05));
+        Assert.Equal(Air - circlingSink, promised.RelativeNettoMps.Value, 0.02);
+        Assert.True(promised.RelativeNettoMps.Sigma > promised.NettoMps.Sigma);
+
+        var climb = Air - circlingSink;
+        var speed = 20 + 0.05 * Enumerable.Range(0, 400).MinBy(i => StraightSink(20 + i * 0.05));
+        var circling = new Cockpit();
+        circling.Fly(40, t => StandardPa(H + climb * (t - 20)), t => ImpactPa(speed * Math.Sqrt(n), H + climb * (t - 20)), "A,40.0,D,BANK");
+        Assert.Equal(FlightPhase.Climbing, circling.Last.Phase);
+        Assert.Equal(climb, circling.Pictures[199].RelativeNettoMps.Value, 0.03);
+        Assert.Equal(climb, circling.Last.ThermalAverageMps.Value, 0.02);
+        Assert.Equal(climb, circling.Last.AverageClimbMps.Value, 0.02);
+
+        static double StraightSink(double v)
+        {
+            var cl = 2 * 340 * G / (StandardDensity(H) * 11.2 * v * v);
+            return v * (0.0115 - 0.002 * cl + 0.0215 * cl * cl) / cl;
+        }
+    }
+
     [Theory]
     [InlineData("G,1.50,,LOAD")]
     [InlineData("A,40.0,D,BANK")]

@@ -13,7 +13,7 @@ public sealed class PictureLinesTests
     private static readonly string[] Keys =
     [
         "t", "phase", "pressureAltitudeM", "densityAltitudeM", "temperatureC", "indicatedAirspeedMps", "trueAirspeedMps", "climbMps",
-        "climbSigmaMps", "averageClimbMps", "nettoMps", "nettoSigmaMps", "minSinkIndicatedMps", "bestGlideIndicatedMps",
+        "climbSigmaMps", "averageClimbMps", "thermalAverageMps", "nettoMps", "nettoSigmaMps", "relativeNettoMps", "minSinkIndicatedMps", "bestGlideIndicatedMps",
         "speedToFlyIndicatedMps", "holdIndicatedMps", "limitedBy", "enduranceS", "rangeM", "faults",
     ];
 

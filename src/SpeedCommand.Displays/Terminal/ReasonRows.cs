@@ -5,7 +5,7 @@ using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Displays.Terminal;
 
-/// <summary>The small numbers behind the speed to hold, each always in its place so that the eye finds it.</summary>
+/// <summary>The small numbers behind the speed to hold, each in a phase always in its place so that the eye finds it.</summary>
 internal static class ReasonRows
 {
     private const int LeftLabelWidth = 15;
@@ -18,7 +18,10 @@ internal static class ReasonRows
         DrawRight(grid, layout, picture, units);
     }
 
-    /// <summary>Speeds, and what the air does: where the speed to hold comes from.</summary>
+    /// <summary>
+    /// Speeds, and what the air does: where the speed to hold comes from. Climbing, a pilot asks whether this thermal is still
+    /// worth it; gliding, whether this air is.
+    /// </summary>
     private static void DrawLeft(TextGrid grid, PanelLayout layout, in CockpitPicture picture, DisplayUnits units)
     {
         var row = layout.ReasonTop;
@@ -36,8 +39,16 @@ internal static class ReasonRows
 
         var vertical = units.Vertical;
         column.Row(row++, "  climb", Readout.Of(picture.ClimbMps, vertical, Trust.Vertical), vertical, true);
-        column.Row(row++, "  30 s average", Readout.Of(picture.AverageClimbMps, vertical, Trust.Vertical), vertical, true, isClimbing);
-        column.Row(row, "  air (netto)", Readout.Of(picture.NettoMps, vertical, Trust.Vertical), vertical, true);
+        if (isClimbing)
+        {
+            column.Row(row++, "  30 s average", Readout.Of(picture.AverageClimbMps, vertical, Trust.Vertical), vertical, true, true);
+            column.Row(row, "  this thermal", Readout.Of(picture.ThermalAverageMps, vertical, Trust.Vertical), vertical, true);
+        }
+        else
+        {
+            column.Row(row++, "  air (netto)", Readout.Of(picture.NettoMps, vertical, Trust.Vertical), vertical, true);
+            column.Row(row, "  if circling", Readout.Of(picture.RelativeNettoMps, vertical, Trust.Vertical), vertical, true);
+        }
     }
 
     /// <summary>Heights, the air's state, and what the height is worth.</summary>

@@ -24,7 +24,17 @@ internal static class StatusLine
 
         Add("; climb", Readout.Of(picture.ClimbMps, units.Vertical, Trust.Vertical), units.Vertical, true);
         Add(", average", Readout.Of(picture.AverageClimbMps, units.Vertical, Trust.Vertical), units.Vertical, true);
+        if (picture.Phase == FlightPhase.Climbing)
+        {
+            Add(", this thermal", Readout.Of(picture.ThermalAverageMps, units.Vertical, Trust.Vertical), units.Vertical, true);
+        }
+
         Add(", netto", Readout.Of(picture.NettoMps, units.Vertical, Trust.Vertical), units.Vertical, true);
+        if (picture.Phase == FlightPhase.Gliding)
+        {
+            Add(", if circling", Readout.Of(picture.RelativeNettoMps, units.Vertical, Trust.Vertical), units.Vertical, true);
+        }
+
         Add("; density altitude", Readout.Of(picture.DensityAltitudeM, units.Height, Trust.Height), units.Height, false);
         var temperature = Readout.Of(picture.TemperatureK, units.Temperature, Trust.Temperature);
         Add(", temperature", temperature, units.Temperature, false);

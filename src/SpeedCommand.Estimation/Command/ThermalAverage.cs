@@ -1,34 +1,42 @@
 namespace SpeedCommand.Estimation.Command;
 
 /// <summary>Climb averaged since circling began: energy gained over time gone by. Starts anew with every thermal.</summary>
-public sealed class ThermalAverage
+/// <param name="stepS">Time between two calls of <see cref="Add"/>, s.</param>
+public sealed class ThermalAverage(double stepS)
 {
     /// <summary>An average over less than this says nothing, s: half a circle.</summary>
     public const double LeastS = 10;
 
-    private long _startUs;
     private double _startM = double.NaN;
+    private long _steps;
+    private bool _wasCircling;
 
-    /// <summary>Takes one moment.</summary>
-    /// <param name="timeUs">The moment, microseconds.</param>
+    /// <summary>Takes one step.</summary>
     /// <param name="isCircling">Whether the glider circles.</param>
-    /// <param name="energyHeightM">Energy height, m; NaN when not known, which leaves a hole but does not start anew.</param>
+    /// <param name="energy">The energy heights up to this step; a hole in them blanks the average but does not start it anew.</param>
+    /// <param name="noticedAfterS">How long before it was noticed the circling began, s; counts only where it begins.</param>
     /// <returns>The average, m/s, positive up; NaN while there is none.</returns>
-    public double Add(long timeUs, bool isCircling, double energyHeightM)
+    public double Add(bool isCircling, EnergyHistory energy, double noticedAfterS)
     {
-        if (!isCircling)
+        ArgumentNullException.ThrowIfNull(energy);
+        if (isCircling && !_wasCircling)
         {
-            _startM = double.NaN;
-            return double.NaN;
+            _startM = energy.HeightAgoM(noticedAfterS);
+            _steps = (long)Math.Round(noticedAfterS / stepS);
+        }
+        else
+        {
+            _steps++;
         }
 
-        if (double.IsNaN(_startM))
+        _wasCircling = isCircling;
+        if (isCircling && double.IsNaN(_startM))
         {
-            (_startUs, _startM) = (timeUs, energyHeightM);
-            return double.NaN;
+            _startM = energy.HeightAgoM(0);
+            _steps = 0;
         }
 
-        var elapsedS = (timeUs - _startUs) * 1e-6;
-        return elapsedS >= LeastS ? (energyHeightM - _startM) / elapsedS : double.NaN;
+        var elapsedS = _steps * stepS;
+        return isCircling && elapsedS >= LeastS ? (energy.HeightAgoM(0) - _startM) / elapsedS : double.NaN;
     }
 }

@@ -21,9 +21,12 @@ public readonly record struct CockpitPicture
         TemperatureK = Gauge.Blank,
         IndicatedAirspeedMps = Gauge.Blank,
         TrueAirspeedMps = Gauge.Blank,
+        SmoothIndicatedAirspeedMps = Gauge.Blank,
         ClimbMps = Gauge.Blank,
         AverageClimbMps = Gauge.Blank,
+        ThermalAverageMps = Gauge.Blank,
         NettoMps = Gauge.Blank,
+        RelativeNettoMps = Gauge.Blank,
         MinSinkIndicatedMps = Gauge.Blank,
         BestGlideIndicatedMps = Gauge.Blank,
         SpeedToFlyIndicatedMps = Gauge.Blank,
@@ -60,14 +63,23 @@ public readonly record struct CockpitPicture
     /// <summary>True airspeed, m/s.</summary>
     public Gauge TrueAirspeedMps { get; init; }
 
+    /// <summary>Indicated airspeed with gusts taken out, m/s: what a speed to fly is to be compared with.</summary>
+    public Gauge SmoothIndicatedAirspeedMps { get; init; }
+
     /// <summary>Total-energy climb, m/s.</summary>
     public Gauge ClimbMps { get; init; }
 
     /// <summary>Total-energy climb averaged over the last 30 s, m/s.</summary>
     public Gauge AverageClimbMps { get; init; }
 
+    /// <summary>Total-energy climb averaged since circling began, m/s; blank when gliding.</summary>
+    public Gauge ThermalAverageMps { get; init; }
+
     /// <summary>Vertical motion of the air, m/s.</summary>
     public Gauge NettoMps { get; init; }
+
+    /// <summary>What the climb would be in this air, circling at minimum sink with the bank usual in thermals, m/s.</summary>
+    public Gauge RelativeNettoMps { get; init; }
 
     /// <summary>Indicated airspeed of least sink at the present weight and load, m/s.</summary>
     public Gauge MinSinkIndicatedMps { get; init; }

@@ -18,7 +18,7 @@ internal readonly record struct PhaseEvidence(bool IsLoadMeasured, double Steady
 internal sealed class PhaseStage(FlightPhase? forced)
 {
     /// <summary>A pull-up or a bend in the track is over sooner than this.</summary>
-    private const long LastingUs = 6_000_000;
+    public const long LastingUs = 6_000_000;
 
     /// <summary>Load factor of a 20-degree bank; thermalling turns are steeper (common practice).</summary>
     private const double TurningLoad = 1.064;

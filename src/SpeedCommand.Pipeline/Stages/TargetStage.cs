@@ -16,7 +16,12 @@ namespace SpeedCommand.Pipeline.Stages;
 internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge Netto, bool IsOutsidePolar, long TimeUs, double AgeS);
 
 /// <summary>The speeds to fly and how they came about.</summary>
-internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy);
+/// <param name="MinSink">Speed of least sink.</param>
+/// <param name="BestGlide">Speed of best glide in still air.</param>
+/// <param name="SpeedToFly">MacCready speed.</param>
+/// <param name="LimitedBy">What limited it.</param>
+/// <param name="CirclingSinkMps">Least sink in a circle of the usual bank, m/s; NaN when not known.</param>
+internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy, double CirclingSinkMps);
 
 /// <summary>Air, load and netto in, speeds to fly out.</summary>
 internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
@@ -48,11 +53,13 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
             speedToFly = speedToFly with { Speed = minSink };
         }
 
+        var circle = targets.MinSink(inputs.Air, LoadingAt(LoadStage.ThermallingLoad));
         return new Targets(
             Show(minSink, 0, inputs.AgeS),
             Show(bestGlide.Speed, 0, inputs.AgeS),
             Show(speedToFly.Speed, sigma, inputs.AgeS),
-            speedToFly.LimitedBy);
+            speedToFly.LimitedBy,
+            circle.IsKnown ? circle.SinkMps : double.NaN);
     }
 
     private static Gauge Show(in TargetSpeed speed, double sigma, double ageS) =>

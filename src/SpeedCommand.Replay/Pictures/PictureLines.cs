@@ -46,8 +46,10 @@ public sealed class PictureLines(Stream stream) : IPictureSink
         line.Number("climbMps"u8, picture.ClimbMps.Value, 3);
         line.Number("climbSigmaMps"u8, picture.ClimbMps.Sigma, 3);
         line.Number("averageClimbMps"u8, picture.AverageClimbMps.Value, 3);
+        line.Number("thermalAverageMps"u8, picture.ThermalAverageMps.Value, 3);
         line.Number("nettoMps"u8, picture.NettoMps.Value, 3);
         line.Number("nettoSigmaMps"u8, picture.NettoMps.Sigma, 3);
+        line.Number("relativeNettoMps"u8, picture.RelativeNettoMps.Value, 3);
     }
 
     private static void WriteTargets(ref JsonLineBuilder line, in CockpitPicture picture)

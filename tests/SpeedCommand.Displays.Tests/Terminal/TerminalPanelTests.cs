@@ -41,7 +41,7 @@ public class TerminalPanelTests
         var digits = string.Concat(lines[1..23]).Replace("30 s average", "").Where(char.IsAsciiDigit);
         Assert.Empty(digits);
         Assert.Single(lines, line => line.Contains('█'));
-        Assert.Contains("+6 more", lines[23]);
+        Assert.Matches("[+][0-9]+ more$", lines[23].TrimEnd());
     }
 
     // The same picture with each gauge blanked in turn: its number must be gone from the page.
@@ -52,8 +52,8 @@ public class TerminalPanelTests
         CockpitPicture[] blanked =
         [
             full with { ClimbMps = Gauge.Blank },
-            full with { AverageClimbMps = Gauge.Blank },
             full with { NettoMps = Gauge.Blank },
+            full with { RelativeNettoMps = Gauge.Blank },
             full with { MinSinkIndicatedMps = Gauge.Blank },
             full with { BestGlideIndicatedMps = Gauge.Blank },
             full with { SpeedToFlyIndicatedMps = Gauge.Blank },
@@ -66,6 +66,10 @@ public class TerminalPanelTests
 
         Assert.Equal(0, Blanks(full));
         Assert.All(blanked, picture => Assert.Equal(1, Blanks(picture)));
+        var climbing = Pictures.ClimbingTooFast;
+        Assert.Equal(0, Blanks(climbing));
+        Assert.Equal(1, Blanks(climbing with { AverageClimbMps = Gauge.Blank }));
+        Assert.Equal(1, Blanks(climbing with { ThermalAverageMps = Gauge.Blank }));
 
         static int Blanks(CockpitPicture picture) => string.Join('\n', Lines(picture, 80, 24)).Split(" -- ").Length - 1;
     }
@@ -167,7 +171,7 @@ public class TerminalPanelTests
         // Bold cyan is the bar's colour for "speed up".
         Assert.Contains("0;1;36", sure.Renditions);
         Assert.DoesNotContain("0;1;36", doubtful.Renditions);
-        Assert.Equal(3, string.Concat(doubtful.Page()).Count(c => c == '~'));
+        Assert.Equal(4, string.Concat(doubtful.Page()).Count(c => c == '~'));
         Assert.Contains("roughly, ±8", string.Concat(doubtful.Page()));
         Assert.DoesNotContain('~', string.Concat(sure.Page()));
     }
