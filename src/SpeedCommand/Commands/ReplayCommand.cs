@@ -119,9 +119,9 @@ internal static class ReplayCommand
             sinks.Add(panel);
         }
 
-        var rules = settings.Ports.ToDictionary(port => port.Name, port => port.Checksum, StringComparer.Ordinal);
+        var streams = settings.Ports.ToDictionary(port => port.Name, port => port.Stream, StringComparer.Ordinal);
         var replay = new FlightReplay(log, new FlightPipeline(settings.Flight, new PictureFan([.. sinks])),
-            name => rules.GetValueOrDefault(name, ChecksumRule.Required));
+            name => streams.GetValueOrDefault(name) ?? StreamSettings.Sentences(ChecksumRule.Required));
         var pacer = new Pacer(TimeProvider.System, pace, cancel);
         while (!cancel.IsCancellationRequested && replay.Step(pacer.IsPaced ? pacer.WaitUntil : null))
         {

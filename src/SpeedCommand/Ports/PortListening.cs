@@ -9,6 +9,7 @@ namespace SpeedCommand.Ports;
 internal sealed class PortListening(PortSettings settings) : ILineSink
 {
     private readonly LineFramer _framer = new();
+    private readonly Reading[] _found = new Reading[LineFormat.MaxReadings];
     private long _bytes;
     private long _lines;
     private long _sentences;
@@ -26,16 +27,20 @@ internal sealed class PortListening(PortSettings settings) : ILineSink
     void ILineSink.OnLine(ReadOnlySpan<byte> line)
     {
         _lines++;
-        switch (SentenceReader.TryRead(line, settings.Checksum, out var sentence))
+        var content = settings.Stream.Format.Read(line, _found);
+        if (content.IsSound)
         {
-            case SentenceFault.None:
-                _sentences++;
-                foreach (var reading in new XdrReadings(sentence))
-                {
-                    Take(reading);
-                }
+            _sentences++;
+            foreach (var reading in _found.AsSpan(0, content.Count))
+            {
+                Take(reading);
+            }
 
-                break;
+            return;
+        }
+
+        switch (SentenceReader.TryRead(line, settings.Checksum, out _))
+        {
             case SentenceFault.MissingChecksum when SentenceReader.TryRead(line, ChecksumRule.Optional, out _) == SentenceFault.None:
                 _withoutChecksum++;
                 break;

@@ -20,7 +20,7 @@ internal sealed class SerialPortReader(
 
     private readonly LineFramer _framer = new();
     private readonly byte[] _buffer = new byte[4096];
-    private readonly int _stream = machine.AddStream(settings.Name, settings.Checksum);
+    private readonly int _stream = machine.AddStream(settings.Name, settings.Stream);
     private long _arrivalUs;
     private string _lastComplaint = "";
 

@@ -59,7 +59,7 @@ internal static class CockpitService
             .AddSingleton(clock)
             .AddSingleton(latest)
             .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, flight, clock, services), [latest, .. extraSinks]));
-        AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight));
+        AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight, settings.Ports));
         builder.Services.AddHostedService<PictureTicker>();
         AddDisplays(builder.Services, settings, isPanelShown);
         if (flight is not null)
@@ -71,8 +71,11 @@ internal static class CockpitService
         return builder.Build();
     }
 
-    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight) => flight.Lines.Select(line =>
-        new PortSettings(line.Key, line.Value.DevicePath, 115_200, Sentences.ChecksumRule.Required));
+    /// <summary>A stream that has a port of its name in the settings speaks what that port speaks.</summary>
+    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight, IReadOnlyList<PortSettings> ports) => flight.Lines.Select(line =>
+        (ports.FirstOrDefault(port => port.Name == line.Key) ?? new PortSettings(line.Key, "", 115_200, Sentences.ChecksumRule.Required))
+        with
+        { Device = line.Value.DevicePath });
 
     private static void AddPorts(IServiceCollection services, IEnumerable<PortSettings> ports)
     {

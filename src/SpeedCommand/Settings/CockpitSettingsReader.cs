@@ -9,7 +9,6 @@ namespace SpeedCommand.Settings;
 internal static class CockpitSettingsReader
 {
     private static readonly string[] OnOff = ["on", "off"];
-    private static readonly string[] ChecksumWords = ["required", "optional"];
     private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
     private const int Megabyte = 1 << 20;
 
@@ -40,8 +39,8 @@ internal static class CockpitSettingsReader
         {
             var path = $"ports.{name}";
             var device = source.Text($"{path}.device");
-            var baud = source.Integer($"{path}.baud", 115_200, 1_200, 4_000_000);
-            var rule = source.Word($"{path}.checksum", ChecksumWords, "required") == "required" ? ChecksumRule.Required : ChecksumRule.Optional;
+            var stream = StreamSettingsReader.Read(source, path);
+            var rule = source.Find($"{path}.checksum")?.Text == "optional" ? ChecksumRule.Optional : ChecksumRule.Required;
             if (device is null || device.Text.Length == 0)
             {
                 source.Report(new SettingText("", source.File, 0, $"{path}.device"), "expected the path of a serial device, found none");
@@ -60,7 +59,7 @@ internal static class CockpitSettingsReader
             }
             else
             {
-                ports.Add(new PortSettings(name, device.Text, baud, rule));
+                ports.Add(new PortSettings(name, device.Text, stream.Baud, rule) { Stream = stream });
             }
         }
 

@@ -1,3 +1,4 @@
+using SpeedCommand.Pipeline;
 using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Settings;
@@ -7,4 +8,8 @@ namespace SpeedCommand.Settings;
 /// <param name="Device">Path of the device, best a stable one under /dev/serial/by-id.</param>
 /// <param name="Baud">Bits a second.</param>
 /// <param name="Checksum">Whether sentences may lack a checksum.</param>
-internal sealed record PortSettings(string Name, string Device, int Baud, ChecksumRule Checksum);
+internal sealed record PortSettings(string Name, string Device, int Baud, ChecksumRule Checksum)
+{
+    /// <summary>What the pipeline must know of its lines; standard is sentences, whose transmission took no time.</summary>
+    public StreamSettings Stream { get; init; } = StreamSettings.Sentences(Checksum);
+}
