@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.Text;
 using SpeedCommand.Ports;
 using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
@@ -58,8 +59,26 @@ internal static class CheckCommand
         }
 
         var isFolderGood = settings.Recorder is null || CheckFolder(settings.Recorder.Folder);
-        var status = await ListenAsync(settings.Ports, portName, TimeSpan.FromSeconds(seconds), cancel).ConfigureAwait(false);
-        return isFolderGood ? status : ExitStatus.InputOutput;
+        var areSensorsGood = settings.IioDevices.Select(CheckSensor).ToList().TrueForAll(isGood => isGood);
+        var status = settings.Ports.Count == 0 && portName is null
+            ? ExitStatus.Done
+            : await ListenAsync(settings.Ports, portName, TimeSpan.FromSeconds(seconds), cancel).ConfigureAwait(false);
+        return isFolderGood && areSensorsGood ? status : ExitStatus.InputOutput;
+    }
+
+    private static bool CheckSensor(IioSettings settings)
+    {
+        try
+        {
+            using var device = new IioDevice(settings);
+            Console.WriteLine($"{settings.Name}: {device.Folder}: good: {Encoding.ASCII.GetString(device.Read())}");
+            return true;
+        }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            Console.WriteLine($"{settings.Name}: {fault.Message}");
+            return false;
+        }
     }
 
     private static bool CheckFolder(string folder)

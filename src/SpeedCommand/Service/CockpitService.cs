@@ -59,7 +59,7 @@ internal static class CockpitService
             .AddSingleton(clock)
             .AddSingleton(latest)
             .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, flight, clock, services), [latest, .. extraSinks]));
-        AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight, settings.Ports));
+        AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight, settings), flight is null ? settings.IioDevices : []);
         builder.Services.AddHostedService<PictureTicker>();
         AddDisplays(builder.Services, settings, isPanelShown);
         if (flight is not null)
@@ -71,21 +71,29 @@ internal static class CockpitService
         return builder.Build();
     }
 
-    /// <summary>A stream that has a port of its name in the settings speaks what that port speaks.</summary>
-    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight, IReadOnlyList<PortSettings> ports) => flight.Lines.Select(line =>
-        (ports.FirstOrDefault(port => port.Name == line.Key) ?? new PortSettings(line.Key, "", 115_200, Sentences.ChecksumRule.Required))
-        with
-        { Device = line.Value.DevicePath });
+    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight, CockpitSettings settings) => flight.Lines.Select(line =>
+        new PortSettings(line.Key, line.Value.DevicePath, 115_200, Sentences.ChecksumRule.Required) { Stream = settings.StreamOf(line.Key) });
 
-    private static void AddPorts(IServiceCollection services, IEnumerable<PortSettings> ports)
+    private static void AddPorts(IServiceCollection services, IEnumerable<PortSettings> ports, IEnumerable<IioSettings> iioDevices)
     {
         var states = new List<PortState>();
         services.AddSingleton<IReadOnlyList<PortState>>(states);
+        PortState StateOf(string name)
+        {
+            states.Add(new PortState(name));
+            return states[^1];
+        }
+
         foreach (var port in ports)
         {
-            var state = new PortState(port.Name);
-            states.Add(state);
+            var state = StateOf(port.Name);
             services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<SerialPortReader>(provider, port, state));
+        }
+
+        foreach (var device in iioDevices)
+        {
+            var state = StateOf(device.Name);
+            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<IioReader>(provider, device, state));
         }
     }
 

@@ -16,7 +16,9 @@ internal static class CockpitSettingsReader
     public static CockpitSettings? Read(SettingsSource source, string? gliderOption, string? gliderFallback, bool needsPorts)
     {
         var flight = FlightSettingsReader.Read(source, gliderOption, gliderFallback);
-        var ports = ReadPorts(source, needsPorts);
+        var ports = ReadPorts(source);
+        var iioDevices = IioSettingsReader.Read(source, ports);
+        RequirePorts(source, needsPorts && ports.Count + iioDevices.Count == 0);
         var units = ReadUnits(source);
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
         var serialText = ReadSerialText(source, ports);
@@ -29,10 +31,10 @@ internal static class CockpitSettingsReader
         }
 
         var gliderName = Path.GetFileName(gliderOption ?? source.Find("glider")?.Text ?? gliderFallback ?? "");
-        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile);
+        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile) { IioDevices = iioDevices };
     }
 
-    private static List<PortSettings> ReadPorts(SettingsSource source, bool isNeeded)
+    private static List<PortSettings> ReadPorts(SettingsSource source)
     {
         var ports = new List<PortSettings>();
         foreach (var name in source.NamedElements("ports"))
@@ -45,7 +47,7 @@ internal static class CockpitSettingsReader
             {
                 source.Report(new SettingText("", source.File, 0, $"{path}.device"), "expected the path of a serial device, found none");
             }
-            else if (!IsStreamName(name))
+            else if (!PortSettings.IsStreamName(name))
             {
                 source.Report(source.Find($"{path}.name")!, $"expected a port name of 1 to 32 letters, digits, '-' or '_', found '{name}'");
             }
@@ -63,17 +65,17 @@ internal static class CockpitSettingsReader
             }
         }
 
-        if (isNeeded && ports.Count == 0 && !source.HasErrors)
+        return ports;
+    }
+
+    private static void RequirePorts(SettingsSource source, bool isMissing)
+    {
+        if (isMissing && !source.HasErrors)
         {
             source.Report(new SettingText("", source.File.Length > 0 ? source.File : "settings", 0, "ports"),
                 "expected at least one port, found none; docs/settings.md shows how to name one");
         }
-
-        return ports;
     }
-
-    private static bool IsStreamName(string name) => name.Length is > 0 and <= 32 && name != "truth"
-        && name.All(character => char.IsAsciiLetterOrDigit(character) || character is '-' or '_');
 
     private static DisplayUnits ReadUnits(SettingsSource source)
     {

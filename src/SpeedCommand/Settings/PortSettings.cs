@@ -12,4 +12,8 @@ internal sealed record PortSettings(string Name, string Device, int Baud, Checks
 {
     /// <summary>What the pipeline must know of its lines; standard is sentences, whose transmission took no time.</summary>
     public StreamSettings Stream { get; init; } = StreamSettings.Sentences(Checksum);
+
+    /// <summary>Whether a stream may have this name: logs have it between spaces, and "truth" is the simulator's.</summary>
+    public static bool IsStreamName(string name) => name.Length is > 0 and <= 32 && name != "truth"
+        && name.All(character => char.IsAsciiLetterOrDigit(character) || character is '-' or '_');
 }
