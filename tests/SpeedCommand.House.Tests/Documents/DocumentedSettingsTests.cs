@@ -7,7 +7,7 @@ namespace SpeedCommand.House.Tests.Documents;
 
 /// <summary>
 /// The settings that the program asks for are the rows of the tables in docs/settings.md whose first column is headed
-/// "setting". The name that a port is given stands there as NAME.
+/// "setting". The names that a port and a kernel sensor are given stand there as NAME and SENSOR.
 /// </summary>
 public class DocumentedSettingsTests
 {
@@ -15,7 +15,7 @@ public class DocumentedSettingsTests
 
     /// <summary>One of each list, so that what belongs to its elements is asked for too.</summary>
     private const string OnePort = """
-        { "glider": "marram-15.json", "ports": [ { "name": "NAME", "device": "/dev/null" } ], "iio": [ { "name": "NAME", "device": "bmp280" } ] }
+        { "glider": "marram-15.json", "ports": [ { "name": "NAME", "device": "/dev/null" } ], "iio": [ { "name": "SENSOR", "device": "bmp280" } ] }
         """;
 
     [Fact]
