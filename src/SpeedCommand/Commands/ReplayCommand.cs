@@ -5,7 +5,6 @@ using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Pictures;
 using SpeedCommand.Replay.Replaying;
-using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
 namespace SpeedCommand.Commands;
@@ -119,9 +118,8 @@ internal static class ReplayCommand
             sinks.Add(panel);
         }
 
-        var rules = settings.Ports.ToDictionary(port => port.Name, port => port.Checksum, StringComparer.Ordinal);
         var replay = new FlightReplay(log, new FlightPipeline(settings.Flight, new PictureFan([.. sinks])),
-            name => rules.GetValueOrDefault(name, ChecksumRule.Required));
+            settings.StreamOf);
         var pacer = new Pacer(TimeProvider.System, pace, cancel);
         while (!cancel.IsCancellationRequested && replay.Step(pacer.IsPaced ? pacer.WaitUntil : null))
         {
