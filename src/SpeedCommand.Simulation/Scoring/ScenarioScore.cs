@@ -66,14 +66,15 @@ public static class ScenarioScore
     private static bool HasChance(Scenario scenario) =>
         scenario.Turbulence.VerticalMps > 0 || scenario.Turbulence.HorizontalMps > 0 || scenario.Pilot.WanderMps > 0;
 
-    /// <summary>Mean error of netto in straight flight through fairly still air.</summary>
+    /// <summary>
+    /// Mean error of netto in straight flight, whatever the air does: picking out the moments when the true air is still would pick
+    /// those when an honest estimate lies nearer to the mean of the air around.
+    /// </summary>
     private static double NettoBias(IEnumerable<IReadOnlyList<ScoredPoint>> flights)
     {
         const double StraightRad = 0.02;
-        const double StillMps = 0.5;
         var errors = flights.SelectMany(flight => flight)
-            .Where(point => point.Truth.TimeUs >= ClimbScore.WarmUpS * 1e6 && Math.Abs(point.Truth.BankRad) < StraightRad
-                && Math.Abs(point.Truth.AirMps) < StillMps)
+            .Where(point => point.Truth.TimeUs >= ClimbScore.WarmUpS * 1e6 && Math.Abs(point.Truth.BankRad) < StraightRad)
             .Select(point => point.NettoMps - point.Truth.AirMps)
             .Where(double.IsFinite)
             .ToArray();
