@@ -27,6 +27,7 @@ public sealed class FlightSimulator
     private readonly GaussMarkov _gust;
     private readonly GaussMarkov _wander;
     private readonly SensorChannel[] _channels;
+    private readonly GnssReceiver? _gnss;
     private readonly LinesInOrder _lines = new();
     private ISpeedGuide _guide;
     private GliderState _state;
@@ -52,6 +53,7 @@ public sealed class FlightSimulator
         _gust = new GaussMarkov(new SeededNoise(seed, "gust"), turbulence.HorizontalMps, turbulence.HorizontalTimeS);
         _wander = new GaussMarkov(new SeededNoise(seed, "wander"), scenario.Pilot.WanderMps, scenario.Pilot.WanderTimeS);
         _channels = [.. scenario.Sensors.Select(sensor => new SensorChannel(sensor, seed))];
+        _gnss = scenario.Gnss is { } gnss ? new GnssReceiver(gnss, scenario.StartUtc, seed) : null;
         _guide = new PerfectGuide(_targets, scenario.MassKg);
     }
 
@@ -138,6 +140,7 @@ public sealed class FlightSimulator
             _channels[i].Advance(timeS, timeS + StepS, before.Of(sensor), _sensed.Of(sensor), _lines);
         }
 
+        _gnss?.Advance(_timeUs, StepS, _state, _scenario.Wind.At(_state.HeightM), _lines);
         _lines.ReleaseUntil(_timeUs, sink);
         if (_timeUs % _scenario.TruthEveryUs == 0)
         {

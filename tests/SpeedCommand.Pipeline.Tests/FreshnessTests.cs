@@ -49,6 +49,26 @@ public sealed class FreshnessTests
     }
 
     [Fact]
+    public void ProbeAlone_GivesClimb_AndGoesBlankWithinOneSecond()
+    {
+        // ISO 2533:1975 at 90 kPa: 8.07 m a hectopascal of hydrostatic height at 281.7 K, so 25 Pa/s is 2.29 m/s (dp/ρg, worked out by hand).
+        var scaleM = 287.05287 * (288.15 - 0.0065 * 988.5) / 9.80665;
+        var cockpit = new Cockpit();
+        for (var i = 0; i < 600; i++)
+        {
+            cockpit.Fly(0.05, null, null);
+            cockpit.SendStatic(Cockpit.Number($"P,{90_000 - 25 * cockpit.NowUs * 1e-6:F3},P,TEPROBE"));
+        }
+
+        cockpit.Fly(0.1, null, null);
+        Assert.Equal(25 * scaleM / 90_000, cockpit.Last.ClimbMps.Value, 0.03);
+        Assert.False(cockpit.Last.NettoMps.IsKnown || cockpit.Last.HoldIndicatedMps.IsKnown || cockpit.Last.TrueAirspeedMps.IsKnown);
+        Assert.Equal(Faults.StaticSilent | Faults.AirspeedSilent | Faults.TemperatureSilent, cockpit.Last.Faults);
+        cockpit.Fly(1, null, null);
+        Assert.False(cockpit.Last.ClimbMps.IsKnown);
+    }
+
+    [Fact]
     public void AgeOfANumber_IsTheAgeOfTheOlderInput()
     {
         var cockpit = new Cockpit();

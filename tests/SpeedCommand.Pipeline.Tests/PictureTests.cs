@@ -72,6 +72,67 @@ public sealed class PictureTests
     }
 
     [Fact]
+    public void PullUpWithALoadSensor_TheDipOfTheSinkIsFollowedWithoutLag()
+    {
+        // A second of 2 g at 40 m/s costs, by the drag polar, more sink by its induced part; height and speed here move by exactly that sink.
+        const double V = 40, H = 1000;
+        double Sink(double n)
+        {
+            var cl = n * 2 * 340 * G / (StandardDensity(H) * 11.2 * V * V);
+            return V * (0.0115 - 0.002 * cl + 0.0215 * cl * cl) / (cl / n);
+        }
+
+        double Load(double t) => t is >= 20 and < 21 ? 2 : 1;
+        var cockpit = new Cockpit();
+        var height = H;
+        double worst = 0;
+        for (var i = 1; i <= 460; i++)
+        {
+            var t = i * 0.05;
+            height -= 0.05 * Sink(Load(t));
+            cockpit.Fly(0.05, _ => StandardPa(height), _ => ImpactPa(V, height), Cockpit.Number($"G,{Load(t):F2},,LOAD"));
+            worst = t > 15 ? Math.Max(worst, Math.Abs(cockpit.Last.ClimbMps.Value + Sink(Load(cockpit.Last.TimeS - 0.05)))) : 0;
+        }
+
+        Assert.True(Sink(2) - Sink(1) > 0.5);
+        Assert.InRange(worst, 0, 0.15);
+    }
+
+    [Fact]
+    public void WithoutALoadSensor_NettoSaysHowLittleTheLoadIsKnown()
+    {
+        // Assumed 1 give or take 0.1: by the drag polar above, sink at 1.1 less sink at 1.
+        var measured = new Cockpit();
+        measured.Fly(30, _ => 90_000, _ => 400, "G,1.00,,LOAD");
+        var assumed = new Cockpit();
+        assumed.Fly(30, _ => 90_000, _ => 400);
+        var v = assumed.Last.TrueAirspeedMps.Value;
+        double Sink(double n)
+        {
+            var cl = n * 2 * 340 * G / (StandardDensity(988.5) * 11.2 * v * v);
+            return v * (0.0115 - 0.002 * cl + 0.0215 * cl * cl) / (cl / n);
+        }
+
+        double LoadSigma(Cockpit cockpit) => Math.Sqrt(Math.Pow(cockpit.Last.NettoMps.Sigma, 2) - Math.Pow(cockpit.Last.ClimbMps.Sigma, 2)
+            - Math.Pow(0.05 * Sink(1), 2));
+        Assert.Equal(Sink(1.1) - Sink(1), LoadSigma(assumed), 0.003);
+        Assert.True(LoadSigma(measured) < 0.6 * LoadSigma(assumed));
+    }
+
+    [Fact]
+    public void Gusts_ShakeTheAirspeedButNotTheSmoothOne()
+    {
+        var cockpit = new Cockpit();
+        var random = new Random(5);
+        cockpit.Fly(60, _ => StandardPa(1000), _ => ImpactPa(30 + 1.5 * (random.NextDouble() - 0.5) * 2, 1000));
+        static double Spread(IEnumerable<double> values) => values.Max() - values.Min();
+        var last = cockpit.Pictures.Skip(300).ToArray();
+        Assert.True(Spread(last.Select(picture => picture.SmoothIndicatedAirspeedMps.Value))
+            < 0.4 * Spread(last.Select(picture => picture.IndicatedAirspeedMps.Value)));
+        Assert.Equal(last.Average(picture => picture.IndicatedAirspeedMps.Value), last.Average(picture => picture.SmoothIndicatedAirspeedMps.Value), 0.1);
+    }
+
+    [Fact]
     public void BoardThatSendsAirspeed_IsAsGoodAsOneThatSendsPressure()
     {
         // NASA RP-1046 table: 100 kt calibrated is 34.0493 psf = 1630.28 Pa of impact pressure.

@@ -20,6 +20,7 @@ public class ScoringTests
         var rms = Math.Sqrt(0.04 + Math.Pow(4 * Math.Sin(0.7 / 6), 2) / 2);
         Assert.Equal(rms, score.RmsMps, 0.01);
         Assert.Equal(score.RmsMps * score.RmsMps / 0.25, score.ErrorOverSigma2, 1e-9);
+        Assert.Equal(1, score.InnovationSquared, 1e-9);
     }
 
     [Fact]
@@ -69,6 +70,43 @@ public class ScoringTests
         Assert.InRange(FalseClimb(good, "adaptive"), 0, 0.3);
         Assert.InRange(FalseClimb(bad, "adaptive"), 0, 0.3);
         Assert.True(FalseClimb(bad, "adaptive-no-lag") > 0.6);
+    }
+
+    [Theory]
+    [InlineData("probe-glide", SensorGrade.Common)]
+    [InlineData("probe-glide", SensorGrade.Poor)]
+    [InlineData("probe-zoom", SensorGrade.Common)]
+    [InlineData("probe-zoom", SensorGrade.Poor)]
+    public void Of_FlightWithAProbe_AllSensorsAreNoWorseThanTheBetterOfTheTwo(string name, SensorGrade grade)
+    {
+        var scenario = Bundled(name, grade);
+        var candidates = EstimatorCatalogue.All.Where(one => one.Name is "adaptive" or "adaptive-no-probe" or "adaptive-probe-only").ToArray();
+        var rows = ScenarioScore.Of(scenario, TestFlights.Bundled(scenario.GliderFile), candidates, 4, out _);
+        double Of(string one) => rows.Single(row => row.Estimator == one).Climb.RmsMps;
+        Assert.True(Of("adaptive") <= 1.02 * Math.Min(Of("adaptive-no-probe"), Of("adaptive-probe-only")));
+        Assert.Equal(0, rows.Max(row => row.Climb.BlankShare));
+    }
+
+    [Theory]
+    [InlineData("calm-glide", 1.10)]
+    [InlineData("zoom", 0.6)]
+    public void Of_PolarAFifthWrong_ClimbIsAsGood(string name, double worstRatio)
+    {
+        // The sink taken as known is then a fifth too large; the measurement must put that right.
+        var scenario = Bundled(name, SensorGrade.Common);
+        var row = ScenarioScore.Of(scenario, TestFlights.Bundled(scenario.GliderFile), [EstimatorCatalogue.All[0]], 6, out _, polarError: 0.2)[0];
+        Assert.InRange(row.Ratio, 0.1, worstRatio);
+        Assert.Equal(0, row.Climb.BiasMps, 0.02);
+        Assert.True(row.NettoBiasMps > 0.1);
+    }
+
+    [Fact]
+    public void FlownWith_WrittenAsANoteAndRead_IsTheSame()
+    {
+        var flown = new FlownWith(387.5, new TubeLags(0.25, 0.05, 0.4));
+        Assert.Equal(flown, FlownWith.Of(["a free line", flown.Note]));
+        Assert.True(double.IsNaN(FlownWith.Of(["a free line"]).MassKg));
+        Assert.Contains("mass", Assert.Throws<FormatException>(() => FlownWith.Of(["flown with: mass 300 m"])).Message, StringComparison.Ordinal);
     }
 
     [Fact]

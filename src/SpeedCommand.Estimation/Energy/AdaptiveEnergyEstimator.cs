@@ -153,7 +153,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         var datumM = sample.Channel == EnergyChannel.Height ? _heightDatumM : 0;
         var noise = _learner.Noise;
         var energyM = _modes.EnergyM;
-        _newest = _learner.Take(step, sample with { Metres = sample.Metres + datumM });
+        _newest = _learner.Take(step, sample with { Metres = sample.Metres + datumM }, _modes.StickWeight);
         _modes.Take(step, sample with { Metres = sample.Metres + datumM }, _newest, noise);
         if (sample.Channel == EnergyChannel.Kinetic && isBack)
         {

@@ -52,16 +52,17 @@ public sealed class LearntNoise
     /// <param name="here">Surprise of the filter with <see cref="Value"/>.</param>
     /// <param name="there">Surprise of the filter with <see cref="Perturbed"/>.</param>
     /// <param name="dt">Time since the last sample, s.</param>
-    public void Learn(in Innovation here, in Innovation there, double dt)
+    /// <param name="relevance">How far the sample is about this parameter at all, 0 to 1.</param>
+    public void Learn(in Innovation here, in Innovation there, double dt, double relevance = 1)
     {
         // The logarithm of the ratio, by its first rational approximation.
         var varianceSlope = 2 * (there.Variance - here.Variance) / (there.Variance + here.Variance) / Perturbation;
         var surpriseSlope = (there.Value - here.Value) / Perturbation;
-        // A wild sample counts as one three sigma out: it says that something happened, not how much noise there is.
-        var trust = Math.Min(1, MostBelieved / here.NormalisedSquared);
+        // A wild sample counts as one four sigma out: it says that something happened, not how much noise there is.
+        var trust = relevance * Math.Min(1, MostBelieved / here.NormalisedSquared);
         var score = trust * (0.5 * varianceSlope * (here.NormalisedSquared - 1) - here.Value * surpriseSlope / here.Variance);
         var fade = Math.Min(1, dt / MemoryS);
-        _information += 0.5 * varianceSlope * varianceSlope + surpriseSlope * surpriseSlope / here.Variance - fade * _information;
+        _information += relevance * (0.5 * varianceSlope * varianceSlope + surpriseSlope * surpriseSlope / here.Variance) - fade * _information;
         var step = (score - fade * _priorInformation * _log) / (_information + _priorInformation);
         Set(_log + Math.Clamp(step, -MaxStep, MaxStep));
     }

@@ -52,6 +52,9 @@ internal sealed class ModeMixture
         }
     }
 
+    /// <summary>How likely it is that the pilot moves the stick, 0 to 1.</summary>
+    public double StickWeight => _weights[(int)FlightMode.Stick];
+
     public void Start(double heightM, double kineticM, double guessVarianceM2, in EnergyNoise noise)
     {
         _weights[0] = 1;

@@ -8,6 +8,8 @@ internal sealed class NoiseLearner
     /// <summary>The probe's variance is learnt only while there is a probe, so that without one its filter costs nothing.</summary>
     private const int ProbeVariance = 6;
 
+    private const int KineticDensity = 2;
+
     private readonly EnergyStateFilter[] _filters = new EnergyStateFilter[Parameters];
     private readonly LearntNoise[] _learnt;
     private readonly EnergyNoise[] _perturbed = new EnergyNoise[Parameters];
@@ -83,13 +85,16 @@ internal sealed class NoiseLearner
         }
     }
 
-    /// <summary>Learns from a sample; returns the surprise of the filter with the usual noise.</summary>
-    public Innovation Take(in EnergyStep step, in EnergySample sample)
+    /// <summary>
+    /// Learns from a sample; returns the surprise of the filter with the usual noise. While the stick moves, what surprises is about the
+    /// stick; the air and the sensors are not to blame.
+    /// </summary>
+    public Innovation Take(in EnergyStep step, in EnergySample sample, double stickWeight)
     {
         var usual = Usual.Take(step, sample, Noise);
         for (var i = 0; i < _running; i++)
         {
-            _learnt[i].Learn(usual, _filters[i].Take(step, sample, _perturbed[i]), step.Dt);
+            _learnt[i].Learn(usual, _filters[i].Take(step, sample, _perturbed[i]), step.Dt, i == KineticDensity ? 1 : 1 - stickWeight);
         }
 
         Publish();

@@ -16,11 +16,14 @@ internal sealed class LoadStage
     /// <summary>Load factor of a 40-degree bank, the usual one in a thermal (common practice).</summary>
     public const double ThermallingLoad = 1.3054;
 
-    /// <summary>Noise and zero of a common accelerometer board together, g (the simulator's common to poor grade).</summary>
-    private const double LoadSensorSigma = 0.04;
+    /// <summary>Noise and zero of a cheap accelerometer board together, g (0.04 and 0.03: the simulator's poor grade).</summary>
+    private const double LoadSensorSigma = 0.05;
 
     /// <summary>A bank known to 3 degrees in a usual turn, and a turn that is not quite level, g.</summary>
     private const double BankSensorSigma = 0.08;
+
+    /// <summary>Wings taken for level are within 6 degrees of it, g.</summary>
+    private const double LevelSigma = 0.006;
 
     /// <summary>Thermalling turns are flown at 40 degrees give or take 8 (common practice): 1.18 to 1.49 g.</summary>
     private const double ThermallingSigma = 0.15;
@@ -61,12 +64,12 @@ internal sealed class LoadStage
     {
         if (_loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs))
         {
-            return new LoadBelief(_loadFilter.Value, LoadSensorSigma);
+            return new LoadBelief(Likely(_loadFilter.Value, LoadSensorSigma), LoadSensorSigma);
         }
 
         if (_bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs))
         {
-            return new LoadBelief(_bankFilter.Value, BankSensorSigma);
+            return new LoadBelief(Likely(_bankFilter.Value, LevelSigma), BankSensorSigma);
         }
 
         return phase == FlightPhase.Climbing ? new LoadBelief(ThermallingLoad, ThermallingSigma) : new LoadBelief(1, GlidingSigma);
@@ -77,6 +80,13 @@ internal sealed class LoadStage
     {
         var assumed = phase == FlightPhase.Climbing ? ThermallingLoad : 1;
         return IsMeasured(nowUs) ? Math.Max(1, _steady) : assumed;
+    }
+
+    /// <summary>A load within the sensor's doubt of 1 is likelier a glide and a sensor a little off than a turn of a few degrees.</summary>
+    private static double Likely(double factor, double sigma)
+    {
+        var away = factor - 1;
+        return 1 + away * (away * away / (away * away + sigma * sigma));
     }
 
     private void Smooth(long timeUs, double loadFactor)

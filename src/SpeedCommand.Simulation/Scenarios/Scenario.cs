@@ -1,3 +1,4 @@
+using SpeedCommand.Sentences;
 using SpeedCommand.Simulation.AirMass;
 using SpeedCommand.Simulation.Gliding;
 using SpeedCommand.Simulation.Sensors;
@@ -54,4 +55,12 @@ public sealed record Scenario
 
     /// <summary>The sensors.</summary>
     public required IReadOnlyList<SensorSpec> Sensors { get; init; }
+
+    /// <summary>The satellite receiver; null for none.</summary>
+    public GnssSpec? Gnss { get; init; }
+
+    /// <summary>Pneumatic lag of a sensor.</summary>
+    /// <param name="kind">What it measures.</param>
+    /// <returns>The lag, s; 0 when there is no such sensor.</returns>
+    public double LagOf(ReadingKind kind) => Sensors.FirstOrDefault(sensor => sensor.Kind == kind)?.LagS ?? 0;
 }

@@ -51,6 +51,7 @@ public static class ScenarioFile
         var pilot = ScenarioPlan.ReadPilot(fields.Object("pilot"));
         var plan = ScenarioPlan.ReadLegs(fields);
         var sensors = ScenarioSensors.Read(fields, usedGrade);
+        var gnss = ScenarioGnss.Read(fields);
         fields.RejectUnknown();
         return problems.Count > 0 || air is null ? null : new Scenario
         {
@@ -70,6 +71,7 @@ public static class ScenarioFile
             TruthEveryUs = Math.Max(1, (long)Math.Round(truthEvery * 1e6 / StepUs)) * StepUs,
             Grade = usedGrade,
             Sensors = sensors,
+            Gnss = gnss,
         };
     }
 

@@ -43,7 +43,7 @@ internal static class ScenarioSensors
         };
         if (!IsStreamName(read.Stream))
         {
-            fields.Problem("stream: expected 1 to 32 printable characters without spaces, and not 'truth'");
+            fields.Problem(StreamExpectation);
         }
 
         fields.RejectUnknown();
@@ -69,6 +69,8 @@ internal static class ScenarioSensors
         _ => fields.Number(key, usual),
     };
 
-    private static bool IsStreamName(string name) =>
+    public const string StreamExpectation = "stream: expected 1 to 32 printable characters without spaces, and not 'truth'";
+
+    public static bool IsStreamName(string name) =>
         name.Length is > 0 and <= 32 && name != "truth" && name[0] != '#' && name.All(letter => letter is > ' ' and <= '~');
 }

@@ -1,7 +1,6 @@
 using SpeedCommand.Estimation.Energy;
 using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Pipeline;
-using SpeedCommand.Sentences;
 using SpeedCommand.Simulation.Scenarios;
 
 namespace SpeedCommand.Simulation.Scoring;
@@ -15,15 +14,17 @@ public static class ScenarioScore
     /// <param name="estimators">The estimators; the first one's netto is scored too.</param>
     /// <param name="seeds">Number of flights, with seeds from 1.</param>
     /// <param name="flights">The points of every flight, for a picture.</param>
+    /// <param name="polarError">How much more the instrument's polar sinks than the glider, as a fraction.</param>
     /// <returns>A row for each estimator.</returns>
     public static List<ScoreRow> Of(
-        Scenario scenario, Glider glider, IReadOnlyList<NamedEstimator> estimators, int seeds, out List<IReadOnlyList<ScoredPoint>> flights)
+        Scenario scenario, Glider glider, IReadOnlyList<NamedEstimator> estimators, int seeds, out List<IReadOnlyList<ScoredPoint>> flights,
+        double polarError = 0)
     {
         ArgumentNullException.ThrowIfNull(scenario);
         var flown = new IReadOnlyList<ScoredPoint>[seeds];
         Parallel.For(0, seeds, i =>
         {
-            var trial = new EstimatorTrial(SettingsOf(scenario, glider), Fresh(scenario, estimators));
+            var trial = new EstimatorTrial(new FlightSettings(glider) { MassKg = scenario.MassKg, BugsFraction = polarError }, Fresh(scenario, estimators));
             new FlightSimulator(scenario, glider, i + 1).Fly(trial);
             flown[i] = trial.Points;
         });
@@ -53,27 +54,24 @@ public static class ScenarioScore
         ];
     }
 
-    private static FlightSettings SettingsOf(Scenario scenario, Glider glider) => new(glider) { MassKg = scenario.MassKg };
-
     private static IEnumerable<IEnergyEstimator> Fresh(Scenario scenario, IReadOnlyList<NamedEstimator> estimators)
     {
-        double LagOf(ReadingKind kind) => scenario.Sensors.FirstOrDefault(sensor => sensor.Kind == kind)?.LagS ?? 0;
-        var lags = new TubeLags(
-            LagOf(ReadingKind.StaticPressurePa), LagOf(ReadingKind.ImpactPressurePa), LagOf(ReadingKind.TotalEnergyProbePa));
+        var lags = FlownWith.Of(scenario).Lags;
         return estimators.Select(estimator => estimator.Make(lags));
     }
 
     private static bool HasChance(Scenario scenario) =>
         scenario.Turbulence.VerticalMps > 0 || scenario.Turbulence.HorizontalMps > 0 || scenario.Pilot.WanderMps > 0;
 
-    /// <summary>Mean error of netto in straight flight through fairly still air.</summary>
+    /// <summary>
+    /// Mean error of netto in straight flight, whatever the air does: picking out the moments when the true air is still would pick
+    /// those when an honest estimate lies nearer to the mean of the air around.
+    /// </summary>
     private static double NettoBias(IEnumerable<IReadOnlyList<ScoredPoint>> flights)
     {
         const double StraightRad = 0.02;
-        const double StillMps = 0.5;
         var errors = flights.SelectMany(flight => flight)
-            .Where(point => point.Truth.TimeUs >= ClimbScore.WarmUpS * 1e6 && Math.Abs(point.Truth.BankRad) < StraightRad
-                && Math.Abs(point.Truth.AirMps) < StillMps)
+            .Where(point => point.Truth.TimeUs >= ClimbScore.WarmUpS * 1e6 && Math.Abs(point.Truth.BankRad) < StraightRad)
             .Select(point => point.NettoMps - point.Truth.AirMps)
             .Where(double.IsFinite)
             .ToArray();

@@ -7,7 +7,7 @@ namespace SpeedCommand.Simulation.Scoring;
 /// <param name="BoundMps">The theory's bound of the error, m/s; NaN when there is none.</param>
 /// <param name="Climb">The score of its climb.</param>
 /// <param name="Response">Its mean response; all NaN for air with chance in it.</param>
-/// <param name="NettoBiasMps">Mean error of the pipeline's netto with this estimator, straight in fairly still air, m/s; NaN for all but the first.</param>
+/// <param name="NettoBiasMps">Mean error of the pipeline's netto with this estimator, in straight flight, m/s; NaN for all but the first.</param>
 public sealed record ScoreRow(
     string Flight, string Grade, string Estimator, double BoundMps, ClimbScore Climb, MeanResponse Response, double NettoBiasMps)
 {
