@@ -23,9 +23,9 @@ internal sealed class AirDataStage(FlightSettings settings)
 
     public double AirspeedAgeS(long nowUs) => _impactPa.AgeS(nowUs);
 
-    public bool IsStaticFresh(long nowUs) => _staticPa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+    public bool IsStaticFresh(long nowUs) => _staticPa.IsFresh(nowUs, settings.FreshnessUs);
 
-    public bool IsAirspeedFresh(long nowUs) => _impactPa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+    public bool IsAirspeedFresh(long nowUs) => _impactPa.IsFresh(nowUs, settings.FreshnessUs);
 
     public bool IsTemperatureFresh(long nowUs) => _sensedTemperatureK.IsFresh(nowUs, PipelineBounds.TemperatureFreshnessUs);
 

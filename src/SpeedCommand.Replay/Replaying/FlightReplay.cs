@@ -9,7 +9,7 @@ namespace SpeedCommand.Replay.Replaying;
 /// Feeds a flight log to a pipeline exactly as the service fed it when the log was recorded. Time comes from the log alone:
 /// who wants a pace waits before each record.
 /// </summary>
-public sealed class FlightReplay
+public sealed class FlightReplay : IReplay
 {
     private readonly FlightLogReader _log;
     private readonly FlightPipeline _pipeline;
@@ -27,13 +27,13 @@ public sealed class FlightReplay
         _rules = rules;
     }
 
-    /// <summary>Lines fed so far.</summary>
+    /// <inheritdoc/>
     public long LineCount { get; private set; }
 
-    /// <summary>Replays one record.</summary>
-    /// <param name="before">Called with the record's stamp before the pipeline sees it, to keep a pace; null for none.</param>
-    /// <returns>False at the end of the log.</returns>
-    /// <exception cref="IOException">The log cannot be read, or the pipeline's sink cannot be written.</exception>
+    /// <inheritdoc/>
+    public FlightPipeline Pipeline => _pipeline;
+
+    /// <inheritdoc/>
     public bool Step(Action<long>? before = null)
     {
         if (!_log.TryRead(out var record))
