@@ -17,8 +17,10 @@ public sealed class OutputComparison
     private readonly List<ColumnDifferences> _columns = [];
     private readonly bool _isExact;
     private readonly Action<OutputDifference>? _onDifference;
+    private readonly Action<OutputNumbers>? _onNumbers;
 
-    private OutputComparison(bool isExact, Action<OutputDifference>? onDifference) => (_isExact, _onDifference) = (isExact, onDifference);
+    private OutputComparison(bool isExact, Action<OutputDifference>? onDifference, Action<OutputNumbers>? onNumbers) =>
+        (_isExact, _onDifference, _onNumbers) = (isExact, onDifference, onNumbers);
 
     /// <summary>Every column that occurred, in the order of the outputs.</summary>
     public IReadOnlyList<ColumnDifferences> Columns => _columns;
@@ -40,14 +42,15 @@ public sealed class OutputComparison
     /// <param name="found">Lines of the other.</param>
     /// <param name="isExact">Whether a difference in the last printed decimal counts.</param>
     /// <param name="onDifference">Told of each difference as it is found; null for none.</param>
+    /// <param name="onNumbers">Told of each pair of numbers, equal or not, to draw them; null for none.</param>
     /// <returns>What differs.</returns>
     /// <exception cref="FormatException">A line is no picture.</exception>
-    public static OutputComparison Of(
-        IEnumerable<string> expected, IEnumerable<string> found, bool isExact = false, Action<OutputDifference>? onDifference = null)
+    public static OutputComparison Of(IEnumerable<string> expected, IEnumerable<string> found, bool isExact = false,
+        Action<OutputDifference>? onDifference = null, Action<OutputNumbers>? onNumbers = null)
     {
         ArgumentNullException.ThrowIfNull(expected);
         ArgumentNullException.ThrowIfNull(found);
-        var comparison = new OutputComparison(isExact, onDifference);
+        var comparison = new OutputComparison(isExact, onDifference, onNumbers);
         using var ones = expected.GetEnumerator();
         using var others = found.GetEnumerator();
         comparison.Run(ones, others);
@@ -103,6 +106,11 @@ public sealed class OutputComparison
             {
                 _onDifference?.Invoke(new OutputDifference(column, expected.TimeS, Show(one), Show(other)));
             }
+
+            if (IsNumber(one) || IsNumber(other))
+            {
+                _onNumbers?.Invoke(new OutputNumbers(column, expected.TimeS, NumberOf(one), NumberOf(other)));
+            }
         }
     }
 
@@ -140,6 +148,8 @@ public sealed class OutputComparison
     }
 
     private static bool IsNumber(JsonElement? value) => value?.ValueKind == JsonValueKind.Number;
+
+    private static double NumberOf(JsonElement? value) => IsNumber(value) ? value!.Value.GetDouble() : double.NaN;
 
     private static bool IsBlank(JsonElement? value) => value is null or { ValueKind: JsonValueKind.Null };
 
