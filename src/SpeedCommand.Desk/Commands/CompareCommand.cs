@@ -8,7 +8,7 @@ namespace SpeedCommand.Desk.Commands;
 /// <summary>compare LOG --settings ONE --against TWO: how two replays of a flight differ, or a replay and stored output.</summary>
 internal static class CompareCommand
 {
-    private const int MaxPanels = 4;
+    private const int MaxPanels = 6;
 
     private sealed record Request(FlightInput Flight, string Against, bool IsExact, PictureFile? Plot);
 

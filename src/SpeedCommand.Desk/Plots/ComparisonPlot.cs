@@ -19,7 +19,6 @@ internal static class ComparisonPlot
         var heightPx = TitleHeightPx + PanelHeightPx * columns.Count;
         file.Write(WidthPx, heightPx, canvas =>
         {
-            DrawKey(canvas, first, second);
             for (var i = 0; i < columns.Count; i++)
             {
                 using var plot = PlotOf(columns[i], isLast: i == columns.Count - 1);
@@ -28,9 +27,13 @@ internal static class ComparisonPlot
                 plot.RenderInMemory(WidthPx, PanelHeightPx);
                 canvas.Save();
                 canvas.Translate(0, top);
+                // Rendering begins by wiping all it may.
+                canvas.ClipRect(SKRect.Create(WidthPx, PanelHeightPx));
                 plot.Render(canvas, new PixelRect(0, WidthPx, PanelHeightPx, 0));
                 canvas.Restore();
             }
+
+            DrawKey(canvas, first, second);
         });
     }
 

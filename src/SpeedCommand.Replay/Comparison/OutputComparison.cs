@@ -42,7 +42,7 @@ public sealed class OutputComparison
     /// <param name="found">Lines of the other.</param>
     /// <param name="isExact">Whether a difference in the last printed decimal counts.</param>
     /// <param name="onDifference">Told of each difference as it is found; null for none.</param>
-    /// <param name="onNumbers">Told of each pair of numbers, equal or not, to draw them; null for none.</param>
+    /// <param name="onNumbers">Told of each pair in a column of numbers, equal or not, blank or not, to draw them; null for none.</param>
     /// <returns>What differs.</returns>
     /// <exception cref="FormatException">A line is no picture.</exception>
     public static OutputComparison Of(IEnumerable<string> expected, IEnumerable<string> found, bool isExact = false,
@@ -107,9 +107,9 @@ public sealed class OutputComparison
                 _onDifference?.Invoke(new OutputDifference(column, expected.TimeS, Show(one), Show(other)));
             }
 
-            if (IsNumber(one) || IsNumber(other))
+            if (_onNumbers is not null && Known.GetValueOrDefault(column)?.Kind == PictureColumnKind.Number)
             {
-                _onNumbers?.Invoke(new OutputNumbers(column, expected.TimeS, NumberOf(one), NumberOf(other)));
+                _onNumbers(new OutputNumbers(column, expected.TimeS, NumberOf(one), NumberOf(other)));
             }
         }
     }

@@ -20,6 +20,7 @@ public sealed class IgcReplay : IReplay
     private readonly AirspeedCorrection _correction;
     private readonly byte[] _sentence = new byte[SentenceReader.MaxLength + 2];
     private readonly int _stream;
+    private long _lastUs;
 
     /// <summary>Puts a file in front of a pipeline.</summary>
     /// <param name="file">The file, standing before its first fix.</param>
@@ -49,10 +50,13 @@ public sealed class IgcReplay : IReplay
     {
         if (!_file.TryRead(out var fix))
         {
+            // A picture shows what came before it: the last fix needs one more.
+            _pipeline.AdvanceTo(_lastUs + PipelineBounds.PicturePeriodUs);
             Climbs.End();
             return false;
         }
 
+        _lastUs = fix.TimeUs;
         before?.Invoke(fix.TimeUs);
         LineCount++;
         Climbs.Add(fix);

@@ -13,7 +13,7 @@ internal static class ClimbTable
     public static string Of(string path, IgcClimbs climbs)
     {
         var text = new StringBuilder();
-        text.Append(CultureInfo.InvariantCulture, $"{path}: {climbs.Count} climbs by height and track, which is not total energy");
+        text.Append(CultureInfo.InvariantCulture, $"{path}: climbs by height and track, which is not total energy: {climbs.Count}");
         if (double.IsFinite(climbs.BestMps))
         {
             text.Append(CultureInfo.InvariantCulture, $"; best 30 s {climbs.BestMps:+0.0;-0.0} m/s, greatest height {climbs.MaxHeightM:0} m");
