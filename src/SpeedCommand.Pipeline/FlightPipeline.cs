@@ -1,4 +1,5 @@
 using SpeedCommand.Estimation.Energy;
+using SpeedCommand.Pipeline.Health;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Pipeline.Stages;
 using SpeedCommand.Sentences;
@@ -12,15 +13,19 @@ namespace SpeedCommand.Pipeline;
 /// </summary>
 public sealed class FlightPipeline
 {
-    private readonly IPictureSink _sink;
+    private readonly IPictureSink _picturesTo;
     private readonly AirDataStage _airData;
     private readonly LoadStage _load = new();
     private readonly HydrostaticHeight _height = new();
+    private readonly TotalEnergyProbe _probe = new();
+    private readonly SinkStage _sink;
     private readonly IEnergyEstimator _energy;
     private readonly EventFaults _events = new();
+    private readonly HealthStage _health;
     private readonly PictureStage _pictures;
+    private readonly List<InputStream> _inputs = [];
     private readonly List<StreamHealth> _streams = [];
-    private readonly List<ChecksumRule> _rules = [];
+    private readonly Reading[] _readings = new Reading[LineFormat.MaxReadings];
     private long _nextPictureUs = PipelineBounds.PicturePeriodUs;
 
     /// <summary>Makes a pipeline for one flight.</summary>
@@ -30,63 +35,75 @@ public sealed class FlightPipeline
     public FlightPipeline(FlightSettings settings, IPictureSink sink, IEnergyEstimator? energy = null)
     {
         ArgumentNullException.ThrowIfNull(settings);
-        _energy = energy ?? new AdaptiveEnergyEstimator(settings.StaticLagS, settings.ImpactLagS);
-        _sink = sink;
+        _energy = energy ?? new AdaptiveEnergyEstimator(new TubeLags(settings.StaticLagS, settings.ImpactLagS, settings.ProbeLagS));
+        _picturesTo = sink;
         _airData = new AirDataStage(settings);
+        _health = new HealthStage(_airData, _events);
+        _sink = new SinkStage(settings, _load, _energy);
         _pictures = new PictureStage(settings, _airData, _load, _energy, _events);
     }
 
     /// <summary>The streams added so far, with their counts.</summary>
     public IReadOnlyList<StreamHealth> Streams => _streams;
 
+    /// <summary>When each fault came and went.</summary>
+    public FaultHistory FaultHistory { get; } = new();
+
     /// <summary>The newest stamp seen, microseconds.</summary>
     public long TimeUs { get; private set; }
 
-    /// <summary>Adds a stream that lines may come from.</summary>
+    /// <summary>Adds a stream of sentences on a line of unknown speed.</summary>
     /// <param name="name">Its name in settings and logs.</param>
     /// <param name="rule">Whether its sentences may lack a checksum.</param>
     /// <returns>The stream's number for <see cref="Accept"/>.</returns>
     /// <exception cref="InvalidOperationException">There are <see cref="PipelineBounds.MaxStreams"/> already.</exception>
-    public int AddStream(string name, ChecksumRule rule)
+    public int AddStream(string name, ChecksumRule rule) => AddStream(name, StreamSettings.Sentences(rule));
+
+    /// <summary>Adds a stream that lines may come from.</summary>
+    /// <param name="name">Its name in settings and logs.</param>
+    /// <param name="settings">What its board speaks, and how fast.</param>
+    /// <returns>The stream's number for <see cref="Accept"/>.</returns>
+    /// <exception cref="InvalidOperationException">There are <see cref="PipelineBounds.MaxStreams"/> already.</exception>
+    public int AddStream(string name, StreamSettings settings)
     {
-        if (_streams.Count == PipelineBounds.MaxStreams)
+        if (_inputs.Count == PipelineBounds.MaxStreams)
         {
             throw new InvalidOperationException($"expected at most {PipelineBounds.MaxStreams} streams, found one more: '{name}'");
         }
 
-        _streams.Add(new StreamHealth(name));
-        _rules.Add(rule);
-        return _streams.Count - 1;
+        var input = new InputStream(name, settings);
+        _inputs.Add(input);
+        _streams.Add(input.Health);
+        return _inputs.Count - 1;
     }
 
     /// <summary>Takes one line. Pictures due before it are made first.</summary>
     /// <param name="timeUs">Its stamp, microseconds since the start; an earlier one than the newest counts as the newest.</param>
-    /// <param name="stream">The stream's number from <see cref="AddStream"/>.</param>
+    /// <param name="stream">The stream's number, as it was given when added.</param>
     /// <param name="line">The line without its end; any bytes.</param>
     public void Accept(long timeUs, int stream, ReadOnlySpan<byte> line)
     {
         AdvanceTo(timeUs);
-        var health = _streams[stream];
-        health.Lines++;
-        if (SentenceReader.TryRead(line, _rules[stream], out var sentence) != SentenceFault.None)
+        var input = _inputs[stream];
+        if (!input.TryRead(TimeUs, line, _readings, out var count, out var sampleUs))
         {
-            health.BadLines++;
             _events.Note(Faults.BadLines, TimeUs);
-            return;
         }
 
-        var readings = new XdrReadings(sentence);
-        health.Readings += readings.Count;
-        health.BadReadings += readings.BadCount;
-        foreach (var reading in readings)
+        if (count == 0 && SentenceReader.TryRead(line, ChecksumRule.Required, out var sentence) == SentenceFault.None)
+        {
+            _health.WatchGnss(TimeUs, sentence, _height.HeightM);
+        }
+
+        foreach (ref readonly var reading in _readings.AsSpan(0, count))
         {
             if (ReadingRanges.IsPossible(reading, out var fault))
             {
-                Take(reading);
+                Take(reading, sampleUs);
             }
             else
             {
-                health.BadReadings++;
+                input.Health.BadReadings++;
                 _events.Note(fault, TimeUs);
             }
         }
@@ -99,36 +116,64 @@ public sealed class FlightPipeline
         TimeUs = Math.Max(TimeUs, timeUs);
         while (_nextPictureUs <= TimeUs)
         {
-            _sink.OnPicture(_pictures.MakeAt(_nextPictureUs));
+            var picture = _pictures.MakeAt(_nextPictureUs);
+            FaultHistory.Take(picture.TimeUs, picture.Faults);
+            _picturesTo.OnPicture(picture);
             _nextPictureUs += PipelineBounds.PicturePeriodUs;
         }
     }
 
-    private void Take(in Reading reading)
+    /// <summary>The age of a number counts from its arrival; what the estimator joins, it joins at the moment of the sample.</summary>
+    private void Take(in Reading reading, long sampleUs)
     {
+        if (!_health.Accepts(TimeUs, reading))
+        {
+            return;
+        }
+
         switch (reading.Kind)
         {
             case ReadingKind.StaticPressurePa when _airData.TrySetStatic(TimeUs, reading.Value):
-                _energy.AddHeight(TimeUs, _height.MoveTo(_airData.Air));
+                _energy.AddHeight(sampleUs, _height.MoveTo(_airData.Air));
                 break;
             case ReadingKind.ImpactPressurePa:
-                _energy.AddKineticHeight(TimeUs, _airData.SetImpact(TimeUs, reading.Value));
+                TakeKinetic(sampleUs, _airData.SetImpact(TimeUs, reading.Value));
                 break;
             case ReadingKind.IndicatedAirspeedMps:
-                _energy.AddKineticHeight(TimeUs, _airData.SetIndicated(TimeUs, reading.Value));
+                TakeKinetic(sampleUs, _airData.SetIndicated(TimeUs, reading.Value));
+                break;
+            case ReadingKind.TotalEnergyProbePa when _airData.TrySetProbe(TimeUs, reading.Value, out var air):
+                _energy.AddProbeHeight(sampleUs, _probe.HeightAt(reading.Value, air, _energy.EstimateAt(TimeUs).KineticHeightM));
                 break;
             case ReadingKind.OutsideAirTemperatureK:
                 _airData.SetTemperature(TimeUs, reading.Value);
+                _health.WatchTemperature(TimeUs, reading.Value, _height.HeightM);
                 break;
             case ReadingKind.RelativeHumidity:
                 _airData.SetHumidity(TimeUs, reading.Value);
                 break;
             case ReadingKind.LoadFactor:
                 _load.SetLoadFactor(TimeUs, reading.Value);
+                FollowSink();
                 break;
             case ReadingKind.BankRad:
                 _load.SetBank(TimeUs, reading.Value);
+                FollowSink();
                 break;
+        }
+    }
+
+    private void TakeKinetic(long sampleUs, double kineticM)
+    {
+        _energy.AddKineticHeight(sampleUs, kineticM);
+        FollowSink();
+    }
+
+    private void FollowSink()
+    {
+        if (_airData.IsStaticFresh(TimeUs))
+        {
+            _sink.Follow(TimeUs, _airData.Air);
         }
     }
 }

@@ -31,6 +31,9 @@ public sealed record FlightSettings(Glider Glider)
     /// <summary>Lag of the tubes to the impact pressure sensor, s, 0 to 2; default 0.</summary>
     public double ImpactLagS { get; init; }
 
+    /// <summary>Lag of the tubes to the total-energy probe's sensor, s, 0 to 2; default 0.</summary>
+    public double ProbeLagS { get; init; }
+
     /// <summary>The phase the pilot insists on; null, the default, lets the air data decide.</summary>
     public FlightPhase? ForcedPhase { get; init; }
 

@@ -26,6 +26,9 @@ public static class PipelineBounds
     /// <summary>Impact pressures, Pa: from sensor noise at rest to 400 km/h at sea level, more than any glider may fly.</summary>
     public const double MinImpactPa = -500, MaxImpactPa = 8_000;
 
+    /// <summary>Impact pressure of 40 km/h, Pa: no glider flies slower; a parked one in the wind may read less.</summary>
+    public const double FlyingImpactPa = 75;
+
     /// <summary>Indicated airspeeds sent by a board, m/s; the same range as impact pressure.</summary>
     public const double MaxIndicatedMps = 111;
 

@@ -6,10 +6,14 @@ namespace SpeedCommand.Sentences;
 /// </summary>
 public readonly ref struct Sentence
 {
+    private const int TalkerLength = 2;
+    private const int TypeLength = 3;
+    private const int ShortestProprietaryAddress = 4;
+
     private readonly ReadOnlySpan<byte> _address;
     private readonly int _talkerLength;
 
-    internal Sentence(ReadOnlySpan<byte> address, int talkerLength, SentenceFields fields, bool startedLate)
+    private Sentence(ReadOnlySpan<byte> address, int talkerLength, SentenceFields fields, bool startedLate)
     {
         _address = address;
         _talkerLength = talkerLength;
@@ -31,7 +35,8 @@ public readonly ref struct Sentence
     public SentenceFields Fields { get; }
 
     /// <summary>
-    /// Whether something stood in the line before the '$': the rest of an interrupted sentence, or noise. It was skipped.
+    /// Whether something stood before the '$', in the line or since its last sound sentence: the rest of an interrupted
+    /// sentence, or noise. It was skipped.
     /// </summary>
     public bool StartedLate { get; }
 
@@ -39,4 +44,43 @@ public readonly ref struct Sentence
     /// <param name="type">Three upper-case letters, such as "XDR"u8.</param>
     /// <returns>True when it is.</returns>
     public bool IsOfType(ReadOnlySpan<byte> type) => Type.SequenceEqual(type);
+
+    /// <summary>Divides what stands between '$' and '*' into address and fields.</summary>
+    /// <returns>False for a byte outside printable ASCII or an impossible address.</returns>
+    internal static bool TryDivide(ReadOnlySpan<byte> content, bool startedLate, out Sentence sentence)
+    {
+        var comma = content.IndexOf((byte)',');
+        var address = comma < 0 ? content : content[..comma];
+        // A NUL leaves an exclusive or as it was: only this look at every byte finds it.
+        if (content.ContainsAnyExceptInRange((byte)' ', (byte)'~') || !TryDivide(address, out var talkerLength))
+        {
+            sentence = default;
+            return false;
+        }
+
+        sentence = new Sentence(address, talkerLength, new SentenceFields(content[address.Length..]), startedLate);
+        return true;
+    }
+
+    /// <summary>Two characters of talker, three letters of type; or P and more, which is proprietary and has no type.</summary>
+    private static bool TryDivide(ReadOnlySpan<byte> address, out int talkerLength)
+    {
+        talkerLength = address.Length;
+        foreach (var character in address)
+        {
+            if (!char.IsAsciiLetterUpper((char)character) && !char.IsAsciiDigit((char)character))
+            {
+                return false;
+            }
+        }
+
+        if (address.Length >= ShortestProprietaryAddress && address[0] == 'P')
+        {
+            return true;
+        }
+
+        talkerLength = TalkerLength;
+        return address.Length == TalkerLength + TypeLength
+            && !address[TalkerLength..].ContainsAnyExceptInRange((byte)'A', (byte)'Z');
+    }
 }

@@ -5,6 +5,9 @@ namespace SpeedCommand.Sentences;
 /// <summary>The checksum of NMEA 0183: exclusive or of all characters between '$' and '*', as two hexadecimal digits.</summary>
 internal static class SentenceChecksum
 {
+    /// <summary>Characters it takes with its '*'.</summary>
+    public const int Length = 3;
+
     /// <summary>Exclusive or of the bytes; 0 for none.</summary>
     public static byte Of(ReadOnlySpan<byte> content)
     {

@@ -1,6 +1,9 @@
 namespace SpeedCommand.Sentences;
 
-/// <summary>Why a line gave no sentence. When several apply, the first of this order is named.</summary>
+/// <summary>
+/// Why a line gave no sentence. When several apply to one beginning of a sentence, the first of this order is named; when a line
+/// has several beginnings, the last of this order.
+/// </summary>
 public enum SentenceFault
 {
     /// <summary>The line gave a sentence.</summary>
@@ -10,8 +13,7 @@ public enum SentenceFault
     NoSentence,
 
     /// <summary>
-    /// More than <see cref="SentenceReader.MaxLength"/> characters from the last '$' on, or a line that filled the framer's
-    /// buffer, whose end is therefore unknown.
+    /// More than <see cref="SentenceReader.MaxLength"/> characters from a '$' to the checksum, the next '$' or the end.
     /// </summary>
     TooLong,
 
@@ -22,7 +24,7 @@ public enum SentenceFault
     WrongChecksum,
 
     /// <summary>
-    /// '*' without exactly two hexadecimal digits at the end, a byte outside printable ASCII, or an address that is neither
+    /// '*' without two hexadecimal digits after it, a byte outside printable ASCII, or an address that is neither
     /// a talker with a type nor proprietary.
     /// </summary>
     Malformed,

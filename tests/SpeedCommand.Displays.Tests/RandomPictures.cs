@@ -16,7 +16,7 @@ internal static class RandomPictures
         from heights in Between(-2000, 32_000).Array[2]
         from temperature in Between(150, 350)
         from hand in Between(-1e6, 1e6).Array[2]
-        from flags in Gen.Int[0, (1 << 9) - 1]
+        from flags in Gen.Int[0, (1 << 24) - 1]
         from limit in Gen.Int[0, 4]
         from time in Gen.Long[0, 400_000_000_000]
         select new CockpitPicture

@@ -21,17 +21,17 @@ public class EnergyStateFilterTests
         var noise = new EnergyNoise(Q, 1e-12, 1e-12, Q * T * T * T / qT3OverR, 1e-12);
         var filter = new EnergyStateFilter();
         filter.Start(0, 0, noise);
-        var step = new EnergyStep(T, 0, 0);
-        var instant = new EnergyStep(0, 0, 0);
+        var step = new EnergyStep(T, default);
+        var instant = new EnergyStep(0, default);
         for (var i = 0; i < 2000; i++)
         {
-            filter.Take(step, new EnergySample(0, 0, true), noise);
-            filter.Take(instant, new EnergySample(0, 0, false), noise);
+            filter.Take(step, new EnergySample(0, 0, EnergyChannel.Height), noise);
+            filter.Take(instant, new EnergySample(0, 0, EnergyChannel.Kinetic), noise);
         }
 
         filter.Predict(step, noise);
         var before = filter.EnergyM;
-        filter.Take(instant, new EnergySample(1, 0, true), noise);
+        filter.Take(instant, new EnergySample(1, 0, EnergyChannel.Height), noise);
         Assert.Equal(gain, filter.EnergyM - before, 0.012);
     }
 
@@ -41,12 +41,12 @@ public class EnergyStateFilterTests
         var noise = new EnergyNoise(0.1, 1, 0.01, 0.01, 0.01);
         var filter = new EnergyStateFilter();
         filter.Start(1000, 40, noise);
-        var step = new EnergyStep(0.05, 0, 0);
-        var instant = new EnergyStep(0, 0, 0);
+        var step = new EnergyStep(0.05, default);
+        var instant = new EnergyStep(0, default);
         for (var i = 1; i <= 4000; i++)
         {
-            filter.Take(step, new EnergySample(1000 + 2.5 * i * 0.05, 0, true), noise);
-            filter.Take(instant, new EnergySample(40, 0, false), noise);
+            filter.Take(step, new EnergySample(1000 + 2.5 * i * 0.05, 0, EnergyChannel.Height), noise);
+            filter.Take(instant, new EnergySample(40, 0, EnergyChannel.Kinetic), noise);
         }
 
         Assert.Equal(2.5, filter.ClimbMps, 0.02);
@@ -71,8 +71,8 @@ public class EnergyStateFilterTests
             tubeHeight += (1060 - kinetic - tubeHeight) * 0.001 / heightLagS;
             if (ms % 50 == 0)
             {
-                filter.Take(new EnergyStep(0.05, heightLagS, kineticLagS), new EnergySample(tubeHeight, 0, true), noise);
-                filter.Take(new EnergyStep(0, heightLagS, kineticLagS), new EnergySample(tubeKinetic, 0, false), noise);
+                filter.Take(new EnergyStep(0.05, new TubeLags(heightLagS, kineticLagS)), new EnergySample(tubeHeight, 0, EnergyChannel.Height), noise);
+                filter.Take(new EnergyStep(0, new TubeLags(heightLagS, kineticLagS)), new EnergySample(tubeKinetic, 0, EnergyChannel.Kinetic), noise);
                 worst = ms > 3000 ? Math.Max(worst, Math.Abs(filter.ClimbMps)) : 0;
             }
         }
@@ -84,8 +84,8 @@ public class EnergyStateFilterTests
     public void EnergyStep_TwoHalfSteps_AreOneStep()
     {
         // Exponentials compose; the rational approximation of the slow ones does so to third order.
-        var whole = new EnergyStep(0.1, 0.2, 0.1);
-        var half = new EnergyStep(0.05, 0.2, 0.1);
+        var whole = new EnergyStep(0.1, new TubeLags(0.2, 0.1));
+        var half = new EnergyStep(0.05, new TubeLags(0.2, 0.1));
         Assert.Equal(whole.HeightTube.Kept, half.HeightTube.Kept * half.HeightTube.Kept, 1e-12);
         Assert.Equal(Math.Exp(-0.1 / 0.2), whole.HeightTube.Kept, 1e-12);
         Assert.Equal(Math.Exp(-0.1 / EnergyStep.PassingTimeS), whole.Passing.Kept, 1e-5);

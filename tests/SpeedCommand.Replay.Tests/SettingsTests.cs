@@ -42,7 +42,7 @@ public sealed class SettingsTests : IDisposable
         Assert.Equal(0, settings.TemperatureOffsetK);
         Assert.Equal(0, settings.ThermometerRecovery);
         Assert.Equal(300, settings.SafetyHeightM);
-        Assert.Equal((0, 0), (settings.StaticLagS, settings.ImpactLagS));
+        Assert.Equal((0, 0, 0), (settings.StaticLagS, settings.ImpactLagS, settings.ProbeLagS));
         Assert.Null(settings.ForcedPhase);
     }
 
@@ -51,7 +51,7 @@ public sealed class SettingsTests : IDisposable
     {
         var source = Open("""
             { "glider": "test-15.json", "mass": "350 kg", "ballast": "50 kg", "bugs": "10 %", "expectedClimb": "4 kt", "stallMargin": "8 %",
-              "temperatureOffset": "5 C", "thermometerRecovery": "70 %", "safetyHeight": "1000 ft", "staticLag": "200 ms", "impactLag": "0.05 s", "phase": "climbing" }
+              "temperatureOffset": "5 C", "thermometerRecovery": "70 %", "safetyHeight": "1000 ft", "staticLag": "200 ms", "impactLag": "0.05 s", "probeLag": "0.4 s", "phase": "climbing" }
             """);
         var settings = FlightSettingsReader.Read(source, null, null)!;
         source.ReportUnknown();
@@ -63,7 +63,7 @@ public sealed class SettingsTests : IDisposable
         Assert.Equal(5, settings.TemperatureOffsetK);
         Assert.Equal(0.7, settings.ThermometerRecovery, 12);
         Assert.Equal(304.8, settings.SafetyHeightM, 9);
-        Assert.Equal((0.2, 0.05), (settings.StaticLagS, settings.ImpactLagS));
+        Assert.Equal((0.2, 0.05, 0.4), (settings.StaticLagS, settings.ImpactLagS, settings.ProbeLagS));
         Assert.Equal(FlightPhase.Climbing, settings.ForcedPhase);
     }
 

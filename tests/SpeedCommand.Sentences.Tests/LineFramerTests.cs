@@ -21,6 +21,32 @@ public sealed class LineFramerTests
     public void Push_LongLine_IsCutAndTheNextIsWhole(int length, int kept) =>
         Assert.Equal([new string('x', kept), "next"], LinesOf(new string('x', length) + "\r\nnext\r\n"));
 
+    [Theory]
+    [InlineData(431, new[] { 431 + 81 }, "")]
+    [InlineData(432, new[] { 432 }, "$")]
+    [InlineData(511, new[] { 511 }, "$")]
+    [InlineData(512, new[] { 512 }, "$")]
+    [InlineData(5000, new[] { 512 }, "$")]
+    public void Push_SentenceAfterEndlessJunk_StartsALineOfItsOwn(int junk, int[] before, string start)
+    {
+        // 81 characters from the '$' on, the first number too long for a sentence.
+        var lines = LinesOf(new string('x', junk) + "$" + new string('y', 80) + "z\r\nnext\n");
+        Assert.Equal(before, lines.Take(before.Length).Select(line => line.Length));
+        Assert.Equal(start + (start == "" ? "" : new string('y', 80) + "z"), start == "" ? "" : lines[1]);
+        Assert.Equal("next", lines[^1]);
+    }
+
+    [Fact]
+    public void Reset_InTheMiddleOfEndlessJunk_StartsAfresh()
+    {
+        var framer = new LineFramer();
+        var sink = new LineCollector();
+        framer.Push(new byte[600], sink);
+        framer.Reset();
+        framer.Push("whole\r\n"u8, sink);
+        Assert.Equal("whole", sink.Lines[^1]);
+    }
+
     [Fact]
     public void Reset_HalfALine_DoesNotTouchTheNextOne()
     {
@@ -44,8 +70,8 @@ public sealed class LineFramerTests
             framer.Push(new byte[100], sink);
         }
 
-        Assert.Equal(LineFramer.MaxRecordedLength, framer.PendingLength);
-        Assert.Empty(sink.Lines);
+        Assert.Equal(0, framer.PendingLength);
+        Assert.Equal(LineFramer.MaxRecordedLength, Assert.Single(sink.Lines).Length);
     }
 
     [Fact]
@@ -59,17 +85,18 @@ public sealed class LineFramerTests
     [Fact]
     public void Push_AnyChunking_GivesTheSameLines()
     {
-        // Mostly text, many line ends, some runs beyond the bound; expected lines come from string.Split.
+        // Mostly text, many line ends, some runs beyond the bound; expected lines come from whole strings, not byte by byte.
         var piece = Gen.Frequency(
             (6, Gen.String[Gen.Char['\0', '\xFF'], 0, 30]),
             (3, Gen.OneOf(Gen.Const("\r"), Gen.Const("\n"), Gen.Const("\r\n"), Gen.Const("\n\n"))),
-            (1, Gen.Int[480, 1100].Select(length => new string('z', length))));
+            (2, Gen.Select(Gen.Int[0, 100], Gen.Int[0, 1100], (before, after) => new string('z', before) + "$" + new string('z', after))));
         Gen.Select(piece.Array[0, 40].Select(string.Concat), Gen.Int[1, 700].Array[1, 20]).Sample((stream, chunks) =>
         {
-            var expected = stream.Split(['\r', '\n'], StringSplitOptions.RemoveEmptyEntries)
-                .Select(line => line[..Math.Min(line.Length, 512)]);
-            var lastEnd = stream.LastIndexOfAny(['\r', '\n']);
-            var unfinished = Math.Min(stream.Length - lastEnd - 1, 512);
+            var lines = stream.Split(['\r', '\n']);
+            var unfinished = Pieces(lines[^1]).ToList();
+            var isOpen = unfinished.Count > 0 && lines[^1].EndsWith(unfinished[^1], StringComparison.Ordinal)
+                && !(lines[^1].Length > 512 && unfinished[^1].Length == 512);
+            List<string> expected = [.. lines[..^1].SelectMany(Pieces), .. isOpen ? unfinished[..^1] : unfinished];
             var framer = new LineFramer();
             var sink = new LineCollector();
             var bytes = WireText.Bytes(stream);
@@ -80,10 +107,25 @@ public sealed class LineFramerTests
                 at += length;
             }
 
-            Assert.Equal(expected.Take(sink.Lines.Count), sink.Lines);
-            Assert.Equal(unfinished, framer.PendingLength);
-            Assert.Equal(expected.Count() - (unfinished > 0 ? 1 : 0), sink.Lines.Count);
+            Assert.Equal(expected, sink.Lines);
+            Assert.Equal(isOpen ? unfinished[^1].Length : 0, framer.PendingLength);
         });
+    }
+
+    /// <summary>What becomes of one line of any length.</summary>
+    private static IEnumerable<string> Pieces(string line)
+    {
+        while (line.Length > 512)
+        {
+            var start = line.LastIndexOf('$', 511, 80);
+            yield return line[..(start < 0 ? 512 : start)];
+            line = start >= 0 ? line[start..] : line.IndexOf('$', 512) is var next and >= 0 ? line[next..] : "";
+        }
+
+        if (line.Length > 0)
+        {
+            yield return line;
+        }
     }
 
     private static List<string> LinesOf(string stream)

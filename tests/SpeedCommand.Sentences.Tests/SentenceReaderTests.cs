@@ -39,9 +39,11 @@ public sealed class SentenceReaderTests
     [InlineData("$YXXDR,P,95461.2,P,STATIC*", SentenceFault.Malformed)]
     [InlineData("$YXXDR,P,95461.2,P,STATIC*7", SentenceFault.Malformed)]
     [InlineData("$YXXDR,P,95461.2,P,STATIC*7G", SentenceFault.Malformed)]
-    [InlineData("$YXXDR,P,95461.2,P,STATIC*074", SentenceFault.Malformed)]
-    [InlineData("$YXXDR,P,95461.2,P,STATIC*74 ", SentenceFault.Malformed)]
-    [InlineData("$YXXDR,P,95461.2,P,STATIC*74\r", SentenceFault.Malformed)]
+    [InlineData("$YXXDR,P,95461.2,P,STATIC*074", SentenceFault.WrongChecksum)]
+    [InlineData("$YXXDR,P,95461.2,P,STATIC* 74", SentenceFault.Malformed)]
+    [InlineData("$YXXDR,P,95461.2,P,STATIC*75$", SentenceFault.WrongChecksum)]
+    [InlineData("$$YXXDR,P,95461.2,P,STATIC", SentenceFault.MissingChecksum)]
+    [InlineData("$YXXDR,P,95461$.2,P,STATIC*74", SentenceFault.WrongChecksum)]
     [InlineData("$YXXDR,P,95461.2,P,STATIC*75", SentenceFault.WrongChecksum)]
     [InlineData("$YXXDR,P,95461.3,P,STATIC*74", SentenceFault.WrongChecksum)]
     public void TryRead_SickLine_NamesTheFault(string line, SentenceFault expected) => Assert.Equal(expected, Fault(line));
@@ -112,7 +114,7 @@ public sealed class SentenceReaderTests
         {
             var line = WireText.Bytes(Valid[..length] + Valid);
             Assert.Equal(SentenceFault.None, SentenceReader.TryRead(line, ChecksumRule.Required, out var sentence));
-            Assert.Equal(length > 0, sentence.StartedLate);
+            Assert.Equal(length > 0 && length < Valid.Length, sentence.StartedLate);
             Assert.Equal(12, FieldsOf(sentence).Count);
         }
     }
@@ -143,7 +145,7 @@ public sealed class SentenceReaderTests
     [Fact]
     public void TryRead_NulAnywhere_IsNoticedThoughTheChecksumIsBlindToIt()
     {
-        for (var at = 1; at <= Valid.Length; at++)
+        for (var at = 1; at < Valid.Length; at++)
         {
             Assert.NotEqual(SentenceFault.None, Fault(Valid.Insert(at, "\0")));
         }
@@ -161,11 +163,40 @@ public sealed class SentenceReaderTests
         Assert.Equal(expected, Fault("junk" + line));
     }
 
-    [Fact]
-    public void TryRead_LineThatFilledTheFramer_IsTooLongSinceItsEndIsUnknown()
+    [Theory]
+    [InlineData("{0}$", 1)]
+    [InlineData("{0}{0}{1}", 3)]
+    [InlineData("$${0}$$$", 1)]
+    [InlineData("{0}74 and more", 1)]
+    [InlineData("$GP{0}*", 1)]
+    [InlineData("*$*{0}*{1}*00\0\xFF", 2)]
+    [InlineData("$YXXDR,P,95461.2,P,STATIC*75{0}$YXXDR,P,95461.2,P,STATIC*75", 1)]
+    public void SentencesInLine_BetweenJunk_AreAllFound(string form, int expected)
     {
-        Assert.Equal(SentenceFault.TooLong, Fault(new string('x', 512 - Valid.Length) + Valid));
-        Assert.Equal(SentenceFault.None, Fault(new string('x', 511 - Valid.Length) + Valid));
+        var line = WireText.Bytes(string.Format(System.Globalization.CultureInfo.InvariantCulture, form, Valid, "$YXXDR,P,612.4,P,IMPACT*62"));
+        Assert.Equal(SentenceFault.None, SentenceReader.TryRead(line, ChecksumRule.Required, out var first));
+        Assert.Equal(12, FieldsOf(first).Count);
+        var count = 0;
+        foreach (var sentence in new SentencesInLine(line, ChecksumRule.Required))
+        {
+            count++;
+            Assert.Equal("XDR", WireText.Text(sentence.Type));
+        }
+
+        Assert.Equal(expected, count);
+    }
+
+    [Fact]
+    public void SentencesInLine_ChecksumOptional_OneWithoutItEndsAtTheNextOne()
+    {
+        var line = WireText.Bytes("$YXXDR,P,95461.2,P,STATIC$" + Valid + "$YXXDR,P,612.4,P,IMPACT");
+        var fieldCounts = new List<int>();
+        foreach (var sentence in new SentencesInLine(line, ChecksumRule.Optional))
+        {
+            fieldCounts.Add(FieldsOf(sentence).Count);
+        }
+
+        Assert.Equal([4, 12, 4], fieldCounts);
     }
 
     private static SentenceFault Fault(string line) => SentenceReader.TryRead(WireText.Bytes(line), ChecksumRule.Required, out _);

@@ -88,6 +88,6 @@ public class ScoringTests
     [
         .. Enumerable.Range(0, (int)(seconds * 10)).Select(i => new ScoredPoint(
             new TruthSample(i * 100_000L, 1000, 1000, 30, 30, truth(i / 10.0), 0, 280, 1, 0),
-            [new EnergyEstimate(1000, estimate(i / 10.0), sigmaMps)], double.NaN)),
+            [new EnergyEstimate(1000, estimate(i / 10.0), sigmaMps)], double.NaN, [1])),
     ];
 }

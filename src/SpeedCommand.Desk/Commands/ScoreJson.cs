@@ -37,6 +37,7 @@ internal static class ScoreJson
         Number(json, "within1Sigma", row.Climb.Within1);
         Number(json, "within2Sigma", row.Climb.Within2);
         Number(json, "errorOverSigmaSquared", row.Climb.ErrorOverSigma2);
+        Number(json, "innovationSquared", row.Climb.InnovationSquared);
         Number(json, "blankShare", row.Climb.BlankShare);
         Number(json, "falseClimbMps", row.Response.FalseClimbMps);
         Number(json, "riseS", row.Response.RiseS);

@@ -113,7 +113,7 @@ public static class TerminalPanel
             var fault = FaultWords.Gravest(faults);
             var isLast = faults == fault;
             // Room is kept to say how many more there are, so that no fault goes unsaid.
-            if (text.Length + 2 + FaultWords.Of(fault).Length + (isLast ? 0 : " +9 more".Length) > grid.Width - 1)
+            if (text.Length + 2 + FaultWords.Of(fault).Length + (isLast ? 0 : " +99 more".Length) > grid.Width - 1)
             {
                 text.Append(" +").Append(FaultWords.Count(faults)).Append(" more");
                 break;

@@ -3,7 +3,8 @@ namespace SpeedCommand.Estimation.Energy;
 /// <summary>
 /// The estimator flown: <see cref="EnergyStateFilter"/> with its noise learnt from the data as they come in, so that neither the
 /// sensors' grade nor the day's turbulence is a setting, and with two more of it standing by for what cannot be learnt in
-/// time: a stick moved (<see cref="FlightMode.Stick"/>) and a sudden edge of air (<see cref="FlightMode.Edge"/>).
+/// time: a stick moved (<see cref="FlightMode.Stick"/>) and a sudden edge of air (<see cref="FlightMode.Edge"/>). It knows the climb
+/// while it hears height and kinetic height, or a total-energy probe, or all of them; a channel that comes or goes changes sigma only.
 /// </summary>
 public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
 {
@@ -13,69 +14,103 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     /// <summary>A sample that comes later than this is dropped, microseconds.</summary>
     private const long MaxLateUs = 500_000;
 
-    /// <summary>Over a longer gap in either channel than this the old state is no guide to the new one, microseconds.</summary>
+    /// <summary>Over a longer gap than this the old state is no guide to the new one, microseconds.</summary>
     private const long MaxGapUs = 2_000_000;
+
+    /// <summary>So long a probe waits for an airspeed before it starts without, microseconds.</summary>
+    private const long PatienceUs = 1_000_000;
 
     /// <summary>No height or kinetic height of a glider lies beyond it, m.</summary>
     private const double MaxMetres = 50_000;
 
+    /// <summary>Doubt of the kinetic height of a glider whose airspeed is not known, m²: 30 m/s, give or take 10 m/s.</summary>
+    private const double GuessVarianceM2 = 30 * 30;
+
     private readonly NoiseLearner _learner = new();
     private readonly ModeMixture _modes;
-    private readonly double _heightLagS;
-    private readonly double _kineticLagS;
+    private readonly TubeLags _lags;
+    private readonly ChannelTimes _times = new();
+    private Innovation _newest = new(double.NaN, double.NaN);
     private long _timeUs;
-    private long _heightTimeUs = long.MinValue / 2;
-    private long _kineticTimeUs = long.MinValue / 2;
-    private double _firstHeightM = double.NaN;
+    private long _firstProbeUs;
+    private double _firstHeightM;
+    private double _heightDatumM;
+    private double _energyDatumM;
     private bool _started;
+    private bool _hasProbe;
 
     /// <summary>Makes the estimator.</summary>
-    /// <param name="heightLagS">Pneumatic lag of the static pressure, s, 0 or more.</param>
-    /// <param name="kineticLagS">Pneumatic lag of the impact pressure, s, 0 or more.</param>
-    public AdaptiveEnergyEstimator(double heightLagS = 0, double kineticLagS = 0)
+    /// <param name="lags">Pneumatic lags.</param>
+    public AdaptiveEnergyEstimator(TubeLags lags = default)
     {
-        _heightLagS = heightLagS;
-        _kineticLagS = kineticLagS;
+        _lags = lags;
         _modes = new ModeMixture(_learner.Usual);
+        Reset();
     }
 
     /// <summary>The noise as learnt so far.</summary>
     public EnergyNoise Noise => _learner.Noise;
 
     /// <inheritdoc/>
+    public double NormalisedInnovationSquared => _newest.NormalisedSquared;
+
+    /// <inheritdoc/>
     public void Reset()
     {
-        _started = false;
+        _started = _hasProbe = false;
         _firstHeightM = double.NaN;
+        _firstProbeUs = long.MaxValue;
+        _heightDatumM = _energyDatumM = 0;
+        _times.Clear();
     }
 
     /// <inheritdoc/>
-    public void AddHeight(long timeUs, double heightM) => Add(timeUs, heightM, isHeight: true);
+    public void AddHeight(long timeUs, double heightM) => Add(timeUs, heightM, EnergyChannel.Height);
 
     /// <inheritdoc/>
-    public void AddKineticHeight(long timeUs, double kineticHeightM) => Add(timeUs, kineticHeightM, isHeight: false);
+    public void AddKineticHeight(long timeUs, double kineticHeightM) => Add(timeUs, kineticHeightM, EnergyChannel.Kinetic);
+
+    /// <inheritdoc/>
+    public void AddProbeHeight(long timeUs, double probeHeightM) => Add(timeUs, probeHeightM, EnergyChannel.Probe);
+
+    /// <inheritdoc/>
+    public void AddSinkChange(double changeMps)
+    {
+        if (_started && double.IsFinite(changeMps))
+        {
+            _learner.AddKnownClimb(-changeMps);
+            _modes.AddKnownClimb(-changeMps);
+        }
+    }
 
     /// <inheritdoc/>
     public EnergyEstimate EstimateAt(long timeUs)
     {
-        if (!_started || timeUs - Math.Min(_heightTimeUs, _kineticTimeUs) > MaxGapUs)
+        if (!_started || timeUs - _times.CompleteUs > MaxGapUs)
         {
             return EnergyEstimate.Unknown;
         }
 
         var aheadS = Math.Max(0, timeUs - _timeUs) * 1e-6;
         var estimate = _modes.EstimateAhead(aheadS, _learner.Noise);
-        return estimate.ClimbSigmaMps <= MaxUsefulSigmaMps ? estimate : EnergyEstimate.Unknown;
+        var hasAirspeed = timeUs - _times.Of(EnergyChannel.Kinetic) <= MaxGapUs;
+        return estimate.ClimbSigmaMps <= MaxUsefulSigmaMps
+            ? estimate with
+            {
+                EnergyHeightM = estimate.EnergyHeightM + _energyDatumM,
+                KineticHeightM = hasAirspeed ? estimate.KineticHeightM : double.NaN,
+            }
+            : EnergyEstimate.Unknown;
     }
 
-    private void Add(long timeUs, double metres, bool isHeight)
+    private void Add(long timeUs, double metres, EnergyChannel channel)
     {
         if (!(Math.Abs(metres) <= MaxMetres) || (_started && _timeUs - timeUs > MaxLateUs))
         {
             return;
         }
 
-        if (_started && timeUs - Math.Min(_heightTimeUs, _kineticTimeUs) > MaxGapUs)
+        if (_started && timeUs - _times.CompleteUs > MaxGapUs)
         {
             Reset();
         }
@@ -83,31 +118,85 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         var dt = Math.Max(0, timeUs - _timeUs) * 1e-6;
         var lateS = Math.Max(0, _timeUs - timeUs) * 1e-6;
         _timeUs = Math.Max(_timeUs, timeUs);
-        ref var newestUs = ref isHeight ? ref _heightTimeUs : ref _kineticTimeUs;
-        newestUs = Math.Max(newestUs, timeUs);
+        var isBack = timeUs - _times.Of(channel) > MaxGapUs;
+        _times.Note(channel, timeUs);
         if (!_started)
         {
-            TryStart(metres, isHeight);
+            TryStart(timeUs, metres, channel);
             return;
         }
 
-        var step = new EnergyStep(dt, _heightLagS, _kineticLagS);
-        var sample = new EnergySample(metres, lateS, isHeight);
-        var noise = _learner.Noise;
-        _modes.Take(step, sample, _learner.Take(step, sample), noise);
+        if (_hasProbe && timeUs - _times.Of(EnergyChannel.Probe) > MaxGapUs)
+        {
+            _hasProbe = false;
+            _learner.DropProbe();
+            _modes.DropProbe();
+        }
+
+        Take(new EnergyStep(dt, _lags, _hasProbe, timeUs - _times.Of(EnergyChannel.Kinetic) <= MaxGapUs), new EnergySample(metres, lateS, channel), isBack);
     }
 
-    private void TryStart(double metres, bool isHeight)
+    private void Take(in EnergyStep step, in EnergySample sample, bool isBack)
     {
-        if (isHeight)
+        if (sample.Channel == EnergyChannel.Probe && !_hasProbe)
         {
-            _firstHeightM = metres;
+            StartProbe(step, sample.Metres);
+            return;
         }
-        else if (!double.IsNaN(_firstHeightM))
+
+        if (sample.Channel == EnergyChannel.Height && isBack)
         {
-            _started = true;
-            _modes.Start(_firstHeightM, metres, _learner.Noise);
-            _learner.Start(_firstHeightM, metres);
+            // A height that was silent may have moved its datum; what was learnt of the climb meanwhile is worth more.
+            _heightDatumM = _learner.Usual.HeightAtSensorM - sample.Metres;
         }
+
+        var datumM = sample.Channel == EnergyChannel.Height ? _heightDatumM : 0;
+        var noise = _learner.Noise;
+        var energyM = _modes.EnergyM;
+        _newest = _learner.Take(step, sample with { Metres = sample.Metres + datumM });
+        _modes.Take(step, sample with { Metres = sample.Metres + datumM }, _newest, noise);
+        if (sample.Channel == EnergyChannel.Kinetic && isBack)
+        {
+            // Energy height was counted with a guess of the airspeed; it goes on from where it was.
+            _energyDatumM += energyM - _modes.EnergyM;
+        }
+    }
+
+    private void StartProbe(in EnergyStep step, double probeM)
+    {
+        _learner.Predict(step);
+        _modes.Predict(step, _learner.Noise);
+        _hasProbe = true;
+        _learner.AddProbe(probeM, step.HasAirspeed);
+        _modes.AddProbe(probeM, step.HasAirspeed);
+    }
+
+    private void TryStart(long timeUs, double metres, EnergyChannel channel)
+    {
+        switch (channel)
+        {
+            case EnergyChannel.Height:
+                _firstHeightM = metres;
+                break;
+            case EnergyChannel.Kinetic when !double.IsNaN(_firstHeightM):
+                Start(_firstHeightM, metres, 0);
+                break;
+            case EnergyChannel.Probe:
+                _firstProbeUs = Math.Min(_firstProbeUs, timeUs);
+                if (timeUs - _firstProbeUs >= PatienceUs)
+                {
+                    Start(double.IsNaN(_firstHeightM) ? metres - TotalEnergyProbe.UsualKineticM : _firstHeightM, TotalEnergyProbe.UsualKineticM, GuessVarianceM2);
+                    StartProbe(new EnergyStep(0, _lags, hasAirspeed: false), metres);
+                }
+
+                break;
+        }
+    }
+
+    private void Start(double heightM, double kineticM, double guessVarianceM2)
+    {
+        _started = true;
+        _modes.Start(heightM, kineticM, guessVarianceM2, _learner.Noise);
+        _learner.Start(heightM, kineticM, guessVarianceM2);
     }
 }

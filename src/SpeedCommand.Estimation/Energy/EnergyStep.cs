@@ -12,20 +12,20 @@ public readonly struct EnergyStep
     /// <summary>Time constant of the kinetic height's rate, s: a pilot changes speed within seconds, then holds it.</summary>
     public const double KineticTimeS = 0.8;
 
-    /// <summary>A lag of nothing is one too short to matter, s, so that there is one model only.</summary>
-    private const double NoLagS = 0.002;
-
     /// <summary>Works the factors out.</summary>
     /// <param name="dt">The step, s, not negative.</param>
-    /// <param name="heightLagS">Lag of the static pressure's tube, s, 0 or more.</param>
-    /// <param name="kineticLagS">Lag of the impact pressure's tube, s, 0 or more.</param>
-    public EnergyStep(double dt, double heightLagS, double kineticLagS)
+    /// <param name="lags">The tubes' lags.</param>
+    /// <param name="hasProbe">Whether the probe's tube is wanted too.</param>
+    /// <param name="hasAirspeed">Whether the kinetic height is known from its own sensor.</param>
+    public EnergyStep(double dt, in TubeLags lags, bool hasProbe = false, bool hasAirspeed = true)
     {
         Dt = dt;
+        HasAirspeed = hasAirspeed;
         Passing = Markov(dt, PassingTimeS);
         Gust = Markov(dt, GustTimeS);
-        HeightTube = Tube(dt, Math.Max(NoLagS, heightLagS));
-        KineticTube = Tube(dt, Math.Max(NoLagS, kineticLagS));
+        HeightTube = new EnergyTube(dt, lags.HeightS);
+        KineticTube = new EnergyTube(dt, lags.KineticS);
+        ProbeTube = hasProbe ? new EnergyTube(dt, lags.ProbeS) : default;
         // The exact exponential of [[0, 1], [-1/T², -2/T]], critically damped.
         var u = dt / KineticTimeS;
         var kept = Math.Exp(-u);
@@ -38,6 +38,9 @@ public readonly struct EnergyStep
     /// <summary>The step, s.</summary>
     public double Dt { get; }
 
+    /// <summary>Whether the kinetic height is known from its own sensor.</summary>
+    public bool HasAirspeed { get; }
+
     /// <summary>The passing climb.</summary>
     public EnergyDecay Passing { get; }
 
@@ -45,10 +48,13 @@ public readonly struct EnergyStep
     public EnergyDecay Gust { get; }
 
     /// <summary>The static pressure's tube.</summary>
-    public EnergyDecay HeightTube { get; }
+    public EnergyTube HeightTube { get; }
 
     /// <summary>The impact pressure's tube.</summary>
-    public EnergyDecay KineticTube { get; }
+    public EnergyTube KineticTube { get; }
+
+    /// <summary>The total-energy probe's tube; nothing without a probe.</summary>
+    public EnergyTube ProbeTube { get; }
 
     /// <summary>The kinetic rate left of itself.</summary>
     public double RateKept { get; }
@@ -67,12 +73,5 @@ public readonly struct EnergyStep
     {
         var half = dt / (2 * timeS);
         return new EnergyDecay((1 - half) / (1 + half), dt / (1 + half));
-    }
-
-    /// <summary>A first-order lag's exact response to a straight line.</summary>
-    private static EnergyDecay Tube(double dt, double lagS)
-    {
-        var kept = Math.Exp(-dt / lagS);
-        return new EnergyDecay(kept, dt - lagS * (1 - kept));
     }
 }

@@ -37,13 +37,61 @@ internal sealed class ModeMixture
         }
     }
 
-    public void Start(double heightM, double kineticM, in EnergyNoise noise)
+    /// <summary>Energy height of the mixture, m.</summary>
+    public double EnergyM
+    {
+        get
+        {
+            var energy = 0.0;
+            for (var i = 0; i < Modes; i++)
+            {
+                energy += _weights[i] * _filters[i].EnergyM;
+            }
+
+            return energy;
+        }
+    }
+
+    public void Start(double heightM, double kineticM, double guessVarianceM2, in EnergyNoise noise)
     {
         _weights[0] = 1;
         for (var i = 1; i < Modes; i++)
         {
-            _filters[i].Start(heightM, kineticM, NoiseOf((FlightMode)i, noise));
+            _filters[i].Start(heightM, kineticM, NoiseOf((FlightMode)i, noise), guessVarianceM2);
             _weights[i] = 0;
+        }
+    }
+
+    public void AddProbe(double probeM, bool hasAirspeed)
+    {
+        for (var i = 1; i < Modes; i++)
+        {
+            _filters[i].AddProbe(probeM, hasAirspeed);
+        }
+    }
+
+    public void DropProbe()
+    {
+        for (var i = 1; i < Modes; i++)
+        {
+            _filters[i].DropProbe();
+        }
+    }
+
+    /// <summary>Goes on in time, after the usual filter.</summary>
+    public void Predict(in EnergyStep step, in EnergyNoise noise)
+    {
+        for (var i = 1; i < Modes; i++)
+        {
+            _filters[i].Predict(step, NoiseOf((FlightMode)i, noise));
+        }
+    }
+
+    public void AddKnownClimb(double changeMps)
+    {
+        for (var i = 1; i < Modes; i++)
+        {
+            _filters[i].AddKnownClimb(changeMps);
         }
     }
 
@@ -63,20 +111,20 @@ internal sealed class ModeMixture
 
     public EnergyEstimate EstimateAhead(double aheadS, in EnergyNoise noise)
     {
-        double climb = 0, energy = 0, variance = 0;
+        double climb = 0, kinetic = 0, variance = 0;
         for (var i = 0; i < Modes; i++)
         {
             climb += _weights[i] * _filters[i].ClimbMps;
-            energy += _weights[i] * _filters[i].EnergyM;
+            kinetic += _weights[i] * (_filters[i].KineticM + _filters[i].KineticRateMps * aheadS);
         }
 
         for (var i = 0; i < Modes; i++)
         {
             var apart = _filters[i].ClimbMps - climb;
-            variance += _weights[i] * (_filters[i].ClimbVariance + apart * apart + NoiseOf((FlightMode)i, noise).ClimbDensity * aheadS);
+            variance += _weights[i] * (_filters[i].ClimbVariance + apart * apart + DensityOf(NoiseOf((FlightMode)i, noise)) * aheadS);
         }
 
-        return new EnergyEstimate(energy + climb * aheadS, climb, Math.Sqrt(variance * OwnDoubt));
+        return new EnergyEstimate(EnergyM + climb * aheadS, climb, Math.Sqrt(variance * OwnDoubt), kinetic);
     }
 
     private static double LikelihoodOf(in Innovation surprise) => -0.5 * (surprise.NormalisedSquared + Math.Log(surprise.Variance));
@@ -101,6 +149,8 @@ internal sealed class ModeMixture
             _weights[i] /= sum;
         }
     }
+
+    private static double DensityOf(in EnergyNoise noise) => noise.ClimbDensity + noise.StayingDensity;
 
     private static EnergyNoise NoiseOf(FlightMode mode, in EnergyNoise noise) => mode switch
     {

@@ -21,6 +21,7 @@ public readonly record struct CockpitPicture
         TemperatureK = Gauge.Blank,
         IndicatedAirspeedMps = Gauge.Blank,
         TrueAirspeedMps = Gauge.Blank,
+        SmoothIndicatedAirspeedMps = Gauge.Blank,
         ClimbMps = Gauge.Blank,
         AverageClimbMps = Gauge.Blank,
         ThermalAverageMps = Gauge.Blank,
@@ -61,6 +62,9 @@ public readonly record struct CockpitPicture
 
     /// <summary>True airspeed, m/s.</summary>
     public Gauge TrueAirspeedMps { get; init; }
+
+    /// <summary>Indicated airspeed with gusts taken out, m/s: what a speed to fly is to be compared with.</summary>
+    public Gauge SmoothIndicatedAirspeedMps { get; init; }
 
     /// <summary>Total-energy climb, m/s.</summary>
     public Gauge ClimbMps { get; init; }

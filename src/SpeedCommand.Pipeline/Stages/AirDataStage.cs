@@ -10,6 +10,7 @@ internal sealed class AirDataStage(FlightSettings settings)
 {
     private TimedValue _staticPa;
     private TimedValue _impactPa;
+    private TimedValue _probePa;
     private TimedValue _sensedTemperatureK;
     private TimedValue _humidity;
     private double _staticErrorPa;
@@ -23,11 +24,27 @@ internal sealed class AirDataStage(FlightSettings settings)
 
     public double AirspeedAgeS(long nowUs) => _impactPa.AgeS(nowUs);
 
+    public double ProbeAgeS(long nowUs) => _probePa.AgeS(nowUs);
+
+    public bool IsProbeFresh(long nowUs) => _probePa.IsFresh(nowUs, settings.FreshnessUs);
+
     public bool IsStaticFresh(long nowUs) => _staticPa.IsFresh(nowUs, settings.FreshnessUs);
 
     public bool IsAirspeedFresh(long nowUs) => _impactPa.IsFresh(nowUs, settings.FreshnessUs);
 
     public bool IsTemperatureFresh(long nowUs) => _sensedTemperatureK.IsFresh(nowUs, PipelineBounds.TemperatureFreshnessUs);
+
+    /// <summary>Whether the airspeed is fresh and no parked glider's.</summary>
+    public bool IsFlying(long nowUs) => IsAirspeedFresh(nowUs) && _impactPa.Value > PipelineBounds.FlyingImpactPa;
+
+    /// <summary>Relative humidity, 0 to 1; NaN when not fresh.</summary>
+    public double Humidity(long nowUs) => _humidity.IsFresh(nowUs, PipelineBounds.TemperatureFreshnessUs) ? _humidity.Value : double.NaN;
+
+    /// <summary>Static pressure turned out not to be known any later than this.</summary>
+    public void TakeBackStatic(long timeUs) => _staticPa.TakeBackTo(timeUs);
+
+    /// <summary>Impact pressure turned out not to be known any later than this.</summary>
+    public void TakeBackImpact(long timeUs) => _impactPa.TakeBackTo(timeUs);
 
     public double TemperatureAgeS(long nowUs) => _sensedTemperatureK.AgeS(nowUs);
 
@@ -97,6 +114,36 @@ internal sealed class AirDataStage(FlightSettings settings)
         return true;
     }
 
+    /// <summary>
+    /// Takes the pressure of a total-energy probe. Its air is the air at the newest static pressure, or without one the air at the
+    /// probe's own pressure, which for the height over which pressure falls is as good.
+    /// </summary>
+    public bool TrySetProbe(long timeUs, double sensedPa, out Air air)
+    {
+        air = Air;
+        if (!IsStaticFresh(timeUs) && !TryAir(timeUs, sensedPa, out air))
+        {
+            return false;
+        }
+
+        _probePa.Set(timeUs, sensedPa);
+        return true;
+    }
+
+    /// <summary>What the airspeed indicator would read at a true airspeed; false outside the subsonic range.</summary>
+    public bool TryIndicated(TrueAirspeed trueAirspeed, out IndicatedAirspeed indicated)
+    {
+        indicated = default;
+        if (!AirspeedConversion.TryImpactPressure(trueAirspeed, Air, out var impactPa)
+            || !AirspeedConversion.TryCalibrated(impactPa - _staticErrorPa, out var sensed))
+        {
+            return false;
+        }
+
+        indicated = new IndicatedAirspeed(sensed.Mps);
+        return true;
+    }
+
     private bool TryAir(long timeUs, double pressurePa, out Air air)
     {
         if (!IsTemperatureFresh(timeUs))
@@ -104,8 +151,7 @@ internal sealed class AirDataStage(FlightSettings settings)
             return Air.TryStandard(pressurePa, _offsetK, out air, out _);
         }
 
-        var humidity = _humidity.IsFresh(timeUs, PipelineBounds.TemperatureFreshnessUs) ? _humidity.Value : double.NaN;
-        if (!Air.TryMeasured(pressurePa, StaticTemperatureK(), humidity, out air, out _))
+        if (!Air.TryMeasured(pressurePa, StaticTemperatureK(), Humidity(timeUs), out air, out _))
         {
             return false;
         }

@@ -2,6 +2,9 @@ using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Pipeline.Stages;
 
+/// <summary>A load factor, g, with one standard deviation of it.</summary>
+internal readonly record struct LoadBelief(double Factor, double Sigma);
+
 /// <summary>
 /// Load factor from an accelerometer, else from the bank of a level turn, else assumed. The present load serves netto; the steady
 /// load, smoothed over a second, serves targets and phase, since a gust is no turn.
@@ -13,38 +16,60 @@ internal sealed class LoadStage
     /// <summary>Load factor of a 40-degree bank, the usual one in a thermal (common practice).</summary>
     public const double ThermallingLoad = 1.3054;
 
+    /// <summary>Noise and zero of a common accelerometer board together, g (the simulator's common to poor grade).</summary>
+    private const double LoadSensorSigma = 0.04;
+
+    /// <summary>A bank known to 3 degrees in a usual turn, and a turn that is not quite level, g.</summary>
+    private const double BankSensorSigma = 0.08;
+
+    /// <summary>Thermalling turns are flown at 40 degrees give or take 8 (common practice): 1.18 to 1.49 g.</summary>
+    private const double ThermallingSigma = 0.15;
+
+    /// <summary>Pulls, pushes and bends of a glide (common practice): a 25-degree bank is 1.10 g, a gentle push 0.9 g.</summary>
+    private const double GlidingSigma = 0.1;
+
     private TimedValue _loadFactor;
     private TimedValue _bankRad;
+    private LoadFilter _loadFilter;
+    private LoadFilter _bankFilter;
     private double _steady = 1;
     private long _steadyTimeUs;
 
     public void SetLoadFactor(long timeUs, double loadFactor)
     {
         _loadFactor.Set(timeUs, loadFactor);
+        _loadFilter.Add(loadFactor);
         Smooth(timeUs, loadFactor);
     }
 
     public void SetBank(long timeUs, double bankRad)
     {
         _bankRad.Set(timeUs, bankRad);
+        _bankFilter.Add(1 / Math.Cos(bankRad));
         if (!_loadFactor.IsFresh(timeUs, PipelineBounds.FreshnessUs))
         {
             Smooth(timeUs, 1 / Math.Cos(bankRad));
         }
     }
 
-    /// <summary>Whether a sensor tells; without one the load is taken as 1.</summary>
+    /// <summary>Whether a sensor tells; without one the load is assumed.</summary>
     public bool IsMeasured(long nowUs) =>
         _loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs) || _bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs);
 
-    public double Present(long nowUs)
+    /// <summary>The load at this moment; without a sensor a usual one for what the glider does.</summary>
+    public LoadBelief Present(long nowUs, FlightPhase phase)
     {
         if (_loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs))
         {
-            return _loadFactor.Value;
+            return new LoadBelief(_loadFilter.Value, LoadSensorSigma);
         }
 
-        return _bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs) ? 1 / Math.Cos(_bankRad.Value) : 1;
+        if (_bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs))
+        {
+            return new LoadBelief(_bankFilter.Value, BankSensorSigma);
+        }
+
+        return phase == FlightPhase.Climbing ? new LoadBelief(ThermallingLoad, ThermallingSigma) : new LoadBelief(1, GlidingSigma);
     }
 
     /// <summary>Never below 1: a push-over is no reason to fly nearer the stall. Without a sensor, circling is taken as a usual turn.</summary>

@@ -12,8 +12,11 @@ internal sealed class PictureStage
 {
     private const double AverageSpanS = 30;
 
-    /// <summary>No glider flies slower; a parked one in the wind may read less (40 km/h).</summary>
-    private const double SlowestFlightMps = 40 / 3.6;
+    /// <summary>While a receiver contradicts the pressures, vertical speeds are this much more doubtful, m/s: the speed at which they part.</summary>
+    private const double DisagreementMps = 1.25;
+
+    /// <summary>A thermometer in the sun reads some 3 K high (common practice); density altitude moves 36 m per K (ISO 2533, troposphere).</summary>
+    private const double SunK = 3, DensityAltitudeMPerK = 36;
 
     /// <summary>Handbook polars are measured to about this share of the sink (common practice: "a few per cent").</summary>
     private const double PolarUncertainty = 0.05;
@@ -47,14 +50,14 @@ internal sealed class PictureStage
     {
         var blank = CockpitPicture.Blank(nowUs, Faults.None) with { ExpectedClimbMps = _settings.ExpectedClimbMps };
         var picture = _airData.IsStaticFresh(nowUs) ? WithAir(blank, nowUs) : blank;
-        var isComplete = _airData.IsStaticFresh(nowUs) && _airData.IsAirspeedFresh(nowUs);
-        if (isComplete)
+        var estimate = _energy.EstimateAt(nowUs);
+        picture = WithClimb(picture, estimate, nowUs);
+        if (IsComplete(nowUs))
         {
-            picture = WithTargets(WithMotion(picture, nowUs), nowUs);
+            picture = WithTargets(WithAirspeed(picture, estimate, nowUs), nowUs);
         }
         else
         {
-            _history.Add(double.NaN);
             _targets.Reset();
         }
 
@@ -73,36 +76,58 @@ internal sealed class PictureStage
     {
         var air = _airData.Air;
         var ageS = _airData.StaticAgeS(nowUs);
+        var sunK = (_events.At(nowUs) & Faults.ThermometerDoubtful) != 0 ? SunK : double.NaN;
         var temperatureAgeS = air.TemperatureSource == TemperatureSource.Measured ? _airData.TemperatureAgeS(nowUs) : ageS;
         return picture with
         {
             PressureAltitudeM = new Gauge(air.PressureAltitudeM, double.NaN, ageS),
-            DensityAltitudeM = new Gauge(air.DensityAltitudeM, double.NaN, ageS),
-            TemperatureK = new Gauge(air.TemperatureK, double.NaN, temperatureAgeS),
+            DensityAltitudeM = new Gauge(air.DensityAltitudeM, sunK * DensityAltitudeMPerK, ageS),
+            TemperatureK = new Gauge(air.TemperatureK, sunK, temperatureAgeS),
             TemperatureSource = air.TemperatureSource,
         };
     }
 
-    private CockpitPicture WithMotion(in CockpitPicture picture, long nowUs)
+    private bool IsComplete(long nowUs) => _airData.IsStaticFresh(nowUs) && _airData.IsAirspeedFresh(nowUs);
+
+    /// <summary>Climb rests on static pressure and airspeed, or on a total-energy probe alone.</summary>
+    private CockpitPicture WithClimb(in CockpitPicture picture, in EnergyEstimate estimate, long nowUs)
     {
-        var ageS = AgeS(nowUs);
-        var estimate = _energy.EstimateAt(nowUs);
+        var ageS = Math.Min(IsComplete(nowUs) ? AgeS(nowUs) : double.PositiveInfinity,
+            _airData.IsProbeFresh(nowUs) ? _airData.ProbeAgeS(nowUs) : double.PositiveInfinity);
+        if (double.IsInfinity(ageS))
+        {
+            _history.Add(double.NaN);
+            return picture;
+        }
+
         _history.Add(estimate.EnergyHeightM);
         var average = _history.AverageClimbMps(AverageSpanS);
-        var climb = estimate.IsKnown ? new Gauge(estimate.ClimbMps, estimate.ClimbSigmaMps, ageS) : Gauge.Blank;
-        var moved = picture with
+        var isContradicted = (_events.At(nowUs) & (Faults.StaticDisagrees | Faults.AirspeedDisagrees)) != 0;
+        var sigma = isContradicted ? Math.Sqrt(estimate.ClimbSigmaMps * estimate.ClimbSigmaMps + DisagreementMps * DisagreementMps) : estimate.ClimbSigmaMps;
+        return picture with
         {
-            ClimbMps = climb,
+            ClimbMps = estimate.IsKnown ? new Gauge(estimate.ClimbMps, sigma, ageS) : Gauge.Blank,
             AverageClimbMps = double.IsNaN(average) ? Gauge.Blank : new Gauge(average, double.NaN, ageS),
         };
-        return _airData.TryAirspeeds(nowUs, out var indicated, out var trueAirspeed)
-            ? moved with
-            {
-                IndicatedAirspeedMps = new Gauge(indicated.Mps, double.NaN, ageS),
-                TrueAirspeedMps = new Gauge(trueAirspeed.Mps, double.NaN, ageS),
-                NettoMps = Netto(nowUs, climb, trueAirspeed, _airData.Air),
-            }
-            : moved;
+    }
+
+    private CockpitPicture WithAirspeed(in CockpitPicture picture, in EnergyEstimate estimate, long nowUs)
+    {
+        if (!_airData.TryAirspeeds(nowUs, out var indicated, out var trueAirspeed))
+        {
+            return picture;
+        }
+
+        // Sink is bent: at a gusty airspeed it would come out too high, and the pilot has no use for a gust either.
+        var smooth = double.IsFinite(estimate.TrueAirspeedMps) ? new TrueAirspeed(estimate.TrueAirspeedMps) : trueAirspeed;
+        var ageS = AgeS(nowUs);
+        return picture with
+        {
+            IndicatedAirspeedMps = new Gauge(indicated.Mps, double.NaN, ageS),
+            TrueAirspeedMps = new Gauge(trueAirspeed.Mps, double.NaN, ageS),
+            SmoothIndicatedAirspeedMps = _airData.TryIndicated(smooth, out var steady) ? new Gauge(steady.Mps, double.NaN, ageS) : Gauge.Blank,
+            NettoMps = Netto(nowUs, picture.ClimbMps, smooth, ageS),
+        };
     }
 
     private CockpitPicture WithTargets(in CockpitPicture picture, long nowUs)
@@ -123,23 +148,30 @@ internal sealed class PictureStage
     }
 
     /// <summary>In flight, netto goes blank where the polar ends; standing on the ground is no fault.</summary>
-    private static bool IsOutsidePolar(in CockpitPicture picture) =>
+    private bool IsOutsidePolar(in CockpitPicture picture) =>
         picture.ClimbMps.IsKnown && !picture.NettoMps.IsKnown && picture.IndicatedAirspeedMps.IsKnown
-        && picture.IndicatedAirspeedMps.Value > SlowestFlightMps;
+        && _airData.IsFlying(picture.TimeUs);
 
     /// <summary>A number that rests on both inputs is as old as the older of them.</summary>
     private double AgeS(long nowUs) => Math.Max(_airData.StaticAgeS(nowUs), _airData.AirspeedAgeS(nowUs));
 
-    /// <summary>Netto is the climb with the glider's own sink added back; its doubt is the climb's and the polar's together.</summary>
-    private Gauge Netto(long nowUs, in Gauge climb, TrueAirspeed airspeed, in Air air)
+    /// <summary>Netto is the climb with the glider's own sink added back; its doubt is the climb's, the polar's and the load's together.</summary>
+    private Gauge Netto(long nowUs, in Gauge climb, TrueAirspeed airspeed, double ageS)
     {
-        if (!climb.IsKnown || !_targets.TrySink(airspeed, air, Math.Max(0, _load.Present(nowUs)), out var sinkMps))
+        var air = _airData.Air;
+        var load = _load.Present(nowUs, _phase.Phase);
+        var factor = Math.Max(0, load.Factor);
+        if (!climb.IsKnown || !_targets.TrySink(airspeed, air, factor, out var sinkMps))
         {
             return Gauge.Blank;
         }
 
         var polarSigma = PolarUncertainty * sinkMps;
-        return climb with { Value = climb.Value + sinkMps, Sigma = Math.Sqrt(climb.Sigma * climb.Sigma + polarSigma * polarSigma) };
+        // Near the stall the polar may end within the doubt of the load; then the other side tells.
+        var loadSigma = _targets.TrySink(airspeed, air, factor + load.Sigma, out var otherMps)
+            || _targets.TrySink(airspeed, air, Math.Max(0, factor - load.Sigma), out otherMps) ? otherMps - sinkMps : sinkMps;
+        var sigma = Math.Sqrt(climb.Sigma * climb.Sigma + polarSigma * polarSigma + loadSigma * loadSigma);
+        return new Gauge(climb.Value + sinkMps, sigma, ageS);
     }
 
     /// <summary>The circle's sink is as doubtful as the polar, and so adds to the doubt of the air's motion.</summary>

@@ -16,6 +16,9 @@ internal struct TimedValue
         TimeUs = timeUs;
     }
 
+    /// <summary>The value turned out not to be known any later than this.</summary>
+    public void TakeBackTo(long timeUs) => TimeUs = Math.Min(TimeUs, timeUs);
+
     public readonly bool IsFresh(long nowUs, long limitUs) => _has && nowUs - TimeUs <= limitUs;
 
     public readonly double AgeS(long nowUs) => (nowUs - TimeUs) * 1e-6;

@@ -1,3 +1,5 @@
+using System.Globalization;
+using System.Text;
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Pipeline;
@@ -7,11 +9,15 @@ using SpeedCommand.Sentences;
 namespace SpeedCommand.Replay.Igc;
 
 /// <summary>
-/// Feeds an IGC file to a pipeline: each fix becomes one sentence of a stream named "igc", stamped with the time since the first fix,
-/// with static pressure, indicated airspeed and temperature as far as the fix has them. Nothing is made up between fixes.
+/// Feeds an IGC file to a pipeline: each fix becomes sentences of a stream named "igc", stamped with the time since the first fix: static
+/// pressure, indicated airspeed and temperature as far as the fix has them, and the receiver's height. Nothing is made up between
+/// fixes.
 /// </summary>
 public sealed class IgcReplay : IReplay
 {
+    private const double SecondsPerDay = 86_400;
+    private const int LineEndLength = 2;
+
     private static readonly byte[] Talker = [.. "IG"u8];
 
     private readonly IgcReader _file;
@@ -65,12 +71,29 @@ public sealed class IgcReplay : IReplay
         {
             _pipeline.Accept(fix.TimeUs, _stream, _sentence.AsSpan(0, length));
         }
-        else
+
+        if (fix.IsThreeDimensional && SentenceWriter.TryWrite(_sentence, Position(fix), out var written))
         {
-            _pipeline.AdvanceTo(fix.TimeUs);
+            _pipeline.Accept(fix.TimeUs, _stream, _sentence.AsSpan(0, written - LineEndLength));
         }
 
+        _pipeline.AdvanceTo(fix.TimeUs);
         return true;
+    }
+
+    /// <summary>The receiver's part as a GGA sentence, against which the pipeline checks the pressure.</summary>
+    private static byte[] Position(in IgcFix fix)
+    {
+        var time = TimeSpan.FromSeconds(fix.TimeOfDayS % SecondsPerDay);
+        return Encoding.ASCII.GetBytes(string.Create(CultureInfo.InvariantCulture,
+            $"IGGGA,{time:hhmmss\\.ff},{Angle(fix.LatitudeRad, "00")},{(fix.LatitudeRad < 0 ? 'S' : 'N')},{Angle(fix.LongitudeRad, "000")},{(fix.LongitudeRad < 0 ? 'W' : 'E')},1,,,{fix.GnssAltitudeM:0.0},M,,M,,"));
+    }
+
+    private static string Angle(double angleRad, string degreeFormat)
+    {
+        var thousandths = (long)Math.Round(Math.Abs(double.RadiansToDegrees(angleRad)) * 60_000);
+        return (thousandths / 60_000).ToString(degreeFormat, CultureInfo.InvariantCulture)
+            + (thousandths % 60_000 / 1000.0).ToString("00.000", CultureInfo.InvariantCulture);
     }
 
     /// <summary>Writes the fix as a sentence without its line end; 0 when it has nothing for the pipeline.</summary>
@@ -94,7 +117,7 @@ public sealed class IgcReplay : IReplay
             measurements[count++] = new XdrMeasurement(ReadingKind.IndicatedAirspeedMps, indicatedMps, 3);
         }
 
-        return count > 0 && SentenceWriter.TryWriteXdr(_sentence, Talker, measurements[..count], out var written) ? written - 2 : 0;
+        return count > 0 && SentenceWriter.TryWriteXdr(_sentence, Talker, measurements[..count], out var written) ? written - LineEndLength : 0;
     }
 
     /// <summary>As recorded, else from the true airspeed in the air of this height and temperature.</summary>

@@ -39,6 +39,7 @@ public static class FlightSettingsReader
         var recovery = source.Quantity("thermometerRecovery", QuantityKind.Fraction, 0, 0, 1);
         var staticLag = source.Quantity("staticLag", QuantityKind.Duration, 0, 0, 2);
         var impactLag = source.Quantity("impactLag", QuantityKind.Duration, 0, 0, 2);
+        var probeLag = source.Quantity("probeLag", QuantityKind.Duration, 0, 0, 2);
         var phase = source.Word("phase", PhaseWords, PhaseWords[0]);
         var safetyHeight = source.Quantity("safetyHeight", QuantityKind.Length, 300, -500, 9000);
         return glider is null ? null : new FlightSettings(glider)
@@ -51,6 +52,7 @@ public static class FlightSettingsReader
             ThermometerRecovery = recovery,
             StaticLagS = staticLag,
             ImpactLagS = impactLag,
+            ProbeLagS = probeLag,
             ForcedPhase = phase switch
             {
                 "climbing" => FlightPhase.Climbing,

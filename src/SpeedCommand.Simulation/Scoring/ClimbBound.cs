@@ -11,7 +11,8 @@ namespace SpeedCommand.Simulation.Scoring;
 /// <summary>
 /// The least error of the climb that any estimator can have on a linear-Gaussian scenario: the steady-state covariance of
 /// the Kalman filter that knows the simulated model and its parameters. The model is the simulator's, linearised about the
-/// steady glide: turbulence, pilot, sink by airspeed and load, gusts, pneumatic lags, sampled sensors. Thermals,
+/// steady glide: turbulence, pilot, sink by airspeed and load, gusts, pneumatic lags, sampled sensors (a total-energy probe counts as
+/// one without an error of its own). Thermals,
 /// waves and changes of speed enter as random walks as lively as they are on average; for such flights the figure is a
 /// yardstick, not a bound.
 /// </summary>
@@ -20,8 +21,8 @@ public static class ClimbBound
     private const double G = StandardAtmosphere.StandardGravityMps2;
 
     // States: energy height, vertical turbulence, pilot's wander, airspeed, acceleration, jerk, gust, lagged height, lagged
-    // kinetic height, the climb of thermals and waves; all but the first as departures from the steady glide.
-    private const int E = 0, W = 1, Wander = 2, V = 3, A = 4, J = 5, Gust = 6, SlowH = 7, SlowK = 8, Staying = 9, Count = 10;
+    // kinetic height, the climb of thermals and waves, what a total-energy probe feels; all but the first as departures from the steady glide.
+    private const int E = 0, W = 1, Wander = 2, V = 3, A = 4, J = 5, Gust = 6, SlowH = 7, SlowK = 8, Staying = 9, SlowP = 10, Count = 11;
 
     /// <summary>The bound.</summary>
     /// <param name="scenario">The scenario.</param>
@@ -49,11 +50,10 @@ public static class ClimbBound
         densities[Staying] = liveliness.ClimbDensity;
         densities[A] = liveliness.KineticDensity * G * G / (speed * speed);
         var metresPerPa = 1 / (air.DensityKgPerM3 * G);
-        var sensors = new[]
-        {
-            Sampled(scenario, ReadingKind.StaticPressurePa, SlowH, metresPerPa),
-            Sampled(scenario, ReadingKind.ImpactPressurePa, SlowK, metresPerPa),
-        };
+        (ReadingKind Kind, int State)[] channels =
+            [(ReadingKind.StaticPressurePa, SlowH), (ReadingKind.ImpactPressurePa, SlowK), (ReadingKind.TotalEnergyProbePa, SlowP)];
+        var sensors = channels.Where(channel => scenario.Sensors.Any(sensor => sensor.Kind == channel.Kind))
+            .Select(channel => Sampled(scenario, channel.Kind, channel.State, metresPerPa)).ToArray();
         return Math.Sqrt(new CovarianceCycle(rates, densities, sensors).MeanVarianceOf(climb));
     }
 
@@ -85,12 +85,14 @@ public static class ClimbBound
         var lagK = LagOf(scenario, ReadingKind.ImpactPressurePa);
         (rates[SlowH, E], rates[SlowH, V], rates[SlowH, SlowH]) = (1 / lagH, -kinetic / lagH, -1 / lagH);
         (rates[SlowK, V], rates[SlowK, Gust], rates[SlowK, SlowK]) = (kinetic / lagK, kinetic / lagK, -1 / lagK);
+        var lagP = LagOf(scenario, ReadingKind.TotalEnergyProbePa);
+        (rates[SlowP, E], rates[SlowP, Gust], rates[SlowP, SlowP]) = (1 / lagP, kinetic / lagP, -1 / lagP);
         return (rates, densities);
     }
 
     /// <summary>A lag of nothing is one too short to matter.</summary>
     private static double LagOf(Scenario scenario, ReadingKind kind) =>
-        Math.Max(0.005, scenario.Sensors.First(sensor => sensor.Kind == kind).LagS);
+        Math.Max(0.005, scenario.Sensors.FirstOrDefault(sensor => sensor.Kind == kind)?.LagS ?? 0);
 
     private static SampledState Sampled(Scenario scenario, ReadingKind kind, int state, double metresPerPa)
     {

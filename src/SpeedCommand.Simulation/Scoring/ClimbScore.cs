@@ -9,8 +9,10 @@ namespace SpeedCommand.Simulation.Scoring;
 /// <param name="Within1">Share of errors inside one sigma.</param>
 /// <param name="Within2">Share of errors inside two sigma.</param>
 /// <param name="ErrorOverSigma2">Mean of (error/sigma)²: 1 when sigma is honest.</param>
+/// <param name="InnovationSquared">Mean of the samples' (surprise/expected)²: 1 when the noise is known; NaN from an estimator that has no innovations.</param>
 public readonly record struct ClimbScore(
-    int Count, double BlankShare, double RmsMps, double BiasMps, double LagS, double Within1, double Within2, double ErrorOverSigma2)
+    int Count, double BlankShare, double RmsMps, double BiasMps, double LagS, double Within1, double Within2, double ErrorOverSigma2,
+    double InnovationSquared)
 {
     /// <summary>An instrument is judged once it has had this long to wake up, s.</summary>
     public const double WarmUpS = 30;
@@ -23,7 +25,7 @@ public readonly record struct ClimbScore(
     {
         ArgumentNullException.ThrowIfNull(flights);
         int count = 0, blank = 0, within1 = 0, within2 = 0;
-        double sum = 0, squares = 0, normalised = 0;
+        double sum = 0, squares = 0, normalised = 0, surprises = 0;
         var lag = new LagFinder();
         foreach (var flight in flights)
         {
@@ -47,6 +49,7 @@ public readonly record struct ClimbScore(
                 sum += error;
                 squares += error * error;
                 normalised += ratio * ratio;
+                surprises += point.InnovationsSquared[candidate];
                 within1 += Math.Abs(ratio) <= 1 ? 1 : 0;
                 within2 += Math.Abs(ratio) <= 2 ? 1 : 0;
             }
@@ -55,6 +58,7 @@ public readonly record struct ClimbScore(
         }
 
         double n = count;
-        return new ClimbScore(count, blank / (n + blank), Math.Sqrt(squares / n), sum / n, lag.LagS, within1 / n, within2 / n, normalised / n);
+        return new ClimbScore(count, blank / (n + blank), Math.Sqrt(squares / n), sum / n, lag.LagS, within1 / n, within2 / n, normalised / n,
+            surprises / n);
     }
 }

@@ -8,10 +8,13 @@ public static class EstimatorCatalogue
     /// <summary>All of them; the first is the one flown.</summary>
     public static IReadOnlyList<NamedEstimator> All { get; } =
     [
-        new("adaptive", (heightLagS, kineticLagS) => new AdaptiveEnergyEstimator(heightLagS, kineticLagS)),
-        new("adaptive-no-lag", (_, _) => new AdaptiveEnergyEstimator()),
-        new("plain", (_, _) => new EnergyHeightFilter()),
-        new("canary", (_, _) => new HeightOnlyCanary()),
+        new("adaptive", lags => new AdaptiveEnergyEstimator(lags)),
+        new("adaptive-no-lag", _ => new AdaptiveEnergyEstimator()),
+        new("adaptive-no-probe", lags => new SomeChannels(new AdaptiveEnergyEstimator(lags), channel => channel != EnergyChannel.Probe)),
+        new("adaptive-probe-only", lags => new SomeChannels(new AdaptiveEnergyEstimator(lags), channel => channel == EnergyChannel.Probe)),
+        new("adaptive-probe-static", lags => new SomeChannels(new AdaptiveEnergyEstimator(lags), channel => channel != EnergyChannel.Kinetic)),
+        new("plain", _ => new EnergyHeightFilter()),
+        new("canary", _ => new HeightOnlyCanary()),
     ];
 
     /// <summary>Finds one.</summary>

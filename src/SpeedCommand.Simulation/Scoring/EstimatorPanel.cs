@@ -34,5 +34,23 @@ public sealed class EstimatorPanel(IReadOnlyList<IEnergyEstimator> candidates) :
     }
 
     /// <inheritdoc/>
+    public void AddProbeHeight(long timeUs, double probeHeightM)
+    {
+        foreach (var candidate in candidates)
+        {
+            candidate.AddProbeHeight(timeUs, probeHeightM);
+        }
+    }
+
+    /// <inheritdoc/>
+    public void AddSinkChange(double changeMps)
+    {
+        foreach (var candidate in candidates)
+        {
+            candidate.AddSinkChange(changeMps);
+        }
+    }
+
+    /// <inheritdoc/>
     public EnergyEstimate EstimateAt(long timeUs) => candidates[0].EstimateAt(timeUs);
 }

@@ -47,7 +47,8 @@ public sealed class EstimatorTrial : ISimulatedFlightSink, IPictureSink
     {
         _pipeline.AdvanceTo(truth.TimeUs);
         var timeUs = truth.TimeUs;
-        Points.Add(new ScoredPoint(truth, Array.ConvertAll(_candidates, candidate => candidate.EstimateAt(timeUs)), NettoMps));
+        Points.Add(new ScoredPoint(truth, Array.ConvertAll(_candidates, candidate => candidate.EstimateAt(timeUs)), NettoMps,
+            Array.ConvertAll(_candidates, candidate => candidate.NormalisedInnovationSquared)));
     }
 
     /// <inheritdoc/>

@@ -20,7 +20,7 @@ public static class LogScore
     {
         ArgumentNullException.ThrowIfNull(log);
         ArgumentNullException.ThrowIfNull(estimators);
-        var trial = new EstimatorTrial(new FlightSettings(glider), estimators.Select(estimator => estimator.Make(0, 0)));
+        var trial = new EstimatorTrial(new FlightSettings(glider), estimators.Select(estimator => estimator.Make(default)));
         while (log.TryRead(out var record))
         {
             if (record.Kind == LogRecordKind.Line)

@@ -1,3 +1,4 @@
+using SpeedCommand.Estimation.Energy;
 using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Sentences;
@@ -54,10 +55,12 @@ public static class ScenarioScore
 
     private static FlightSettings SettingsOf(Scenario scenario, Glider glider) => new(glider) { MassKg = scenario.MassKg };
 
-    private static IEnumerable<Estimation.Energy.IEnergyEstimator> Fresh(Scenario scenario, IReadOnlyList<NamedEstimator> estimators)
+    private static IEnumerable<IEnergyEstimator> Fresh(Scenario scenario, IReadOnlyList<NamedEstimator> estimators)
     {
         double LagOf(ReadingKind kind) => scenario.Sensors.FirstOrDefault(sensor => sensor.Kind == kind)?.LagS ?? 0;
-        return estimators.Select(estimator => estimator.Make(LagOf(ReadingKind.StaticPressurePa), LagOf(ReadingKind.ImpactPressurePa)));
+        var lags = new TubeLags(
+            LagOf(ReadingKind.StaticPressurePa), LagOf(ReadingKind.ImpactPressurePa), LagOf(ReadingKind.TotalEnergyProbePa));
+        return estimators.Select(estimator => estimator.Make(lags));
     }
 
     private static bool HasChance(Scenario scenario) =>

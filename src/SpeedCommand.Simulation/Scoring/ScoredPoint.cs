@@ -7,4 +7,5 @@ namespace SpeedCommand.Simulation.Scoring;
 /// <param name="Truth">The truth.</param>
 /// <param name="Estimates">The estimate of each candidate.</param>
 /// <param name="NettoMps">The pipeline's netto, with the first candidate's climb, m/s; NaN when blank.</param>
-public readonly record struct ScoredPoint(TruthSample Truth, EnergyEstimate[] Estimates, double NettoMps);
+/// <param name="InnovationsSquared">Each candidate's newest normalised innovation, squared; NaN from one that has none.</param>
+public readonly record struct ScoredPoint(TruthSample Truth, EnergyEstimate[] Estimates, double NettoMps, double[] InnovationsSquared);

@@ -1,5 +1,7 @@
 using System.Runtime.InteropServices;
 using System.Text;
+using SpeedCommand.Ports;
+using SpeedCommand.Ports.Linux;
 
 namespace SpeedCommand.Bench;
 
@@ -9,28 +11,23 @@ namespace SpeedCommand.Bench;
 /// </summary>
 internal sealed partial class PseudoTerminal : IDisposable
 {
-    private const int ReadWrite = 2, NoControllingTerminal = 0x100, CloseOnExec = 0x80000, NonBlocking = 0x800;
-    private const int WouldBlock = 11, Interrupted = 4;
-
-    /// <summary>Larger than any platform's terminal settings record.</summary>
-    private const int SettingsSize = 128;
-
     private int _master;
 
     /// <summary>Creates a pair.</summary>
     /// <exception cref="IOException">The system gives no pseudo-terminal.</exception>
     public PseudoTerminal()
     {
-        _master = OpenMaster(ReadWrite | NoControllingTerminal | CloseOnExec | NonBlocking);
+        _master = OpenMaster(
+            SystemCalls.ReadWrite | SystemCalls.NoControllingTerminal | SystemCalls.CloseOnExec | SystemCalls.NonBlocking);
         var name = new byte[128];
-        var settings = new byte[SettingsSize];
+        var settings = new byte[TerminalSettings.Size];
         Check(_master < 0 ? -1 : 0, "posix_openpt");
         Check(Grant(_master), "grantpt");
         Check(Unlock(_master), "unlockpt");
         Check(NameOf(_master, name, name.Length), "ptsname_r");
-        Check(GetSettings(_master, settings), "tcgetattr");
-        MakeRaw(settings);
-        Check(SetSettings(_master, 0, settings), "tcsetattr");
+        Check(SystemCalls.GetSettings(_master, settings), "tcgetattr");
+        SystemCalls.MakeRaw(settings);
+        Check(SystemCalls.SetSettings(_master, 0, settings), "tcsetattr");
         DevicePath = Encoding.UTF8.GetString(name, 0, Array.IndexOf(name, (byte)0));
     }
 
@@ -41,19 +38,19 @@ internal sealed partial class PseudoTerminal : IDisposable
     /// <param name="bytes">The bytes.</param>
     /// <returns>How many were taken: 0 when the line is full.</returns>
     /// <exception cref="IOException">The line is broken.</exception>
-    public int Write(ReadOnlySpan<byte> bytes) => Result(WriteBytes(_master, bytes, bytes.Length), "write");
+    public int Write(ReadOnlySpan<byte> bytes) => Result(SystemCalls.Write(_master, bytes, bytes.Length), "write");
 
     /// <summary>Reads what the other end has written.</summary>
     /// <param name="buffer">Where to.</param>
     /// <returns>How many bytes: 0 when there is nothing now, or nobody has the other end open.</returns>
-    public int Read(Span<byte> buffer) => Math.Max(0, (int)ReadBytes(_master, buffer, buffer.Length));
+    public int Read(Span<byte> buffer) => Math.Max(0, (int)SystemCalls.Read(_master, buffer, buffer.Length));
 
     /// <summary>Pulls the plug: the other end sees a hang-up.</summary>
     public void Dispose()
     {
         if (_master >= 0)
         {
-            _ = Close(_master);
+            _ = SystemCalls.Close(_master);
             _master = -1;
         }
     }
@@ -65,7 +62,7 @@ internal sealed partial class PseudoTerminal : IDisposable
             return (int)result;
         }
 
-        return Marshal.GetLastPInvokeError() is WouldBlock or Interrupted ? 0 : throw Fault(call);
+        return Marshal.GetLastPInvokeError() is PortFault.Again or PortFault.Interrupted ? 0 : throw Fault(call);
     }
 
     private static void Check(int result, string call)
@@ -89,22 +86,4 @@ internal sealed partial class PseudoTerminal : IDisposable
 
     [LibraryImport("libc", EntryPoint = "ptsname_r", SetLastError = true)]
     private static partial int NameOf(int master, [Out] byte[] name, nint length);
-
-    [LibraryImport("libc", EntryPoint = "tcgetattr", SetLastError = true)]
-    private static partial int GetSettings(int terminal, [Out] byte[] settings);
-
-    [LibraryImport("libc", EntryPoint = "cfmakeraw")]
-    private static partial void MakeRaw([In, Out] byte[] settings);
-
-    [LibraryImport("libc", EntryPoint = "tcsetattr", SetLastError = true)]
-    private static partial int SetSettings(int terminal, int when, [In] byte[] settings);
-
-    [LibraryImport("libc", EntryPoint = "write", SetLastError = true)]
-    private static partial nint WriteBytes(int file, ReadOnlySpan<byte> bytes, nint count);
-
-    [LibraryImport("libc", EntryPoint = "read", SetLastError = true)]
-    private static partial nint ReadBytes(int file, Span<byte> bytes, nint count);
-
-    [LibraryImport("libc", EntryPoint = "close", SetLastError = true)]
-    private static partial int Close(int file);
 }

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using SpeedCommand.Ports;
+using SpeedCommand.Ports.Listening;
 using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
@@ -12,7 +13,7 @@ internal static class CheckCommand
     {
         var settings = SettingsOptions.File();
         var with = SettingsOptions.With();
-        var port = new Option<string?>("--port") { Description = "Listen to this port only.", HelpName = "NAME" };
+        var port = new Option<string?>("--port") { Description = "Listen to this port only, and show its lines beside what they mean.", HelpName = "NAME" };
         var seconds = new Option<double>("--seconds")
         {
             Description = "How long to listen to the ports, 0.1 to 600.",
@@ -58,7 +59,10 @@ internal static class CheckCommand
         }
 
         var isFolderGood = settings.Recorder is null || CheckFolder(settings.Recorder.Folder);
-        var status = await ListenAsync(settings.Ports, portName, TimeSpan.FromSeconds(seconds), cancel).ConfigureAwait(false);
+        var length = TimeSpan.FromSeconds(seconds);
+        var status = portName is null
+            ? await ListenToAllAsync(settings, length, cancel).ConfigureAwait(false)
+            : await ListenToOneAsync(settings, portName, length, cancel).ConfigureAwait(false);
         return isFolderGood ? status : ExitStatus.InputOutput;
     }
 
@@ -80,31 +84,43 @@ internal static class CheckCommand
     }
 
     /// <summary>All ports at once: a pilot checks a cockpit, not a cable.</summary>
-    private static async Task<int> ListenAsync(IReadOnlyList<PortSettings> ports, string? portName, TimeSpan length, CancellationToken cancel)
+    private static async Task<int> ListenToAllAsync(CockpitSettings settings, TimeSpan length, CancellationToken cancel)
     {
-        var chosen = ports.Where(port => portName is null || port.Name == portName).Select(port => new PortListening(port)).ToArray();
-        if (chosen.Length == 0)
-        {
-            await Console.Error.WriteLineAsync($"--port: expected one of {string.Join(", ", ports.Select(port => port.Name))}, found '{portName}'")
-                .ConfigureAwait(false);
-            return ExitStatus.Usage;
-        }
-
-        var good = await Task.WhenAll(chosen.Select(port => port.ListenAsync(length, cancel))).ConfigureAwait(false);
-        foreach (var port in chosen)
+        var ports = settings.Ports.Select(port => new PortListening(port)).ToArray();
+        var good = await Task.WhenAll(ports.Select(port => port.ListenAsync(SerialDrivers.Reader(settings.Serial), length, cancel))).ConfigureAwait(false);
+        foreach (var port in ports)
         {
             Console.WriteLine(port.Verdict);
         }
 
-        if (portName is null)
-        {
-            TellMissing(chosen);
-        }
-
+        TellSources(ports);
         return good.All(isGood => isGood) ? ExitStatus.Done : ExitStatus.InputOutput;
     }
 
-    private static void TellMissing(PortListening[] ports)
+    /// <summary>One port, line by line: for whoever builds a board.</summary>
+    private static async Task<int> ListenToOneAsync(CockpitSettings settings, string name, TimeSpan length, CancellationToken cancel)
+    {
+        if (settings.Ports.FirstOrDefault(port => port.Name == name) is not { } chosen)
+        {
+            await Console.Error.WriteLineAsync($"--port: expected one of {string.Join(", ", settings.Ports.Select(port => port.Name))}, found '{name}'")
+                .ConfigureAwait(false);
+            return ExitStatus.Usage;
+        }
+
+        var printer = new LinePrinter(Console.Out);
+        var port = new PortListening(chosen, printer);
+        var isGood = await port.ListenAsync(SerialDrivers.Reader(settings.Serial), length, cancel).ConfigureAwait(false);
+        if (port.Counts.Seconds > 0)
+        {
+            PortSummary.Write(Console.Out, port, printer.LeftOut);
+        }
+
+        Console.WriteLine(port.Verdict);
+        return isGood ? ExitStatus.Done : ExitStatus.InputOutput;
+    }
+
+    /// <summary>What no port sends, and what two send: readings of two sensors, taken in turn, look like noise.</summary>
+    private static void TellSources(PortListening[] ports)
     {
         var kinds = ports.SelectMany(port => port.Kinds).ToHashSet();
         if (!kinds.Contains(ReadingKind.StaticPressurePa))
@@ -115,6 +131,15 @@ internal static class CheckCommand
         if (!kinds.Contains(ReadingKind.ImpactPressurePa) && !kinds.Contains(ReadingKind.IndicatedAirspeedMps))
         {
             Console.WriteLine("missing: no airspeed (IMPACT or IAS) from any port; without it every target stays blank");
+        }
+
+        foreach (var kind in kinds.Order())
+        {
+            var senders = ports.Where(port => port.Kinds.Contains(kind)).Select(port => port.Settings.Name).ToArray();
+            if (senders.Length > 1)
+            {
+                Console.WriteLine($"twice: {ReadingWords.Name(kind)} comes from {string.Join(" and ", senders)}; both are taken as one sensor, so silence all but the best");
+            }
         }
     }
 }

@@ -1,5 +1,6 @@
 using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Service;
 
@@ -16,9 +17,12 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time, ILo
 
     private static readonly TimeSpan LongestWithoutPicture = TimeSpan.FromSeconds(1);
 
+    /// <summary>Half a picture: pictures come a little early or late, and every second one shall stay every second one.</summary>
+    private static readonly TimeSpan Tolerance = TimeSpan.FromMicroseconds(PipelineBounds.PicturePeriodUs / 2);
+
     private const Faults Silence = Faults.StaticSilent | Faults.AirspeedSilent | Faults.TemperatureSilent;
 
-    /// <summary>Time between two frames.</summary>
+    /// <summary>Time between two frames; a frame is sent when its picture is made.</summary>
     protected abstract TimeSpan FramePeriod { get; }
 
     protected override async Task ExecuteAsync(CancellationToken stoppingToken)
@@ -41,24 +45,46 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time, ILo
 
     private async Task ShowPicturesAsync(CancellationToken stop)
     {
-        var shown = 0L;
-        var shownAt = time.GetTimestamp();
-        while (!stop.IsCancellationRequested)
+        var bell = latest.AddBell();
+        var shown = default(CockpitPicture);
+        var shownAt = (long?)null;
+        while (await NextPictureAsync(bell, stop).ConfigureAwait(false) is { } isNew)
         {
-            if (latest.TryGet(out var picture, out var count) && count != shown)
+            if (isNew && latest.TryGet(out var picture, out _))
             {
-                (shown, shownAt) = (count, time.GetTimestamp());
-                await ShowAsync(picture, stop).ConfigureAwait(false);
+                if (shownAt is null || time.GetElapsedTime(shownAt.Value) > FramePeriod - Tolerance || TakesAway(shown, picture))
+                {
+                    (shown, shownAt) = (picture, time.GetTimestamp());
+                    await ShowAsync(picture, stop).ConfigureAwait(false);
+                }
             }
-            else if (shown > 0 && time.GetElapsedTime(shownAt) > LongestWithoutPicture)
+            else if (shownAt is not null)
             {
                 // The pipeline makes pictures even when every port is silent; if it does not, nothing on the display is true.
-                await ShowAsync(CockpitPicture.Blank(picture.TimeUs, Silence), stop).ConfigureAwait(false);
+                shown = CockpitPicture.Blank(shown.TimeUs, Silence);
+                await ShowAsync(shown, stop).ConfigureAwait(false);
             }
-
-            await PauseAsync(FramePeriod, stop).ConfigureAwait(false);
         }
     }
+
+    /// <summary>Whether a new picture came; false when none did for too long, null when the service stops.</summary>
+    private static async ValueTask<bool?> NextPictureAsync(SemaphoreSlim bell, CancellationToken stop)
+    {
+        try
+        {
+            return await bell.WaitAsync(LongestWithoutPicture, stop).ConfigureAwait(false);
+        }
+        catch (OperationCanceledException)
+        {
+            return null;
+        }
+    }
+
+    /// <summary>A number that is no longer true goes at once, whatever the display's pace.</summary>
+    private static bool TakesAway(in CockpitPicture shown, in CockpitPicture next) =>
+        (next.Faults & ~shown.Faults & Silence) != 0
+        || (shown.HoldIndicatedMps.IsKnown && !next.HoldIndicatedMps.IsKnown)
+        || (shown.SpeedToFlyIndicatedMps.IsKnown && !next.SpeedToFlyIndicatedMps.IsKnown);
 
     protected abstract ValueTask ShowCautionAsync(CancellationToken stop);
 

@@ -1,8 +1,8 @@
-using System.IO.Ports;
 using Microsoft.Extensions.Logging;
 using SpeedCommand.Displays;
 using SpeedCommand.Displays.Characters;
 using SpeedCommand.Displays.Readings;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports;
 using SpeedCommand.Service;
@@ -15,19 +15,17 @@ internal sealed class SerialTextService(
     SerialTextSettings serialText, LatestPicture latest, CockpitSettings settings, TimeProvider time, ILogger<SerialTextService> log)
     : DisplayLoop(latest, time, log)
 {
-    /// <summary>A frame takes a tenth of a second at 9600 baud; a display that takes nothing for this long is stuck.</summary>
-    private const int WriteLimitMs = 500;
-
     private static readonly TimeSpan ReopenDelay = TimeSpan.FromSeconds(1);
 
     private readonly CharacterText20x4 _text = new(settings.Units);
     private readonly SpeedSteadier _steadier = new(settings.Units.Speed);
     private readonly byte[] _frame = new byte[CharacterText20x4.Length];
-    private SerialPort? _port;
+    private readonly IDisplayLine _line = SerialDrivers.Display(serialText, settings.Serial);
     private string _lastComplaint = "";
 
-    /// <summary>What 9600 baud carries with room to spare.</summary>
-    protected override TimeSpan FramePeriod => TimeSpan.FromMilliseconds(250);
+    /// <summary>Whole pictures, and at most half of what the line carries: 200 ms at 9600 baud, 100 ms from 19200 on.</summary>
+    protected override TimeSpan FramePeriod { get; } = TimeSpan.FromMicroseconds(PipelineBounds.PicturePeriodUs
+        * Math.Ceiling(2e6 * CharacterText20x4.Length * serialText.Framing.BitsPerByte / serialText.Baud / PipelineBounds.PicturePeriodUs));
 
     protected override ValueTask ShowCautionAsync(CancellationToken stop) => SendAsync(CautionText.RenderCharacters20x4(_frame), stop);
 
@@ -38,44 +36,24 @@ internal sealed class SerialTextService(
     {
         _frame[0] = (byte)'\f';
         await SendAsync(1, CancellationToken.None).ConfigureAwait(false);
-        if (_port is { } port)
-        {
-            await SerialPorts.CloseAsync(port).ConfigureAwait(false);
-        }
+        await _line.DisposeAsync().ConfigureAwait(false);
     }
 
     private async ValueTask SendAsync(int length, CancellationToken stop)
     {
-        try
+        if (await _line.TryWriteAsync(_frame.AsMemory(0, length)).ConfigureAwait(false) is { } complaint)
         {
-            if (_port is null)
+            if (complaint != _lastComplaint)
             {
-                _port = SerialPorts.Open(serialText.Device, serialText.Baud);
-                _port.WriteTimeout = WriteLimitMs;
+                log.LogWarning("character display: {Complaint}", complaint);
             }
 
-            _port.Write(_frame, 0, length);
-            _lastComplaint = "";
-        }
-        catch (Exception fault) when (SerialPorts.IsPortFault(fault) || fault is TimeoutException)
-        {
-            Complain(fault is TimeoutException ? $"{serialText.Device}: takes no more characters" : PortFault.Explain(serialText.Device, fault));
-            if (_port is { } port)
-            {
-                _port = null;
-                await SerialPorts.CloseAsync(port).ConfigureAwait(false);
-            }
-
+            _lastComplaint = complaint;
             await PauseAsync(ReopenDelay, stop).ConfigureAwait(false);
         }
-    }
-
-    private void Complain(string complaint)
-    {
-        if (complaint != _lastComplaint)
+        else
         {
-            log.LogWarning("character display: {Complaint}", complaint);
-            _lastComplaint = complaint;
+            _lastComplaint = "";
         }
     }
 }

@@ -1,31 +1,42 @@
 using System.Globalization;
 using System.Runtime.InteropServices;
+using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Ports;
 
-/// <summary>
-/// Says why a port does not open and how to mend it. System.IO.Ports throws UnauthorizedAccessException for everything and
-/// hides the cause in the inner message, so the file itself is asked.
-/// </summary>
+/// <summary>Says why a port does not open and how to mend it.</summary>
 internal static partial class PortFault
 {
-    public static string Explain(string device, Exception fault)
+    /// <summary>Errors of Linux, errno(3).</summary>
+    internal const int NotPermitted = 1, NoSuchFile = 2, Interrupted = 4, InputOutput = 5, NoSuchAddress = 6, Again = 11, AccessDenied = 13,
+        Busy = 16, NoSuchDevice = 19, IsFolder = 21, InvalidArgument = 22, NotATerminal = 25;
+
+    /// <summary>Judges a failed open(2), flock(2), tcgetattr(3) or tcsetattr(3).</summary>
+    /// <param name="device">The device as the settings name it.</param>
+    /// <param name="path">The path that led to.</param>
+    /// <param name="error">The error's number.</param>
+    /// <param name="baud">The rate asked for.</param>
+    public static PortTrouble Explain(string device, string path, int error, int baud)
     {
-        var cause = fault.InnerException?.Message ?? fault.Message;
-        if (!File.Exists(device))
+        var name = path == device ? device : $"{device} ({path})";
+        return error switch
         {
-            return $"{device}: no such device; is it plugged in? 'ls -l /dev/serial/by-id' lists those that are";
-        }
+            NoSuchFile or NoSuchDevice or NoSuchAddress => new PortTrouble(Faults.PortMissing,
+                $"{name}: no such device; is it plugged in? 'ls -l {DeviceNames.StandardLinkFolder}' lists those that are"),
+            NotPermitted or AccessDenied => new PortTrouble(Faults.PortRefused, NoPermission(name, path)),
+            Busy or Again => new PortTrouble(Faults.PortRefused,
+                $"{name}: in use, by another program or under another name in these settings; 'fuser -v {path}' names the program"),
+            NotATerminal or IsFolder => new PortTrouble(Faults.PortRefused,
+                $"{name}: is {(Directory.Exists(path) ? "a folder" : "a file")}, expected a serial device such as /dev/ttyUSB0"),
+            InvalidArgument => new PortTrouble(Faults.PortRefused, $"{name}: the device refuses {baud} baud or the framing asked for"),
+            _ => new PortTrouble(Faults.PortRefused, $"{name}: cannot be opened as a serial port: {Marshal.GetPInvokeErrorMessage(error)}"),
+        };
+    }
 
-        if (cause.Contains("ermission denied", StringComparison.Ordinal))
-        {
-            var group = GroupOf(device);
-            return $"{device}: no permission; its group is '{group}': run 'sudo usermod -aG {group} $USER', then log in again";
-        }
-
-        return cause.Contains("busy", StringComparison.OrdinalIgnoreCase)
-            ? $"{device}: in use by another program; 'fuser -v {device}' names it"
-            : $"{device}: cannot be opened as a serial port: {cause}";
+    private static string NoPermission(string name, string path)
+    {
+        var group = GroupOf(path);
+        return $"{name}: no permission; its group is '{group}': run 'sudo usermod -aG {group} $USER', then log in again";
     }
 
     /// <summary>Name of the group that owns a file, or its number when it has no name.</summary>

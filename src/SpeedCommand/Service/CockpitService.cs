@@ -52,14 +52,16 @@ internal static class CockpitService
         builder.Services.Configure<ConsoleLifetimeOptions>(options => options.SuppressStatusMessages = true);
         builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = TimeSpan.FromSeconds(5));
         var clock = new CockpitClock(TimeProvider.System, pace);
-        var latest = new LatestPicture();
+        var ports = (flight is null ? settings.Ports : PortsOf(flight)).ToArray();
+        var states = Array.ConvertAll(ports, port => new PortState(port.Name));
+        var latest = new LatestPicture(states);
         builder.Services
             .AddSingleton(TimeProvider.System)
             .AddSingleton(settings)
             .AddSingleton(clock)
             .AddSingleton(latest)
             .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, flight, clock, services), [latest, .. extraSinks]));
-        AddPorts(builder.Services, flight is null ? settings.Ports : PortsOf(flight));
+        AddPorts(builder.Services, settings, ports, states);
         builder.Services.AddHostedService<PictureTicker>();
         AddDisplays(builder.Services, settings, isPanelShown);
         if (flight is not null)
@@ -74,17 +76,10 @@ internal static class CockpitService
     private static IEnumerable<PortSettings> PortsOf(BenchFlight flight) => flight.Lines.Select(line =>
         new PortSettings(line.Key, line.Value.DevicePath, 115_200, Sentences.ChecksumRule.Required));
 
-    private static void AddPorts(IServiceCollection services, IEnumerable<PortSettings> ports)
-    {
-        var states = new List<PortState>();
-        services.AddSingleton<IReadOnlyList<PortState>>(states);
-        foreach (var port in ports)
-        {
-            var state = new PortState(port.Name);
-            states.Add(state);
-            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<SerialPortReader>(provider, port, state));
-        }
-    }
+    private static void AddPorts(IServiceCollection services, CockpitSettings settings, PortSettings[] ports, PortState[] states) =>
+        services.AddSingleton<IReadOnlyList<PortState>>(states).AddSingleton<IHostedService>(provider => new PortService(
+            SerialDrivers.Reader(settings.Serial),
+            ports.Zip(states, (port, state) => ActivatorUtilities.CreateInstance<PortIntake>(provider, port, state))));
 
     private static void AddDisplays(IServiceCollection services, CockpitSettings settings, bool isPanelShown)
     {

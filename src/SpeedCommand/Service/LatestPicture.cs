@@ -1,14 +1,19 @@
 using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Ports;
 
 namespace SpeedCommand.Service;
 
-/// <summary>The newest picture, for displays that look when they please: a slow one misses pictures, it never delays them.</summary>
-internal sealed class LatestPicture : IPictureSink
+/// <summary>
+/// The newest picture, with the faults that only the service knows of: closed ports, a stopped recorder. A slow display misses
+/// pictures, it never delays them.
+/// </summary>
+internal sealed class LatestPicture(IReadOnlyList<PortState> ports) : IPictureSink
 {
     private readonly Lock _gate = new();
+    private readonly List<SemaphoreSlim> _bells = [];
     private CockpitPicture _picture;
     private long _count;
-    private Faults _hostFaults;
+    private Faults _recorderFault;
 
     /// <summary>Every fault that any picture of this flight has named.</summary>
     public Faults FaultsSeen { get; private set; }
@@ -18,17 +23,41 @@ internal sealed class LatestPicture : IPictureSink
     {
         lock (_gate)
         {
-            _hostFaults |= Faults.RecorderStopped;
+            _recorderFault = Faults.RecorderStopped;
+        }
+    }
+
+    /// <summary>A bell for one display, rung with each new picture; several rings without a listener count as one.</summary>
+    public SemaphoreSlim AddBell()
+    {
+        lock (_gate)
+        {
+            var bell = new SemaphoreSlim(0, 1);
+            _bells.Add(bell);
+            return bell;
         }
     }
 
     public void OnPicture(in CockpitPicture picture)
     {
+        var faults = picture.Faults;
+        for (var i = 0; i < ports.Count; i++)
+        {
+            faults |= ports[i].Fault;
+        }
+
         lock (_gate)
         {
-            _picture = picture with { Faults = picture.Faults | _hostFaults };
+            _picture = picture with { Faults = faults | _recorderFault };
             _count++;
             FaultsSeen |= _picture.Faults;
+            foreach (var bell in _bells)
+            {
+                if (bell.CurrentCount == 0)
+                {
+                    bell.Release();
+                }
+            }
         }
     }
 

@@ -10,26 +10,23 @@ internal sealed class PictureTicker(CockpitMachine machine, LatestPicture latest
 {
     private bool _isRecorderFaultTold;
 
-    /// <summary>Half a picture period: a due picture is late by no more than that.</summary>
-    private TimeSpan Period => TimeSpan.FromMicroseconds(PipelineBounds.PicturePeriodUs / 2 / clock.Pace);
-
     protected override async Task ExecuteAsync(CancellationToken stoppingToken)
     {
         var recording = Task.Run(() => DrainAsync(stoppingToken), CancellationToken.None);
-        using var timer = new PeriodicTimer(Period < TimeSpan.FromMilliseconds(1) ? TimeSpan.FromMilliseconds(1) : Period, time);
-        try
+        while (!stoppingToken.IsCancellationRequested)
         {
-            while (await timer.WaitForNextTickAsync(stoppingToken).ConfigureAwait(false))
-            {
-                machine.Tick();
-            }
-        }
-        catch (OperationCanceledException)
-        {
-            // The host stops.
+            await Task.Delay(UntilNextPicture(), time, stoppingToken).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing);
+            machine.Tick();
         }
 
         await recording.ConfigureAwait(false);
+    }
+
+    /// <summary>Up to the moment a picture is due, so that it is made on time even when no line follows; whole milliseconds, as timers are.</summary>
+    private TimeSpan UntilNextPicture()
+    {
+        var aheadUs = PipelineBounds.PicturePeriodUs - (clock.NowUs % PipelineBounds.PicturePeriodUs);
+        return TimeSpan.FromMilliseconds(Math.Ceiling(aheadUs / (1000 * clock.Pace)));
     }
 
     /// <summary>Twice the promised rate of once a second, so that a slow disk still keeps the promise.</summary>

@@ -1,5 +1,6 @@
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Ports;
 
 namespace SpeedCommand.Settings;
 
@@ -20,12 +21,20 @@ internal sealed record CockpitSettings(
     bool IsTerminalOn,
     SerialTextSettings? SerialText,
     RecorderSettings? Recorder,
-    string LogFile);
+    string LogFile)
+{
+    /// <summary>How serial lines are found and read.</summary>
+    public SerialSettings Serial { get; init; } = SerialSettings.Standard;
+}
 
 /// <summary>Port of a character display.</summary>
-/// <param name="Device">Path of the device.</param>
+/// <param name="Device">Path of the device, or "usb:" with its serial number.</param>
 /// <param name="Baud">Bits a second.</param>
-internal sealed record SerialTextSettings(string Device, int Baud);
+internal sealed record SerialTextSettings(string Device, int Baud)
+{
+    /// <summary>Data bits, parity, stop bits, flow control.</summary>
+    public LineFraming Framing { get; init; } = LineFraming.Standard;
+}
 
 /// <summary>Where flights are recorded.</summary>
 /// <param name="Folder">The folder; made when missing.</param>

@@ -1,5 +1,6 @@
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Ports;
 using SpeedCommand.Replay.Settings;
 using SpeedCommand.Sentences;
 
@@ -9,6 +10,7 @@ namespace SpeedCommand.Settings;
 internal static class CockpitSettingsReader
 {
     private static readonly string[] OnOff = ["on", "off"];
+    private static readonly string[] ReaderWords = ["portable", "poll"];
     private static readonly string[] ChecksumWords = ["required", "optional"];
     private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
     private const int Megabyte = 1 << 20;
@@ -21,6 +23,7 @@ internal static class CockpitSettingsReader
         var units = ReadUnits(source);
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
         var serialText = ReadSerialText(source, ports);
+        var serial = ReadSerial(source);
         var recorder = ReadRecorder(source);
         var logFile = source.Text("logFile")?.Text ?? "";
         source.ReportUnknown();
@@ -30,7 +33,7 @@ internal static class CockpitSettingsReader
         }
 
         var gliderName = Path.GetFileName(gliderOption ?? source.Find("glider")?.Text ?? gliderFallback ?? "");
-        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile);
+        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile) { Serial = serial };
     }
 
     private static List<PortSettings> ReadPorts(SettingsSource source, bool isNeeded)
@@ -41,10 +44,15 @@ internal static class CockpitSettingsReader
             var path = $"ports.{name}";
             var device = source.Text($"{path}.device");
             var baud = source.Integer($"{path}.baud", 115_200, 1_200, 4_000_000);
+            var framing = ReadFraming(source, $"{path}.framing");
             var rule = source.Word($"{path}.checksum", ChecksumWords, "required") == "required" ? ChecksumRule.Required : ChecksumRule.Optional;
             if (device is null || device.Text.Length == 0)
             {
-                source.Report(new SettingText("", source.File, 0, $"{path}.device"), "expected the path of a serial device, found none");
+                source.Report(new SettingText("", source.File, 0, $"{path}.device"), "expected the path of a serial device or 'usb:SERIAL', found none");
+            }
+            else if (device.Text == DeviceNames.SerialPrefix)
+            {
+                source.Report(device, $"expected a serial number after '{DeviceNames.SerialPrefix}', found none");
             }
             else if (!IsStreamName(name))
             {
@@ -60,7 +68,7 @@ internal static class CockpitSettingsReader
             }
             else
             {
-                ports.Add(new PortSettings(name, device.Text, baud, rule));
+                ports.Add(new PortSettings(name, device.Text, baud, rule) { Framing = framing });
             }
         }
 
@@ -111,7 +119,32 @@ internal static class CockpitSettingsReader
             source.Report(device, $"expected a device of its own, found that of port '{taken.Name}'");
         }
 
-        return device is null ? null : new SerialTextSettings(device.Text, baud);
+        var framing = ReadFraming(source, "displays.serialText.framing");
+        return device is null ? null : new SerialTextSettings(device.Text, baud) { Framing = framing };
+    }
+
+    private static LineFraming ReadFraming(SettingsSource source, string path)
+    {
+        var framing = LineFraming.Standard;
+        if (source.Find(path) is { } text && !LineFraming.TryParse(text.Text, out framing, out var problem))
+        {
+            source.Report(text, problem);
+        }
+
+        return framing;
+    }
+
+    private static SerialSettings ReadSerial(SettingsSource source)
+    {
+        var standard = SerialSettings.Standard;
+        var reader = source.Word("serial.reader", ReaderWords, ReaderWords[(int)standard.Reader]);
+        var folder = source.Text("serial.linkFolder")?.Text ?? standard.LinkFolder;
+        if (reader == "poll" && !OperatingSystem.IsLinux())
+        {
+            source.Report(source.Find("serial.reader")!, "expected portable on this system, found 'poll', which needs Linux");
+        }
+
+        return new SerialSettings((PortReaderKind)Array.IndexOf(ReaderWords, reader), folder);
     }
 
     private static RecorderSettings? ReadRecorder(SettingsSource source)

@@ -22,8 +22,10 @@ public class FaultWordsTests
     [InlineData(Faults.TemperatureSilent, "no temperature")]
     [InlineData(Faults.BadLines, "unreadable data")]
     [InlineData(Faults.NoLimits, "no speed limits")]
+    [InlineData(Faults.PortMissing, "board unplugged")]
+    [InlineData(Faults.PortRefused, "port refused")]
     [InlineData(Faults.RecorderStopped, "not recording")]
-    [InlineData((Faults)(1 << 20), "unknown fault")]
+    [InlineData((Faults)(1 << 30), "unknown fault")]
     [InlineData(Faults.None, "unknown fault")]
     public void Of_OneFault_SaysIt(Faults fault, string words) => Assert.Equal(words, FaultWords.Of(fault));
 

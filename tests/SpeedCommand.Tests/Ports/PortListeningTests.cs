@@ -1,9 +1,11 @@
 using SpeedCommand.Bench;
+using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports;
+using SpeedCommand.Ports.Listening;
 using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
-namespace SpeedCommand.Tests;
+namespace SpeedCommand.Tests.Ports;
 
 /// <summary>What check says of a port, for each thing that can be wrong with one.</summary>
 public sealed class PortListeningTests
@@ -14,7 +16,7 @@ public sealed class PortListeningTests
     {
         using var line = new PseudoTerminal();
         var listening = new PortListening(new PortSettings("static", line.DevicePath, 115_200, ChecksumRule.Required));
-        var result = listening.ListenAsync(TimeSpan.FromSeconds(1), CancellationToken.None);
+        var result = listening.ListenAsync(SerialDrivers.Reader(SerialSettings.Standard), TimeSpan.FromSeconds(1), CancellationToken.None);
         for (var i = 0; i < 10; i++)
         {
             await Task.Delay(50);
@@ -45,7 +47,7 @@ public sealed class PortListeningTests
     {
         var (isGood, verdict) = await ListenAsync([0x80, 0xFE, (byte)'\n', 0x00, 0x1C]);
         Assert.False(isGood);
-        Assert.Contains("no valid line; is 115200 baud what the board sends at?", verdict, StringComparison.Ordinal);
+        Assert.Contains("no valid line, and 80 % of them are no text; is 115200 baud what the board sends at?", verdict, StringComparison.Ordinal);
     }
 
     [LinuxFact]
@@ -98,11 +100,12 @@ public sealed class PortListeningTests
 
     [Theory]
     [InlineData("/no/such/device", "no such device; is it plugged in?")]
-    [InlineData("/etc/passwd", "cannot be opened as a serial port")]
+    [InlineData("/etc/passwd", "is a file, expected a serial device")]
+    [InlineData("/etc", "is a folder, expected a serial device")]
     public async Task DeviceThatDoesNotOpen_SaysWhy(string device, string expected)
     {
         var listening = new PortListening(new PortSettings("static", device, 9600, ChecksumRule.Required));
-        Assert.False(await listening.ListenAsync(TimeSpan.FromSeconds(1), CancellationToken.None));
+        Assert.False(await listening.ListenAsync(SerialDrivers.Reader(SerialSettings.Standard), TimeSpan.FromSeconds(1), CancellationToken.None));
         Assert.Contains(expected, listening.Verdict, StringComparison.Ordinal);
     }
 
@@ -111,7 +114,8 @@ public sealed class PortListeningTests
     {
         var group = PortFault.GroupOf("/etc/shadow");
         Assert.Equal("shadow", group);
-        var fault = new UnauthorizedAccessException("Access to the port is denied.", new IOException("Permission denied"));
-        Assert.Contains("its group is 'shadow': run 'sudo usermod -aG shadow $USER'", PortFault.Explain("/etc/shadow", fault), StringComparison.Ordinal);
+        var trouble = PortFault.Explain("/etc/shadow", "/etc/shadow", PortFault.AccessDenied, 9600);
+        Assert.Equal(Faults.PortRefused, trouble.Fault);
+        Assert.Contains("its group is 'shadow': run 'sudo usermod -aG shadow $USER'", trouble.Text, StringComparison.Ordinal);
     }
 }
