@@ -53,13 +53,14 @@ public sealed class CompareCommandTests : IDisposable
         DeskConsole.Run("export", _log, "--to", stored);
         var lines = File.ReadAllLines(stored);
         var at = Array.FindIndex(lines, line => line.StartsWith("{\"t\":20.0,", StringComparison.Ordinal));
+        // Below ten degrees here, so that a digit in front makes it ten more.
         lines[at] = lines[at].Replace("\"temperatureC\":", "\"temperatureC\":1", StringComparison.Ordinal);
         File.WriteAllLines(stored, lines.Where((_, index) => index != at + 10));
         var (status, output, _) = Compare("--against", stored);
         Assert.Equal(1, status);
         Assert.Contains(", 1 only in the first, 0 only in the second: different", output, StringComparison.Ordinal);
         var row = output.TrimEnd().Split('\n')[3].Split(' ', StringSplitOptions.RemoveEmptyEntries);
-        Assert.Equal(["temperatureC", "1", "0", "100", "20.0"], row[..5]);
+        Assert.Equal(["temperatureC", "1", "0", "10", "20.0"], row[..5]);
         Assert.Equal(4, output.TrimEnd().Split('\n').Length);
     }
 
