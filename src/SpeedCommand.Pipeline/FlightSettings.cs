@@ -39,4 +39,10 @@ public sealed record FlightSettings(Glider Glider)
 
     /// <summary>Pressure altitude that endurance and range are counted down to, m; default 300.</summary>
     public double SafetyHeightM { get; init; } = 300;
+
+    /// <summary>
+    /// How long a pressure or airspeed counts as fresh, microseconds; default <see cref="PipelineBounds.FreshnessUs"/>. Not the pilot's
+    /// choice: only recordings that are slower than a cockpit's sensors have a longer one.
+    /// </summary>
+    public long FreshnessUs { get; init; } = PipelineBounds.FreshnessUs;
 }

@@ -8,31 +8,67 @@ namespace SpeedCommand.Sentences;
 /// </summary>
 public static class SentenceNumber
 {
+    /// <summary>Whole numbers of so many digits are exact doubles.</summary>
+    private const int MaxExactDigits = 15;
+
+    private static ReadOnlySpan<double> PowersOfTen => [1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15];
+
     /// <summary>Reads a whole field as a number.</summary>
     /// <param name="field">The field.</param>
     /// <param name="value">The nearest double, always finite; NaN when the field is not a number.</param>
     /// <returns>Whether the field is a number by the rule, and not too large for a double.</returns>
     public static bool TryRead(ReadOnlySpan<byte> field, out double value)
     {
-        if (IsWellFormed(field)
-            && double.TryParse(field, NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint,
-                CultureInfo.InvariantCulture, out value)
-            && double.IsFinite(value))
+        value = double.NaN;
+        var isNegative = field.Length > 0 && field[0] == '-';
+        var signLength = isNegative || (field.Length > 0 && field[0] == '+') ? 1 : 0;
+        if (!TryReadDigits(field[signLength..], out var digits, out var count, out var decimals))
         {
+            return false;
+        }
+
+        if (count <= MaxExactDigits)
+        {
+            // Both are exact doubles, so their quotient is the nearest double, as the standard parser would find at length.
+            var magnitude = digits / PowersOfTen[decimals];
+            value = isNegative ? -magnitude : magnitude;
             return true;
         }
 
-        value = double.NaN;
+        if (double.TryParse(field, NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out var parsed)
+            && double.IsFinite(parsed))
+        {
+            value = parsed;
+            return true;
+        }
+
         return false;
     }
 
-    private static bool IsWellFormed(ReadOnlySpan<byte> field)
+    /// <summary>Digits, and optionally a point with digits; the digits' value wraps around when there are too many.</summary>
+    private static bool TryReadDigits(ReadOnlySpan<byte> text, out ulong digits, out int count, out int decimals)
     {
-        var digits = field.Length > 0 && field[0] is (byte)'+' or (byte)'-' ? field[1..] : field;
-        var point = digits.IndexOf((byte)'.');
-        return point < 0 ? AreDigits(digits) : AreDigits(digits[..point]) && AreDigits(digits[(point + 1)..]);
-    }
+        (digits, count, decimals) = (0, 0, 0);
+        var point = -1;
+        for (var i = 0; i < text.Length; i++)
+        {
+            var digit = (uint)(text[i] - '0');
+            if (digit <= 9)
+            {
+                digits = unchecked(digits * 10 + digit);
+                count++;
+            }
+            else if (text[i] == '.' && point < 0 && i > 0)
+            {
+                point = i;
+            }
+            else
+            {
+                return false;
+            }
+        }
 
-    private static bool AreDigits(ReadOnlySpan<byte> text) =>
-        text.Length > 0 && !text.ContainsAnyExceptInRange((byte)'0', (byte)'9');
+        decimals = point < 0 ? 0 : text.Length - point - 1;
+        return count > 0 && point != text.Length - 1;
+    }
 }

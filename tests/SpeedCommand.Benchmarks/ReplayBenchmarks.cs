@@ -32,7 +32,7 @@ public class ReplayBenchmarks
     {
         using var log = FlightLogReader.Open(new MemoryStream(_log));
         var pipeline = new FlightPipeline(_settings, new PictureLines(Stream.Null));
-        new FlightReplay(log, pipeline, _ => ChecksumRule.Required).RunToEnd();
+        new FlightReplay(log, pipeline, _ => StreamSettings.Sentences(ChecksumRule.Required)).RunToEnd();
         return pipeline.TimeUs;
     }
 }

@@ -72,7 +72,7 @@ public sealed class FlightReplayTests
     {
         using var pictures = new MemoryStream();
         using var reader = FlightLogReader.Open(new MemoryStream(log));
-        new FlightReplay(reader, new FlightPipeline(new FlightSettings(Glider), new PictureLines(pictures)), _ => ChecksumRule.Required).RunToEnd();
+        new FlightReplay(reader, new FlightPipeline(new FlightSettings(Glider), new PictureLines(pictures)), _ => StreamSettings.Sentences(ChecksumRule.Required)).RunToEnd();
         Assert.Equal(0, reader.ProblemCount);
         return pictures.ToArray();
     }

@@ -16,6 +16,8 @@ internal static class DeskProgram
             ScoreCommand.Create(),
             GuidanceCommand.Create(),
             NoiseCommand.Create(),
+            CompareCommand.Create(),
+            ExportCommand.Create(),
         };
         var parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)

@@ -4,6 +4,10 @@ namespace SpeedCommand.Desk.Commands;
 internal enum ExitStatus
 {
     Done = 0,
+
+    /// <summary>Compared things differ, as diff and cmp have it.</summary>
+    Different = 1,
+
     Usage = 2,
     BadData = 65,
     NoInput = 66,

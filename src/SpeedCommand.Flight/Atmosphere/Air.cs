@@ -31,7 +31,8 @@ public readonly record struct Air
     public double PressureAltitudeM { get; private init; }
 
     /// <summary>Density altitude, geopotential m; NaN when no altitude of the standard atmosphere has this density.</summary>
-    public double DensityAltitudeM { get; private init; }
+    public double DensityAltitudeM =>
+        StandardAtmosphere.TryAltitudeOfDensity(DensityKgPerM3, out var altitudeM) ? altitudeM : double.NaN;
 
     /// <summary>Speed of sound, m/s: √(1.4 p/ρ), which for dry air is √(1.4 R T).</summary>
     public double SpeedOfSoundMps { get; private init; }
@@ -46,8 +47,17 @@ public readonly record struct Air
     /// <param name="air">The air; <c>default</c> when not known.</param>
     /// <param name="reason">Why it is not known.</param>
     /// <returns>Whether it is known.</returns>
-    public static bool TryMeasured(double pressurePa, double temperatureK, double relativeHumidity, out Air air, out AirInvalid reason) =>
-        TryMake(pressurePa, temperatureK, relativeHumidity, TemperatureSource.Measured, out air, out reason);
+    public static bool TryMeasured(double pressurePa, double temperatureK, double relativeHumidity, out Air air, out AirInvalid reason)
+    {
+        if (StandardAtmosphere.TryAltitudeOfPressure(pressurePa, out var altitudeM))
+        {
+            return TryMake(pressurePa, altitudeM, temperatureK, relativeHumidity, TemperatureSource.Measured, out air, out reason);
+        }
+
+        air = default;
+        reason = AirInvalid.PressureOutOfRange;
+        return false;
+    }
 
     /// <summary>Air without a thermometer: dry, the standard atmosphere's temperature at this pressure plus an offset.</summary>
     /// <param name="pressurePa">Static pressure, Pa, within the standard atmosphere from -2 km to 32 km.</param>
@@ -65,19 +75,19 @@ public readonly record struct Air
         }
 
         var temperatureK = StandardAtmosphere.TemperatureAtK(altitudeM) + temperatureOffsetK;
-        return TryMake(pressurePa, temperatureK, double.NaN, TemperatureSource.Standard, out air, out reason);
+        return TryMake(pressurePa, altitudeM, temperatureK, double.NaN, TemperatureSource.Standard, out air, out reason);
     }
 
+    /// <summary>Air of measured temperature where the pressure altitude of its pressure is known already.</summary>
+    internal static bool TryMeasuredAt(
+        double pressureAltitudeM, double pressurePa, double temperatureK, double relativeHumidity, out Air air) =>
+        TryMake(pressurePa, pressureAltitudeM, temperatureK, relativeHumidity, TemperatureSource.Measured, out air, out _);
+
     private static bool TryMake(
-        double pressurePa, double temperatureK, double relativeHumidity, TemperatureSource source, out Air air, out AirInvalid reason)
+        double pressurePa, double pressureAltitudeM, double temperatureK, double relativeHumidity, TemperatureSource source,
+        out Air air, out AirInvalid reason)
     {
         air = default;
-        if (!StandardAtmosphere.TryAltitudeOfPressure(pressurePa, out var pressureAltitudeM))
-        {
-            reason = AirInvalid.PressureOutOfRange;
-            return false;
-        }
-
         if (!(temperatureK >= LowestTemperatureK && temperatureK <= HighestTemperatureK))
         {
             reason = AirInvalid.TemperatureOutOfRange;
@@ -98,7 +108,6 @@ public readonly record struct Air
             TemperatureSource = source,
             DensityKgPerM3 = densityKgPerM3,
             PressureAltitudeM = pressureAltitudeM,
-            DensityAltitudeM = StandardAtmosphere.TryAltitudeOfDensity(densityKgPerM3, out var altitudeM) ? altitudeM : double.NaN,
             SpeedOfSoundMps = Math.Sqrt(StandardAtmosphere.HeatCapacityRatio * pressurePa / densityKgPerM3),
         };
         reason = AirInvalid.None;

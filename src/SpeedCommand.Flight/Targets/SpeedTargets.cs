@@ -145,6 +145,36 @@ public sealed class SpeedTargets
     }
 
     /// <summary>
+    /// What <see cref="MinSink"/> and <see cref="BestGlide"/> in air at rest come to, without the speeds: a glide is added up
+    /// from many of them.
+    /// </summary>
+    /// <param name="air">The air.</param>
+    /// <param name="loading">Mass, load factor, bugs.</param>
+    /// <param name="headwindMps">Headwind, m/s; negative for a tailwind.</param>
+    /// <param name="minSinkMps">Least sink, m/s, positive down; 0 when not known.</param>
+    /// <param name="glideRatio">Best ratio over the ground; NaN when no speed makes headway.</param>
+    /// <returns>Whether any speed is allowed.</returns>
+    internal bool TryGlide(in Air air, in Loading loading, double headwindMps, out double minSinkMps, out double glideRatio)
+    {
+        (minSinkMps, glideRatio) = (0, double.NaN);
+        if (!TryPrepare(air, loading, out var scale, out var bounds))
+        {
+            return false;
+        }
+
+        var polar = _glider.Polar;
+        minSinkMps = polar.SinkMps(polar.MinSinkAirspeedMps(bounds.LowMps, bounds.HighMps)) * scale.Sink;
+        var wind = headwindMps / scale.True;
+        if (wind < bounds.HighMps)
+        {
+            var flattest = polar.BestRatioAirspeedMps(0, wind, bounds.LowMps, bounds.HighMps);
+            glideRatio = (flattest * scale.True - headwindMps) / (polar.SinkMps(flattest) * scale.Sink);
+        }
+
+        return double.IsFinite(minSinkMps);
+    }
+
+    /// <summary>
     /// MacCready's speed to fly: the most cross-country speed when the next climb has the given strength. Where the air rises
     /// by more than climb setting and least sink together, going on slowly is as good as any glide gets: the least-sink speed.
     /// </summary>

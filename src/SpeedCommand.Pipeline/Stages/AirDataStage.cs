@@ -26,11 +26,11 @@ internal sealed class AirDataStage(FlightSettings settings)
 
     public double ProbeAgeS(long nowUs) => _probePa.AgeS(nowUs);
 
-    public bool IsProbeFresh(long nowUs) => _probePa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+    public bool IsProbeFresh(long nowUs) => _probePa.IsFresh(nowUs, settings.FreshnessUs);
 
-    public bool IsStaticFresh(long nowUs) => _staticPa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+    public bool IsStaticFresh(long nowUs) => _staticPa.IsFresh(nowUs, settings.FreshnessUs);
 
-    public bool IsAirspeedFresh(long nowUs) => _impactPa.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+    public bool IsAirspeedFresh(long nowUs) => _impactPa.IsFresh(nowUs, settings.FreshnessUs);
 
     public bool IsTemperatureFresh(long nowUs) => _sensedTemperatureK.IsFresh(nowUs, PipelineBounds.TemperatureFreshnessUs);
 

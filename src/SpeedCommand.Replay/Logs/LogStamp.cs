@@ -1,5 +1,3 @@
-using System.Buffers.Text;
-
 namespace SpeedCommand.Replay.Logs;
 
 /// <summary>Elapsed seconds with exactly six decimals, read as whole microseconds.</summary>
@@ -16,16 +14,20 @@ internal static class LogStamp
             return false;
         }
 
-        // The parsers would take a sign; digits alone they cannot refuse.
-        var whole = text[..point];
-        var fraction = text[(point + 1)..];
-        if (whole.ContainsAnyExceptInRange((byte)'0', (byte)'9') || fraction.ContainsAnyExceptInRange((byte)'0', (byte)'9')
-            || !Utf8Parser.TryParse(whole, out long seconds, out _) || !Utf8Parser.TryParse(fraction, out long microseconds, out _))
+        // By hand, since the parsers would take a sign, and every record has a stamp.
+        for (var i = 0; i < text.Length; i++)
         {
-            return false;
+            var digit = (uint)(text[i] - '0');
+            if (digit <= 9)
+            {
+                timeUs = timeUs * 10 + digit;
+            }
+            else if (i != point)
+            {
+                return false;
+            }
         }
 
-        timeUs = seconds * 1_000_000 + microseconds;
         return true;
     }
 }

@@ -1,7 +1,6 @@
 using System.Text;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Replay.Logs;
-using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Replay.Replaying;
 
@@ -9,21 +8,12 @@ namespace SpeedCommand.Replay.Replaying;
 /// Feeds a flight log to a pipeline exactly as the service fed it when the log was recorded. Time comes from the log alone:
 /// who wants a pace waits before each record.
 /// </summary>
-public sealed class FlightReplay
+public sealed class FlightReplay : IReplay
 {
     private readonly FlightLogReader _log;
     private readonly FlightPipeline _pipeline;
     private readonly Func<string, StreamSettings> _streams;
     private readonly List<byte[]> _names = [];
-
-    /// <summary>Puts a log of sentences in front of a pipeline.</summary>
-    /// <param name="log">The log, standing before its first record.</param>
-    /// <param name="pipeline">A new pipeline.</param>
-    /// <param name="rules">The checksum rule of each stream by name.</param>
-    public FlightReplay(FlightLogReader log, FlightPipeline pipeline, Func<string, ChecksumRule> rules)
-        : this(log, pipeline, name => StreamSettings.Sentences(rules(name)))
-    {
-    }
 
     /// <summary>Puts a log in front of a pipeline.</summary>
     /// <param name="log">The log, standing before its first record.</param>
@@ -36,13 +26,13 @@ public sealed class FlightReplay
         _streams = streams;
     }
 
-    /// <summary>Lines fed so far.</summary>
+    /// <inheritdoc/>
     public long LineCount { get; private set; }
 
-    /// <summary>Replays one record.</summary>
-    /// <param name="before">Called with the record's stamp before the pipeline sees it, to keep a pace; null for none.</param>
-    /// <returns>False at the end of the log.</returns>
-    /// <exception cref="IOException">The log cannot be read, or the pipeline's sink cannot be written.</exception>
+    /// <inheritdoc/>
+    public FlightPipeline Pipeline => _pipeline;
+
+    /// <inheritdoc/>
     public bool Step(Action<long>? before = null)
     {
         if (!_log.TryRead(out var record))

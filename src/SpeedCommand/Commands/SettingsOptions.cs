@@ -21,8 +21,10 @@ internal static class SettingsOptions
     };
 
     /// <summary>Opens the settings; false after telling what is wrong.</summary>
-    public static bool TryOpen(FileInfo? file, IReadOnlyList<string>? with, out SettingsSource source, out int exitStatus)
+    public static bool TryOpen(
+        FileInfo? file, IReadOnlyList<string>? with, out SettingsSource source, out int exitStatus, TextWriter? errors = null)
     {
+        errors ??= Console.Error;
         exitStatus = ExitStatus.BadSettings;
         var commandLine = new Dictionary<string, string>(StringComparer.Ordinal);
         foreach (var pair in with ?? [])
@@ -30,7 +32,7 @@ internal static class SettingsOptions
             var equals = pair.IndexOf('=');
             if (equals <= 0)
             {
-                Console.Error.WriteLine($"--with: expected NAME=VALUE, found '{pair}'");
+                errors.WriteLine($"--with: expected NAME=VALUE, found '{pair}'");
                 exitStatus = ExitStatus.Usage;
                 source = new SettingsSource(null, "", new Dictionary<string, string>(), commandLine);
                 return false;
@@ -45,7 +47,7 @@ internal static class SettingsOptions
             return true;
         }
 
-        Console.Error.WriteLine(problem);
+        errors.WriteLine(problem);
         exitStatus = System.IO.Path.Exists(path) ? ExitStatus.BadSettings : ExitStatus.NoInput;
         return false;
     }
@@ -62,11 +64,11 @@ internal static class SettingsOptions
     }
 
     /// <summary>Tells every fault, one a line.</summary>
-    public static void Tell(SettingsSource source)
+    public static void Tell(SettingsSource source, TextWriter? errors = null)
     {
         foreach (var problem in source.Problems)
         {
-            Console.Error.WriteLine(problem);
+            (errors ?? Console.Error).WriteLine(problem);
         }
     }
 

@@ -44,7 +44,7 @@ internal static class ExpectedOutput
         var flight = FlightSettingsReader.Read(source, null, records.Header.GliderFile);
         Assert.Empty(source.Problems);
         using var output = new MemoryStream();
-        new FlightReplay(records, new FlightPipeline(flight!, new PictureLines(output)), _ => ChecksumRule.Required).RunToEnd();
+        new FlightReplay(records, new FlightPipeline(flight!, new PictureLines(output)), _ => StreamSettings.Sentences(ChecksumRule.Required)).RunToEnd();
         return output.ToArray();
     }
 

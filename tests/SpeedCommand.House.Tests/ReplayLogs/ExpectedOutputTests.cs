@@ -1,4 +1,5 @@
 using System.Text;
+using SpeedCommand.Replay.Comparison;
 
 namespace SpeedCommand.House.Tests.ReplayLogs;
 
@@ -33,10 +34,13 @@ public class ExpectedOutputTests
             Assert.Fail($"{beside} was written anew because {RewriteVariable} is set; read the change and say in the commit why the numbers moved");
         }
 
-        var differences = GoldenComparer.Compare(ExpectedOutput.Read(beside), Encoding.UTF8.GetString(replayed)).ToList();
+        var differences = new List<OutputDifference>();
+        OutputComparison.Of(Lines(ExpectedOutput.Read(beside)), Lines(Encoding.UTF8.GetString(replayed)), onDifference: differences.Add);
         Assert.True(differences.Count == 0,
             $"{log}: {differences.Count} differences from {beside}, the first ones:\n{string.Join('\n', differences.Take(MaxDifferencesTold))}");
     }
+
+    private static string[] Lines(string text) => text.Split('\n', StringSplitOptions.RemoveEmptyEntries);
 
     [Theory]
     [MemberData(nameof(Logs))]

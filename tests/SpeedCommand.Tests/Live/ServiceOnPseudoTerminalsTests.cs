@@ -39,7 +39,7 @@ public sealed class ServiceOnPseudoTerminalsTests : IDisposable
         var record = Directory.GetFiles(_folder.FullName, "*Z-*.log").Single();
         using var replayed = new MemoryStream();
         using var log = FlightLogFile.Open(record);
-        var replay = new FlightReplay(log, new FlightPipeline(TestSettings.Flight, new PictureLines(replayed)), _ => ChecksumRule.Required);
+        var replay = new FlightReplay(log, new FlightPipeline(TestSettings.Flight, new PictureLines(replayed)), _ => StreamSettings.Sentences(ChecksumRule.Required));
         replay.RunToEnd();
         Assert.Equal(flight.LineCount, replay.LineCount);
         Assert.Equal(0, log.ProblemCount);

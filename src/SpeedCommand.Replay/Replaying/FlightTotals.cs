@@ -1,0 +1,30 @@
+using SpeedCommand.Pipeline.Picture;
+
+namespace SpeedCommand.Replay.Replaying;
+
+/// <summary>What a whole flight comes to, picked up from its pictures.</summary>
+public sealed class FlightTotals : IPictureSink
+{
+    /// <summary>Time of the last picture, microseconds since the start.</summary>
+    public long TimeUs { get; private set; }
+
+    /// <summary>Greatest pressure altitude, m; NaN when none was known.</summary>
+    public double MaxPressureAltitudeM { get; private set; } = double.NaN;
+
+    /// <summary>Greatest total-energy climb averaged over 30 s, m/s; NaN when none was known.</summary>
+    public double MaxAverageClimbMps { get; private set; } = double.NaN;
+
+    /// <summary>Every fault that occurred.</summary>
+    public Faults Faults { get; private set; }
+
+    /// <inheritdoc/>
+    public void OnPicture(in CockpitPicture picture)
+    {
+        TimeUs = picture.TimeUs;
+        Faults |= picture.Faults;
+        MaxPressureAltitudeM = Greater(MaxPressureAltitudeM, picture.PressureAltitudeM.Value);
+        MaxAverageClimbMps = Greater(MaxAverageClimbMps, picture.AverageClimbMps.Value);
+    }
+
+    private static double Greater(double greatest, double value) => value > greatest || double.IsNaN(greatest) ? value : greatest;
+}
