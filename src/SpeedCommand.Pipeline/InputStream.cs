@@ -26,7 +26,7 @@ internal sealed class InputStream(string name, StreamSettings settings)
     {
         var content = settings.Format.Read(line, readings);
         count = content.Count;
-        sampleUs = count == 0 ? arrivalUs : ClockOf(readings[0].Kind).StampOf(arrivalUs, TransmissionUs(line.Length), content.Mark, Health.BadLines);
+        sampleUs = count == 0 || settings.IsArrivalExact ? arrivalUs : ClockOf(readings[0].Kind).StampOf(arrivalUs, TransmissionUs(line.Length), content.Mark, Health.BadLines);
         Health.Lines++;
         Health.BadLines += content.IsSound ? 0 : 1;
         Health.Readings += count;

@@ -9,6 +9,9 @@ namespace SpeedCommand.Pipeline;
 /// </param>
 public sealed record StreamSettings(LineFormat Format, int Baud = 0)
 {
+    /// <summary>Whether a line is stamped at the moment of its sample, so that there is no delay to take out; default false.</summary>
+    public bool IsArrivalExact { get; init; }
+
     /// <summary>Sentences on a line of unknown speed.</summary>
     /// <param name="rule">Whether they may lack a checksum.</param>
     /// <returns>The settings.</returns>

@@ -1,9 +1,11 @@
 using System.CommandLine;
 using SpeedCommand.Desk.Exports;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Pictures;
+using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Desk.Commands;
 
@@ -43,7 +45,7 @@ internal static class ExportCommand
         }
 
         using var recording = flight.Open();
-        var settings = flight.ReadSettings(recording.GliderFile, out var rules);
+        var settings = flight.ReadSettings(recording.GliderFile, out var streams);
         foreach (var remark in recording.Remarks)
         {
             Console.Error.WriteLine($"{flight.Path}: {remark}");
@@ -57,7 +59,7 @@ internal static class ExportCommand
             _ => new PictureLines(stream),
         };
         using var ended = sink as IDisposable;
-        var replay = recording.Start(settings, sink, rules);
+        var replay = recording.Start(settings, sink, streams);
         while (replay.Step())
         {
         }
@@ -73,8 +75,7 @@ internal static class ExportCommand
         try
         {
             using var log = FlightLogFile.Open(flight.Path);
-            var rules = flight.SettingsFile is null ? _ => Sentences.ChecksumRule.Required : RulesOf(flight, log);
-            var count = IgcExport.Run(log, rules, () => new FileStream(to, FileMode.Create, FileAccess.Write));
+            var count = IgcExport.Run(log, StreamsOf(flight, log), () => new FileStream(to, FileMode.Create, FileAccess.Write));
             if (count == 0)
             {
                 throw new DeskFailure(ExitStatus.BadData, $"{flight.Path}: expected positions (RMC or GGA sentences with a fix), found none");
@@ -88,9 +89,15 @@ internal static class ExportCommand
         }
     }
 
-    private static Func<string, Sentences.ChecksumRule> RulesOf(FlightInput flight, FlightLogReader log)
+    /// <summary>Positions need no glider, so without settings none is asked for.</summary>
+    private static Func<string, StreamSettings> StreamsOf(FlightInput flight, FlightLogReader log)
     {
-        flight.ReadSettings(log.Header.GliderFile, out var rules);
-        return rules;
+        if (flight.SettingsFile is null)
+        {
+            return _ => StreamSettings.Sentences(ChecksumRule.Required);
+        }
+
+        flight.ReadSettings(log.Header.GliderFile, out var streams);
+        return streams;
     }
 }

@@ -12,7 +12,6 @@ namespace SpeedCommand.Desk.Commands;
 internal sealed record FlightInput(string Path, string? SettingsFile, string? Glider)
 {
     private static readonly Dictionary<string, string> Nothing = [];
-    private static readonly string[] ChecksumWords = ["required", "optional"];
 
     /// <summary>Opens the recording.</summary>
     /// <exception cref="DeskFailure">There is none, or it is not readable as one.</exception>
@@ -33,11 +32,11 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
         }
     }
 
-    /// <summary>Reads the settings; the checksum rules of the ports come with them.</summary>
+    /// <summary>Reads the settings; what the boards on the ports speak comes with them.</summary>
     /// <param name="gliderFallback">The glider the recording names.</param>
-    /// <param name="rules">The checksum rule of each stream.</param>
+    /// <param name="streams">What is to be known of each stream, by name.</param>
     /// <exception cref="DeskFailure">Something in them is wrong.</exception>
-    public FlightSettings ReadSettings(string gliderFallback, out Func<string, ChecksumRule> rules)
+    public FlightSettings ReadSettings(string gliderFallback, out Func<string, StreamSettings> streams)
     {
         if (SettingsFile is not null && !File.Exists(SettingsFile))
         {
@@ -50,9 +49,8 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
         }
 
         var flight = FlightSettingsReader.Read(source, Glider, gliderFallback);
-        var optional = source.NamedElements("ports")
-            .Where(name => source.Word($"ports.{name}.checksum", ChecksumWords, ChecksumWords[0]) == ChecksumWords[1]).ToHashSet(StringComparer.Ordinal);
-        rules = name => optional.Contains(name) ? ChecksumRule.Optional : ChecksumRule.Required;
+        var ports = source.NamedElements("ports").ToDictionary(name => name, name => StreamSettingsReader.Read(source, $"ports.{name}"), StringComparer.Ordinal);
+        streams = name => ports.GetValueOrDefault(name) ?? StreamSettings.Sentences(ChecksumRule.Required);
         return flight is null || source.HasErrors
             ? throw new DeskFailure(ExitStatus.BadSettings, [.. source.Problems.Where(one => !one.IsWarning).Select(one => one.ToString())])
             : flight;

@@ -10,9 +10,9 @@ internal static class ReplayedLines
     public static IEnumerable<string> Of(FlightInput flight)
     {
         using var recording = flight.Open();
-        var settings = flight.ReadSettings(recording.GliderFile, out var rules);
+        var settings = flight.ReadSettings(recording.GliderFile, out var streams);
         using var buffer = new MemoryStream();
-        var replay = recording.Start(settings, new PictureLines(buffer), rules);
+        var replay = recording.Start(settings, new PictureLines(buffer), streams);
         while (replay.Step())
         {
             if (buffer.Length == 0)

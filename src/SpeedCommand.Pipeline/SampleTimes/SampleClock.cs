@@ -25,6 +25,9 @@ internal sealed class SampleClock(SampleMark mark)
     /// <summary>The phase of a buffer of 16 ms against a board's clock hides up to 4 ms of either sign; more is a step, microseconds.</summary>
     private const double MaxErrorUs = 6_000;
 
+    /// <summary>More is not taken out: half of what the estimator takes from the past, and longer stalls are rare, microseconds.</summary>
+    private const double MostDelayUs = 250_000;
+
     /// <summary>Before it is settled the line may be wrong by more, microseconds.</summary>
     private const double MaxUnsettledErrorUs = 40_000;
 
@@ -93,7 +96,8 @@ internal sealed class SampleClock(SampleMark mark)
             _envelope.Add(x, y);
         }
 
-        return !IsSettled ? 0 : _numbers.IsLossLikely ? Math.Clamp(delayUs, 0, _envelope.UsualSpreadUs) : Math.Max(0, delayUs);
+        var mostUs = !IsSettled ? 0 : _numbers.IsLossLikely ? Math.Min(MostDelayUs, _envelope.UsualSpreadUs) : MostDelayUs;
+        return Math.Clamp(delayUs, 0, mostUs);
     }
 
     /// <summary>Sees to it that the line is not above this arrival, nor far below all recent ones.</summary>

@@ -18,7 +18,8 @@ public sealed class IgcExport
     private const long FreshUs = 2_000_000;
 
     private readonly FlightLogReader _log;
-    private readonly Func<string, ChecksumRule> _rules;
+    private readonly Func<string, StreamSettings> _streams;
+    private readonly Reading[] _readings = new Reading[LineFormat.MaxReadings];
     private readonly Func<Stream> _open;
     private IgcWriter? _writer;
     private Sensed _pressureAltitudeM = Sensed.Never, _indicatedMps = Sensed.Never, _temperatureK = Sensed.Never;
@@ -26,29 +27,29 @@ public sealed class IgcExport
     private IgcFix _epoch = new() { TimeOfDayS = double.NaN };
     private double _writtenS = double.NaN;
 
-    private IgcExport(FlightLogReader log, Func<string, ChecksumRule> rules, Func<Stream> open)
+    private IgcExport(FlightLogReader log, Func<string, StreamSettings> streams, Func<Stream> open)
     {
-        (_log, _rules, _open) = (log, rules, open);
+        (_log, _streams, _open) = (log, streams, open);
         _date = DateOnly.FromDateTime(log.Header.StartUtc.UtcDateTime);
     }
 
     /// <summary>Makes the file.</summary>
     /// <param name="log">The log, standing before its first record.</param>
-    /// <param name="rules">The checksum rule of each stream by name.</param>
+    /// <param name="streams">What is to be known of each stream, by name.</param>
     /// <param name="open">Opens the file to write, once the first position was found.</param>
     /// <returns>Fixes written; 0 when the log has no position, and then nothing was opened.</returns>
     /// <exception cref="IOException">The log cannot be read or the file not be written.</exception>
-    public static long Run(FlightLogReader log, Func<string, ChecksumRule> rules, Func<Stream> open)
+    public static long Run(FlightLogReader log, Func<string, StreamSettings> streams, Func<Stream> open)
     {
         ArgumentNullException.ThrowIfNull(log);
-        ArgumentNullException.ThrowIfNull(rules);
+        ArgumentNullException.ThrowIfNull(streams);
         ArgumentNullException.ThrowIfNull(open);
-        return new IgcExport(log, rules, open).Run();
+        return new IgcExport(log, streams, open).Run();
     }
 
     private long Run()
     {
-        var names = new Dictionary<string, ChecksumRule>(StringComparer.Ordinal);
+        var formats = new Dictionary<string, LineFormat>(StringComparer.Ordinal);
         while (_log.TryRead(out var record))
         {
             if (record.Kind != LogRecordKind.Line)
@@ -57,15 +58,12 @@ public sealed class IgcExport
             }
 
             var name = Encoding.ASCII.GetString(record.StreamName);
-            if (!names.TryGetValue(name, out var rule))
+            if (!formats.TryGetValue(name, out var format))
             {
-                names[name] = rule = _rules(name);
+                formats[name] = format = _streams(name).Format;
             }
 
-            if (SentenceReader.TryRead(record.Content, rule, out var sentence) == SentenceFault.None)
-            {
-                Take(record.TimeUs, sentence);
-            }
+            Take(record.TimeUs, record.Content, format);
         }
 
         WriteEpoch();
@@ -73,8 +71,10 @@ public sealed class IgcExport
         return _writer?.Count ?? 0;
     }
 
-    private void Take(long timeUs, in Sentence sentence)
+    /// <summary>Receivers always send checksums; what boards send is read as their stream's settings say.</summary>
+    private void Take(long timeUs, ReadOnlySpan<byte> line, LineFormat format)
     {
+        SentenceReader.TryRead(line, ChecksumRule.Required, out var sentence);
         if (RmcSentence.TryRead(sentence, out var rmc) && rmc.HasFix)
         {
             if (rmc.Date is { } date && _writer is null)
@@ -98,7 +98,8 @@ public sealed class IgcExport
         }
         else
         {
-            foreach (var reading in new XdrReadings(sentence))
+            var count = format.Read(line, _readings).Count;
+            foreach (ref readonly var reading in _readings.AsSpan(0, count))
             {
                 Take(timeUs, reading);
             }

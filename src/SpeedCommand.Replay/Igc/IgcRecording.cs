@@ -3,7 +3,6 @@ using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Replaying;
-using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Replay.Igc;
 
@@ -80,7 +79,7 @@ public sealed class IgcRecording : IRecording
     }
 
     /// <inheritdoc/>
-    public IReplay Start(FlightSettings settings, IPictureSink sink, Func<string, ChecksumRule> rules)
+    public IReplay Start(FlightSettings settings, IPictureSink sink, Func<string, StreamSettings> streams)
     {
         ArgumentNullException.ThrowIfNull(settings);
         var pipeline = new FlightPipeline(settings with { FreshnessUs = FreshnessUs }, sink);

@@ -13,18 +13,27 @@ public sealed class FlightReplay : IReplay
 {
     private readonly FlightLogReader _log;
     private readonly FlightPipeline _pipeline;
-    private readonly Func<string, ChecksumRule> _rules;
+    private readonly Func<string, StreamSettings> _streams;
     private readonly List<byte[]> _names = [];
 
-    /// <summary>Puts a log in front of a pipeline.</summary>
+    /// <summary>Puts a log of sentences in front of a pipeline.</summary>
     /// <param name="log">The log, standing before its first record.</param>
     /// <param name="pipeline">A new pipeline.</param>
     /// <param name="rules">The checksum rule of each stream by name.</param>
     public FlightReplay(FlightLogReader log, FlightPipeline pipeline, Func<string, ChecksumRule> rules)
+        : this(log, pipeline, name => StreamSettings.Sentences(rules(name)))
+    {
+    }
+
+    /// <summary>Puts a log in front of a pipeline.</summary>
+    /// <param name="log">The log, standing before its first record.</param>
+    /// <param name="pipeline">A new pipeline.</param>
+    /// <param name="streams">The settings of each stream by name.</param>
+    public FlightReplay(FlightLogReader log, FlightPipeline pipeline, Func<string, StreamSettings> streams)
     {
         _log = log;
         _pipeline = pipeline;
-        _rules = rules;
+        _streams = streams;
     }
 
     /// <inheritdoc/>
@@ -83,6 +92,6 @@ public sealed class FlightReplay : IReplay
 
         var text = Encoding.ASCII.GetString(name);
         _names.Add(name.ToArray());
-        return _pipeline.AddStream(text, _rules(text));
+        return _pipeline.AddStream(text, _streams(text));
     }
 }

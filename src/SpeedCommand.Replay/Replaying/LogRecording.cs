@@ -1,7 +1,6 @@
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
-using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Replay.Replaying;
 
@@ -18,8 +17,8 @@ internal sealed class LogRecording(FlightLogReader log) : IRecording
 
     public IReadOnlyList<string> Remarks => [];
 
-    public IReplay Start(FlightSettings settings, IPictureSink sink, Func<string, ChecksumRule> rules) =>
-        new FlightReplay(log, new FlightPipeline(settings, sink), rules);
+    public IReplay Start(FlightSettings settings, IPictureSink sink, Func<string, StreamSettings> streams) =>
+        new FlightReplay(log, new FlightPipeline(settings, sink), streams);
 
     public void Dispose() => log.Dispose();
 }

@@ -94,6 +94,26 @@ public sealed class SettingsSource
         return setting;
     }
 
+    /// <summary>A list of texts; on the command line and in the environment one text with commas between them.</summary>
+    /// <param name="path">The setting's path.</param>
+    /// <returns>Each text and where it stands; none when nothing sets it.</returns>
+    public IReadOnlyList<SettingText> Texts(string path)
+    {
+        if (InFile(path) is not { Kind: JsonPlaceKind.Array } list || IsOverridden(path))
+        {
+            return Text(path) is { } one ? [.. one.Text.Split(',').Select(part => one with { Text = part.Trim() })] : [];
+        }
+
+        _asked.Add(path);
+        foreach (var element in list.Elements.Where(element => element.Kind != JsonPlaceKind.Text))
+        {
+            Report(element, "expected a text in quotes");
+        }
+
+        return [.. list.Elements.Where(element => element.Kind == JsonPlaceKind.Text)
+            .Select((element, index) => new SettingText(element.Text, File, element.Line, $"{path}[{index}]"))];
+    }
+
     /// <summary>A quantity with a unit.</summary>
     /// <param name="path">The setting's path.</param>
     /// <param name="kind">What it measures.</param>
@@ -239,6 +259,8 @@ public sealed class SettingsSource
 
         return name.ToString();
     }
+
+    private bool IsOverridden(string path) => _commandLine.ContainsKey(path) || _environment.ContainsKey(EnvironmentName(path));
 
     private void Report(JsonPlace place, string message) => _problems.Add(new JsonProblem(File, place.Line, place.Path, message));
 

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.Text;
 using SpeedCommand.Ports;
 using SpeedCommand.Ports.Listening;
 using SpeedCommand.Sentences;
@@ -59,11 +60,27 @@ internal static class CheckCommand
         }
 
         var isFolderGood = settings.Recorder is null || CheckFolder(settings.Recorder.Folder);
+        var areSensorsGood = settings.IioDevices.Select(CheckSensor).ToList().TrueForAll(isGood => isGood);
         var length = TimeSpan.FromSeconds(seconds);
-        var status = portName is null
-            ? await ListenToAllAsync(settings, length, cancel).ConfigureAwait(false)
+        var status = settings.Ports.Count == 0 && portName is null ? ExitStatus.Done
+            : portName is null ? await ListenToAllAsync(settings, length, cancel).ConfigureAwait(false)
             : await ListenToOneAsync(settings, portName, length, cancel).ConfigureAwait(false);
-        return isFolderGood ? status : ExitStatus.InputOutput;
+        return isFolderGood && areSensorsGood ? status : ExitStatus.InputOutput;
+    }
+
+    private static bool CheckSensor(IioSettings settings)
+    {
+        try
+        {
+            using var device = new IioDevice(settings);
+            Console.WriteLine($"{settings.Name}: {device.Folder}: good: {Encoding.ASCII.GetString(device.Read())}");
+            return true;
+        }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            Console.WriteLine($"{settings.Name}: {fault.Message}");
+            return false;
+        }
     }
 
     private static bool CheckFolder(string folder)

@@ -4,7 +4,6 @@ using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Pictures;
 using SpeedCommand.Replay.Replaying;
-using SpeedCommand.Sentences;
 using SpeedCommand.Settings;
 
 namespace SpeedCommand.Replaying;
@@ -75,8 +74,7 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
             errors.WriteLine($"{path}: {remark}");
         }
 
-        var rules = settings.Ports.ToDictionary(port => port.Name, port => port.Checksum, StringComparer.Ordinal);
-        var replay = recording.Start(settings.Flight, new PictureFan([.. sinks]), name => rules.GetValueOrDefault(name, ChecksumRule.Required));
+        var replay = recording.Start(settings.Flight, new PictureFan([.. sinks]), settings.StreamOf);
         var pacer = new Pacer(TimeProvider.System, request.Pace, cancel);
         while (!cancel.IsCancellationRequested && replay.Step(pacer.IsPaced ? pacer.WaitUntil : null))
         {

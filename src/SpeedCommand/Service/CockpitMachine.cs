@@ -3,7 +3,6 @@ using SpeedCommand.Displaying;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Recording;
-using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Service;
 
@@ -31,12 +30,12 @@ internal sealed class CockpitMachine : IDisposable
 
     public FlightRecorder? Recorder => _recorder;
 
-    public int AddStream(string name, ChecksumRule rule)
+    public int AddStream(string name, StreamSettings settings)
     {
         lock (_gate)
         {
             _streamNames.Add(Encoding.ASCII.GetBytes(name));
-            return _pipeline.AddStream(name, rule);
+            return _pipeline.AddStream(name, settings);
         }
     }
 

@@ -52,8 +52,9 @@ internal static class CockpitService
         builder.Services.Configure<ConsoleLifetimeOptions>(options => options.SuppressStatusMessages = true);
         builder.Services.Configure<HostOptions>(options => options.ShutdownTimeout = TimeSpan.FromSeconds(5));
         var clock = new CockpitClock(TimeProvider.System, pace);
-        var ports = (flight is null ? settings.Ports : PortsOf(flight)).ToArray();
-        var states = Array.ConvertAll(ports, port => new PortState(port.Name));
+        var ports = (flight is null ? settings.Ports : PortsOf(flight, settings)).ToArray();
+        var sensors = flight is null ? settings.IioDevices : [];
+        PortState[] states = [.. ports.Select(port => new PortState(port.Name)), .. sensors.Select(sensor => new PortState(sensor.Name))];
         var latest = new LatestPicture(states);
         builder.Services
             .AddSingleton(TimeProvider.System)
@@ -61,7 +62,7 @@ internal static class CockpitService
             .AddSingleton(clock)
             .AddSingleton(latest)
             .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, flight, clock, services), [latest, .. extraSinks]));
-        AddPorts(builder.Services, settings, ports, states);
+        AddPorts(builder.Services, settings, ports, sensors, states);
         builder.Services.AddHostedService<PictureTicker>();
         AddDisplays(builder.Services, settings, isPanelShown);
         if (flight is not null)
@@ -73,13 +74,21 @@ internal static class CockpitService
         return builder.Build();
     }
 
-    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight) => flight.Lines.Select(line =>
-        new PortSettings(line.Key, line.Value.DevicePath, 115_200, Sentences.ChecksumRule.Required));
+    private static IEnumerable<PortSettings> PortsOf(BenchFlight flight, CockpitSettings settings) => flight.Lines.Select(line =>
+        new PortSettings(line.Key, line.Value.DevicePath, 115_200, Sentences.ChecksumRule.Required) { Stream = settings.StreamOf(line.Key) });
 
-    private static void AddPorts(IServiceCollection services, CockpitSettings settings, PortSettings[] ports, PortState[] states) =>
+    /// <summary>The first states are the ports', the rest the kernel's sensors'.</summary>
+    private static void AddPorts(
+        IServiceCollection services, CockpitSettings settings, PortSettings[] ports, IReadOnlyList<IioSettings> sensors, PortState[] states)
+    {
         services.AddSingleton<IReadOnlyList<PortState>>(states).AddSingleton<IHostedService>(provider => new PortService(
             SerialDrivers.Reader(settings.Serial),
             ports.Zip(states, (port, state) => ActivatorUtilities.CreateInstance<PortIntake>(provider, port, state))));
+        foreach (var (sensor, state) in sensors.Zip(states.Skip(ports.Length)))
+        {
+            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<IioReader>(provider, sensor, state));
+        }
+    }
 
     private static void AddDisplays(IServiceCollection services, CockpitSettings settings, bool isPanelShown)
     {

@@ -11,7 +11,7 @@ internal sealed class PortIntake(PortSettings settings, PortState state, Cockpit
     : IPortListener, ILineSink
 {
     private readonly LineFramer _framer = new();
-    private readonly int _stream = machine.AddStream(settings.Name, settings.Checksum);
+    private readonly int _stream = machine.AddStream(settings.Name, settings.Stream);
     private long _arrivalUs;
     private string _lastComplaint = "";
 

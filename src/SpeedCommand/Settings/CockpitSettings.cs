@@ -1,6 +1,7 @@
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Ports;
+using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Settings;
 
@@ -25,6 +26,16 @@ internal sealed record CockpitSettings(
 {
     /// <summary>How serial lines are found and read.</summary>
     public SerialSettings Serial { get; init; } = SerialSettings.Standard;
+
+    /// <summary>Sensors that the kernel reads; default none.</summary>
+    public IReadOnlyList<IioSettings> IioDevices { get; init; } = [];
+
+    /// <summary>What the pipeline must know of a stream of the flight, live and in a replay.</summary>
+    /// <param name="name">The stream's name.</param>
+    /// <returns>Its settings; those of a board that speaks sentences, when it is none of the settings' streams.</returns>
+    public StreamSettings StreamOf(string name) =>
+        Ports.FirstOrDefault(port => port.Name == name)?.Stream
+        ?? (IioDevices.Any(device => device.Name == name) ? IioReader.Stream : StreamSettings.Sentences(ChecksumRule.Required));
 }
 
 /// <summary>Port of a character display.</summary>

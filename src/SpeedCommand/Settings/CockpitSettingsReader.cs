@@ -11,7 +11,6 @@ internal static class CockpitSettingsReader
 {
     private static readonly string[] OnOff = ["on", "off"];
     private static readonly string[] ReaderWords = ["portable", "poll"];
-    private static readonly string[] ChecksumWords = ["required", "optional"];
     private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
     private const int Megabyte = 1 << 20;
 
@@ -19,7 +18,9 @@ internal static class CockpitSettingsReader
     public static CockpitSettings? Read(SettingsSource source, string? gliderOption, string? gliderFallback, bool needsPorts)
     {
         var flight = FlightSettingsReader.Read(source, gliderOption, gliderFallback);
-        var ports = ReadPorts(source, needsPorts);
+        var ports = ReadPorts(source);
+        var iioDevices = IioSettingsReader.Read(source, ports);
+        RequirePorts(source, needsPorts && ports.Count + iioDevices.Count == 0);
         var units = ReadUnits(source);
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
         var serialText = ReadSerialText(source, ports);
@@ -33,19 +34,23 @@ internal static class CockpitSettingsReader
         }
 
         var gliderName = Path.GetFileName(gliderOption ?? source.Find("glider")?.Text ?? gliderFallback ?? "");
-        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile) { Serial = serial };
+        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile)
+        {
+            Serial = serial,
+            IioDevices = iioDevices,
+        };
     }
 
-    private static List<PortSettings> ReadPorts(SettingsSource source, bool isNeeded)
+    private static List<PortSettings> ReadPorts(SettingsSource source)
     {
         var ports = new List<PortSettings>();
         foreach (var name in source.NamedElements("ports"))
         {
             var path = $"ports.{name}";
             var device = source.Text($"{path}.device");
-            var baud = source.Integer($"{path}.baud", 115_200, 1_200, 4_000_000);
             var framing = ReadFraming(source, $"{path}.framing");
-            var rule = source.Word($"{path}.checksum", ChecksumWords, "required") == "required" ? ChecksumRule.Required : ChecksumRule.Optional;
+            var stream = StreamSettingsReader.Read(source, path);
+            var rule = source.Find($"{path}.checksum")?.Text == "optional" ? ChecksumRule.Optional : ChecksumRule.Required;
             if (device is null || device.Text.Length == 0)
             {
                 source.Report(new SettingText("", source.File, 0, $"{path}.device"), "expected the path of a serial device or 'usb:SERIAL', found none");
@@ -54,7 +59,7 @@ internal static class CockpitSettingsReader
             {
                 source.Report(device, $"expected a serial number after '{DeviceNames.SerialPrefix}', found none");
             }
-            else if (!IsStreamName(name))
+            else if (!PortSettings.IsStreamName(name))
             {
                 source.Report(source.Find($"{path}.name")!, $"expected a port name of 1 to 32 letters, digits, '-' or '_', found '{name}'");
             }
@@ -68,21 +73,21 @@ internal static class CockpitSettingsReader
             }
             else
             {
-                ports.Add(new PortSettings(name, device.Text, baud, rule) { Framing = framing });
+                ports.Add(new PortSettings(name, device.Text, stream.Baud, rule) { Framing = framing, Stream = stream });
             }
-        }
-
-        if (isNeeded && ports.Count == 0 && !source.HasErrors)
-        {
-            source.Report(new SettingText("", source.File.Length > 0 ? source.File : "settings", 0, "ports"),
-                "expected at least one port, found none; docs/settings.md shows how to name one");
         }
 
         return ports;
     }
 
-    private static bool IsStreamName(string name) => name.Length is > 0 and <= 32 && name != "truth"
-        && name.All(character => char.IsAsciiLetterOrDigit(character) || character is '-' or '_');
+    private static void RequirePorts(SettingsSource source, bool isMissing)
+    {
+        if (isMissing && !source.HasErrors)
+        {
+            source.Report(new SettingText("", source.File.Length > 0 ? source.File : "settings", 0, "ports"),
+                "expected at least one port, found none; docs/settings.md shows how to name one");
+        }
+    }
 
     private static DisplayUnits ReadUnits(SettingsSource source)
     {

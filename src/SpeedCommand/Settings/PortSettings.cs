@@ -1,3 +1,4 @@
+using SpeedCommand.Pipeline;
 using SpeedCommand.Ports;
 using SpeedCommand.Sentences;
 
@@ -12,4 +13,11 @@ internal sealed record PortSettings(string Name, string Device, int Baud, Checks
 {
     /// <summary>Data bits, parity, stop bits, flow control.</summary>
     public LineFraming Framing { get; init; } = LineFraming.Standard;
+
+    /// <summary>What the pipeline must know of its lines; standard is sentences, whose transmission took no time.</summary>
+    public StreamSettings Stream { get; init; } = StreamSettings.Sentences(Checksum);
+
+    /// <summary>Whether a stream may have this name: logs have it between spaces, and "truth" is the simulator's.</summary>
+    public static bool IsStreamName(string name) => name.Length is > 0 and <= 32 && name != "truth"
+        && name.All(character => char.IsAsciiLetterOrDigit(character) || character is '-' or '_');
 }

@@ -7,14 +7,16 @@ namespace SpeedCommand.House.Tests.Documents;
 
 /// <summary>
 /// The settings that the program asks for are the rows of the tables in docs/settings.md whose first column is headed
-/// "setting". The name that a port is given stands there as NAME.
+/// "setting". The names that a port and a kernel sensor are given stand there as NAME and SENSOR.
 /// </summary>
 public class DocumentedSettingsTests
 {
     private static readonly Dictionary<string, string> Nothing = [];
 
-    /// <summary>One port, so that what belongs to a port is asked for too.</summary>
-    private const string OnePort = """{ "glider": "marram-15.json", "ports": [ { "name": "NAME", "device": "/dev/null" } ] }""";
+    /// <summary>One of each list, so that what belongs to its elements is asked for too.</summary>
+    private const string OnePort = """
+        { "glider": "marram-15.json", "ports": [ { "name": "NAME", "device": "/dev/null" } ], "iio": [ { "name": "SENSOR", "device": "bmp280" } ] }
+        """;
 
     [Fact]
     public void Settings_AreTheOnesInTheDocument()
@@ -33,6 +35,6 @@ public class DocumentedSettingsTests
         var source = new SettingsSource(top, "settings.json", Nothing, Nothing);
         Assert.NotNull(CockpitSettingsReader.Read(source, null, null, needsPorts: true));
         Assert.Empty(source.Problems);
-        return source.AskedPaths.Where(path => path != "ports");
+        return source.AskedPaths.Where(path => path is not ("ports" or "iio"));
     }
 }

@@ -107,6 +107,17 @@ public sealed class SampleClockTests
     }
 
     [Fact]
+    public void ClockThatStandsStill_NeverTakesOutMoreThanAQuarterOfASecond()
+    {
+        var clock = new SampleClock(new SampleMark(SampleMarkKind.Time, double.NaN));
+        for (var arrivalUs = 0L; arrivalUs < 40_000_000; arrivalUs += 20_000)
+        {
+            var stampUs = clock.StampOf(arrivalUs, 0, Math.Min(arrivalUs, 20_000_000), 0);
+            Assert.InRange(arrivalUs - stampUs, 0, 250_000);
+        }
+    }
+
+    [Fact]
     public void Estimator_GetsSampleTimes_AndAgesCountFromTheArrival()
     {
         var estimator = new StampCollector();

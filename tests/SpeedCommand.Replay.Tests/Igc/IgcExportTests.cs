@@ -1,4 +1,5 @@
 using System.Text.Json;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Sentences;
@@ -53,7 +54,7 @@ public sealed class IgcExportTests
     public void LogWithoutPositions_OpensNoFile()
     {
         using var log = FlightLogReader.Open(new MemoryStream("#speedcommand-log 1\n1.000000 static $YXXDR,P,90000.0,P,STATIC*70\n"u8.ToArray()));
-        Assert.Equal(0, IgcExport.Run(log, _ => ChecksumRule.Required, () => throw new InvalidOperationException("nothing to write")));
+        Assert.Equal(0, IgcExport.Run(log, _ => StreamSettings.Sentences(ChecksumRule.Required), () => throw new InvalidOperationException("nothing to write")));
     }
 
     [Theory] // A minute is 1000 units: rounding goes over into the next degree, and the sign is the letter's.
@@ -90,7 +91,7 @@ public sealed class IgcExportTests
     {
         var stream = new MemoryStream();
         using var log = FlightLogFile.Open(path);
-        count = IgcExport.Run(log, _ => ChecksumRule.Required, () => stream);
+        count = IgcExport.Run(log, _ => StreamSettings.Sentences(ChecksumRule.Required), () => stream);
         return System.Text.Encoding.UTF8.GetString(stream.ToArray());
     }
 }

@@ -27,7 +27,7 @@ public sealed class IgcReplayTests
     {
         var pictures = new Pictures();
         recording = IgcRecording.Open(() => new MemoryStream(Encoding.UTF8.GetBytes(text)));
-        var replay = recording.Start(new FlightSettings(Glider), pictures, _ => ChecksumRule.Required);
+        var replay = recording.Start(new FlightSettings(Glider), pictures, _ => StreamSettings.Sentences(ChecksumRule.Required));
         while (replay.Step())
         {
         }
@@ -144,7 +144,7 @@ public sealed class IgcReplayTests
         try
         {
             using var recording = IgcRecording.Open(() => new MemoryStream(bytes));
-            var replay = recording.Start(new FlightSettings(Glider), new Pictures(), _ => ChecksumRule.Required);
+            var replay = recording.Start(new FlightSettings(Glider), new Pictures(), _ => StreamSettings.Sentences(ChecksumRule.Required));
             while (replay.Step())
             {
             }

@@ -11,7 +11,7 @@ public sealed class ListeningTests
     [InlineData("$YXXDR,P,95461.2,P,STATIC,C,8.04,C,OAT*01", "YXXDR static pressure, temperature", "static pressure 95461.2 Pa, temperature 8.0 C")]
     [InlineData("$YXXDR,P,95461.2,P,STATIC*74", "YXXDR static pressure", "static pressure 95461.2 Pa")]
     [InlineData("$YXXDR,G,1.25,,LOAD,A,-30,D,BANK*79", "YXXDR load, bank", "load 1.25 g, bank -30.0 deg")]
-    [InlineData("$YXXDR,P,5.0,P,STATIC*4C", "YXXDR static pressure", "static pressure 5.0 Pa (out of range)")]
+    [InlineData("$YXXDR,P,5.0,P,STATIC*4C", "YXXDR static pressure (out of range)", "static pressure 5.0 Pa (out of range)")]
     [InlineData("$YXXDR,P,95461.2,P,STATIC*75", "wrong checksum", "wrong checksum: expected 74")]
     [InlineData("$YXXDR,P,95461.2,P,STATIC", "no checksum", "no checksum: expected *74 at the end")]
     [InlineData("hello", "no sentence", "no '$' in it")]

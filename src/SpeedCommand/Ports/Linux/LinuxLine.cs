@@ -97,8 +97,12 @@ internal sealed class LinuxLine : IDisposable
     {
         if (_file >= 0)
         {
-            // Else closing may wait half a minute for a stuck receiver.
-            _ = SystemCalls.Flush(_file, SystemCalls.Unsent);
+            if (Unsent > 0)
+            {
+                // Else closing may wait half a minute for a stuck receiver.
+                _ = SystemCalls.Flush(_file, SystemCalls.Unsent);
+            }
+
             _ = SystemCalls.Close(_file);
             _file = -1;
         }

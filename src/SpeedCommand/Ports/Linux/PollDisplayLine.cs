@@ -27,7 +27,7 @@ internal sealed class PollDisplayLine(SerialTextSettings settings, DeviceNames n
         var complaint = await WriteAsync(_line, frame).ConfigureAwait(false);
         if (complaint is not null)
         {
-            await DisposeAsync().ConfigureAwait(false);
+            Close();
         }
 
         return complaint;
@@ -56,10 +56,21 @@ internal sealed class PollDisplayLine(SerialTextSettings settings, DeviceNames n
         return $"{settings.Device}: takes no more characters";
     }
 
-    public ValueTask DisposeAsync()
+    /// <summary>Closes the line when the last frame has left: it may be the one that blanks the display.</summary>
+    public async ValueTask DisposeAsync()
+    {
+        var watch = Stopwatch.StartNew();
+        while (_line is { Unsent: > 0 } && watch.Elapsed < IDisplayLine.WriteLimit)
+        {
+            await Task.Delay(StepMs).ConfigureAwait(false);
+        }
+
+        Close();
+    }
+
+    private void Close()
     {
         _line?.Dispose();
         _line = null;
-        return ValueTask.CompletedTask;
     }
 }

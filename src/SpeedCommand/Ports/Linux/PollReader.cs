@@ -61,7 +61,7 @@ internal sealed class PollReader(DeviceNames names, TimeProvider time) : IPortRe
             {
                 if (entries[i].Returned != 0)
                 {
-                    ports[i].Read(buffer);
+                    ports[i].Read(entries[i].Returned, buffer);
                 }
             }
         }

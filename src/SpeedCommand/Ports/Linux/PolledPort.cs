@@ -45,14 +45,17 @@ internal sealed class PolledPort(PortLine port, DeviceNames names, WakeUp wake, 
     }
 
     /// <summary>Reads once: a flooded port must not starve the others.</summary>
-    public void Read(Span<byte> buffer)
+    /// <param name="returned">What poll(2) said of the file.</param>
+    /// <param name="buffer">Where to.</param>
+    public void Read(short returned, Span<byte> buffer)
     {
         if (_line is null)
         {
             return;
         }
 
-        if (!_line.TryRead(buffer, out var count))
+        // A broken line that gives no bytes either would wake poll(2) again and again.
+        if (!_line.TryRead(buffer, out var count) || (count == 0 && (returned & SystemCalls.Broken) != 0))
         {
             Close();
             port.Listener.OnGone("hung up");

@@ -20,8 +20,8 @@ internal static partial class SystemCalls
     /// <summary>Flags of open(2) and posix_openpt(3).</summary>
     public const int ReadWrite = 2, NoControllingTerminal = 0x100, NonBlocking = 0x800, CloseOnExec = 0x80000;
 
-    /// <summary>Event of poll(2).</summary>
-    public const short Readable = 1;
+    /// <summary>Events of poll(2); Broken is any of POLLERR, POLLHUP and POLLNVAL.</summary>
+    public const short Readable = 1, Broken = 8 | 16 | 32;
 
     /// <summary>Exclusive, and not waiting for it: flock(2).</summary>
     public const int LockExclusive = 2, LockWithoutWaiting = 4;

@@ -20,6 +20,32 @@ internal sealed record LineMeaning(
     /// <summary>Whether the sentence is one this program has no use for.</summary>
     public bool IsUnknown { get; private init; }
 
+    /// <summary>A line of plain numbers, in the columns of the port's settings.</summary>
+    public static LineMeaning OfColumns(ReadOnlySpan<byte> line, LineFormat format)
+    {
+        Span<Reading> readings = stackalloc Reading[LineFormat.MaxReadings];
+        var content = format.Read(line, readings);
+        if (!content.IsSound)
+        {
+            return new LineMeaning(SentenceFault.Malformed, "other columns", "not the columns of the settings", [], 0, 0);
+        }
+
+        var words = new List<string>();
+        var kinds = new List<ReadingKind>();
+        foreach (var reading in readings[..content.Count])
+        {
+            var isPossible = ReadingRanges.IsPossible(reading, out _);
+            words.Add(ReadingWords.Show(reading) + (isPossible ? "" : " (out of range)"));
+            if (isPossible)
+            {
+                kinds.Add(reading.Kind);
+            }
+        }
+
+        AddCount(words, content.BadCount, "malformed");
+        return new LineMeaning(SentenceFault.None, "columns", string.Join(", ", words), kinds, words.Count - kinds.Count, content.BadCount);
+    }
+
     public static LineMeaning Of(ReadOnlySpan<byte> line, ChecksumRule rule)
     {
         var fault = SentenceReader.TryRead(line, rule, out var sentence);
@@ -41,8 +67,9 @@ internal sealed record LineMeaning(
         foreach (var reading in measurements)
         {
             var isPossible = ReadingRanges.IsPossible(reading, out _);
-            words.Add(ReadingWords.Show(reading) + (isPossible ? "" : " (out of range)"));
-            names.Add(ReadingWords.Name(reading.Kind));
+            var judged = isPossible ? "" : " (out of range)";
+            words.Add(ReadingWords.Show(reading) + judged);
+            names.Add(ReadingWords.Name(reading.Kind) + judged);
             impossible += isPossible ? 0 : 1;
             if (isPossible)
             {

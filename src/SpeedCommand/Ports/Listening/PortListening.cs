@@ -1,5 +1,6 @@
 using System.Diagnostics;
 using SpeedCommand.Sentences;
+using SpeedCommand.Sentences.Columns;
 using SpeedCommand.Settings;
 
 namespace SpeedCommand.Ports.Listening;
@@ -85,9 +86,10 @@ internal sealed class PortListening(PortSettings settings, LinePrinter? printer 
 
     void ILineSink.OnLine(ReadOnlySpan<byte> line)
     {
-        var meaning = LineMeaning.Of(line, settings.Checksum);
+        var isColumns = settings.Stream.Format is ColumnFormat;
+        var meaning = isColumns ? LineMeaning.OfColumns(line, settings.Stream.Format) : LineMeaning.Of(line, settings.Checksum);
         Counts.Add(meaning);
-        if (meaning.Fault == SentenceFault.MissingChecksum && SentenceReader.TryRead(line, ChecksumRule.Optional, out _) == SentenceFault.None)
+        if (!isColumns && meaning.Fault == SentenceFault.MissingChecksum && SentenceReader.TryRead(line, ChecksumRule.Optional, out _) == SentenceFault.None)
         {
             Counts.ValidButForChecksum++;
         }
