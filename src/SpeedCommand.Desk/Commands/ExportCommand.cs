@@ -75,8 +75,7 @@ internal static class ExportCommand
         try
         {
             using var log = FlightLogFile.Open(flight.Path);
-            Func<string, StreamSettings> streams = flight.SettingsFile is null ? _ => StreamSettings.Sentences(ChecksumRule.Required) : StreamsOf(flight, log);
-            var count = IgcExport.Run(log, streams, () => new FileStream(to, FileMode.Create, FileAccess.Write));
+            var count = IgcExport.Run(log, StreamsOf(flight, log), () => new FileStream(to, FileMode.Create, FileAccess.Write));
             if (count == 0)
             {
                 throw new DeskFailure(ExitStatus.BadData, $"{flight.Path}: expected positions (RMC or GGA sentences with a fix), found none");
@@ -90,8 +89,14 @@ internal static class ExportCommand
         }
     }
 
+    /// <summary>Positions need no glider, so without settings none is asked for.</summary>
     private static Func<string, StreamSettings> StreamsOf(FlightInput flight, FlightLogReader log)
     {
+        if (flight.SettingsFile is null)
+        {
+            return _ => StreamSettings.Sentences(ChecksumRule.Required);
+        }
+
         flight.ReadSettings(log.Header.GliderFile, out var streams);
         return streams;
     }

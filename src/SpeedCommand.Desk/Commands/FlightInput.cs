@@ -12,7 +12,6 @@ namespace SpeedCommand.Desk.Commands;
 internal sealed record FlightInput(string Path, string? SettingsFile, string? Glider)
 {
     private static readonly Dictionary<string, string> Nothing = [];
-    private static readonly string[] ChecksumWords = ["required", "optional"];
 
     /// <summary>Opens the recording.</summary>
     /// <exception cref="DeskFailure">There is none, or it is not readable as one.</exception>
@@ -33,9 +32,9 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
         }
     }
 
-    /// <summary>Reads the settings; those of the streams come with them.</summary>
+    /// <summary>Reads the settings; what the boards on the ports speak comes with them.</summary>
     /// <param name="gliderFallback">The glider the recording names.</param>
-    /// <param name="streams">The settings of each stream.</param>
+    /// <param name="streams">What is to be known of each stream, by name.</param>
     /// <exception cref="DeskFailure">Something in them is wrong.</exception>
     public FlightSettings ReadSettings(string gliderFallback, out Func<string, StreamSettings> streams)
     {

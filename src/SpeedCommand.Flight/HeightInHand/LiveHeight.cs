@@ -5,8 +5,8 @@ namespace SpeedCommand.Flight.HeightInHand;
 
 /// <summary>
 /// Endurance and range from here down to a floor, for every picture: still air below, as much warmer or colder than standard
-/// as the air here, the same humidity and wind. Two or three Gauss-Legendre points; the integrand is so smooth that they agree
-/// with <see cref="Descent"/> to a few parts in a million. Allocates nothing.
+/// as the air here, the same humidity and wind. Two or three Gauss-Legendre points on either side of the tropopause; there the
+/// integrand is so smooth that they agree with <see cref="Descent"/> to a few parts in a million. Allocates nothing.
 /// </summary>
 /// <param name="EnduranceS">Time to the floor at the speed of least sink, s; 0 at or below it.</param>
 /// <param name="RangeM">Distance over the ground at the flattest glide, m; 0 at or below the floor; NaN when no speed makes headway.</param>
@@ -17,6 +17,9 @@ public readonly record struct LiveHeight(double EnduranceS, double RangeM)
     /// points is (ln 1.15)⁴/4320 of an exponential.
     /// </summary>
     private const double ShallowM = 3000;
+
+    /// <summary>Where the standard temperature's gradient jumps (ISO 2533, table 4), and no such rule should reach across.</summary>
+    private const double TropopauseM = 11_000;
 
     // Nodes and weights on [0, 1]: Abramowitz and Stegun, Handbook of Mathematical Functions, table 25.4, n = 2 and n = 3.
     private static ReadOnlySpan<double> TwoNodes => [0.211324865405187, 0.788675134594813];
@@ -46,16 +49,35 @@ public readonly record struct LiveHeight(double EnduranceS, double RangeM)
 
         var offsetK = air.TemperatureK - here.TemperatureK;
         var straight = loading with { LoadFactor = 1 };
-        var depthM = Math.Max(0, air.PressureAltitudeM - floorM);
         var (enduranceS, rangeM) = (0.0, 0.0);
+        var topM = Math.Max(air.PressureAltitudeM, floorM);
+        do
+        {
+            var bottomM = topM > TropopauseM ? Math.Max(floorM, TropopauseM) : floorM;
+            if (!TryAdd(targets, new Column(air.RelativeHumidity, offsetK, straight, headwindMps), bottomM, topM - bottomM, ref enduranceS, ref rangeM))
+            {
+                return false;
+            }
+
+            topM = bottomM;
+        }
+        while (topM > floorM);
+
+        height = new(enduranceS, rangeM);
+        return true;
+    }
+
+    /// <summary>Adds one smooth stretch of the column.</summary>
+    private static bool TryAdd(SpeedTargets targets, in Column column, double bottomM, double depthM, ref double enduranceS, ref double rangeM)
+    {
         var nodes = depthM < ShallowM ? TwoNodes : ThreeNodes;
         var weights = depthM < ShallowM ? TwoWeights : ThreeWeights;
         for (var i = 0; i < nodes.Length; i++)
         {
-            var altitudeM = floorM + nodes[i] * depthM;
+            var altitudeM = bottomM + nodes[i] * depthM;
             if (!StandardAtmosphere.TryAt(altitudeM, out var standard)
-                || !Air.TryMeasuredAt(altitudeM, standard.PressurePa, standard.TemperatureK + offsetK, air.RelativeHumidity, out var below)
-                || !targets.TryGlide(below, straight, headwindMps, out var minSinkMps, out var glideRatio))
+                || !Air.TryMeasuredAt(altitudeM, standard.PressurePa, standard.TemperatureK + column.OffsetK, column.Humidity, out var below)
+                || !targets.TryGlide(below, column.Loading, column.HeadwindMps, out var minSinkMps, out var glideRatio))
             {
                 return false;
             }
@@ -65,7 +87,9 @@ public readonly record struct LiveHeight(double EnduranceS, double RangeM)
             rangeM += heightM * glideRatio;
         }
 
-        height = new(enduranceS, rangeM);
         return true;
     }
+
+    /// <summary>What stays the same all the way down.</summary>
+    private readonly record struct Column(double Humidity, double OffsetK, Loading Loading, double HeadwindMps);
 }

@@ -35,7 +35,7 @@ public sealed class IgcExport
 
     /// <summary>Makes the file.</summary>
     /// <param name="log">The log, standing before its first record.</param>
-    /// <param name="streams">The settings of each stream by name.</param>
+    /// <param name="streams">What is to be known of each stream, by name.</param>
     /// <param name="open">Opens the file to write, once the first position was found.</param>
     /// <returns>Fixes written; 0 when the log has no position, and then nothing was opened.</returns>
     /// <exception cref="IOException">The log cannot be read or the file not be written.</exception>
@@ -63,16 +63,7 @@ public sealed class IgcExport
                 formats[name] = format = _streams(name).Format;
             }
 
-            var content = format.Read(record.Content, _readings);
-            foreach (ref readonly var reading in _readings.AsSpan(0, content.Count))
-            {
-                Take(record.TimeUs, reading);
-            }
-
-            if (content.Count == 0 && SentenceReader.TryRead(record.Content, ChecksumRule.Optional, out var sentence) == SentenceFault.None)
-            {
-                Take(record.TimeUs, sentence);
-            }
+            Take(record.TimeUs, record.Content, format);
         }
 
         WriteEpoch();
@@ -80,8 +71,10 @@ public sealed class IgcExport
         return _writer?.Count ?? 0;
     }
 
-    private void Take(long timeUs, in Sentence sentence)
+    /// <summary>Receivers always send checksums; what boards send is read as their stream's settings say.</summary>
+    private void Take(long timeUs, ReadOnlySpan<byte> line, LineFormat format)
     {
+        SentenceReader.TryRead(line, ChecksumRule.Required, out var sentence);
         if (RmcSentence.TryRead(sentence, out var rmc) && rmc.HasFix)
         {
             if (rmc.Date is { } date && _writer is null)
@@ -102,6 +95,14 @@ public sealed class IgcExport
                 GnssAltitudeM = gga.AltitudeM,
                 IsThreeDimensional = double.IsFinite(gga.AltitudeM),
             };
+        }
+        else
+        {
+            var count = format.Read(line, _readings).Count;
+            foreach (ref readonly var reading in _readings.AsSpan(0, count))
+            {
+                Take(timeUs, reading);
+            }
         }
     }
 

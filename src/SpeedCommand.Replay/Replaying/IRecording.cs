@@ -25,7 +25,7 @@ public interface IRecording : IDisposable
     /// <summary>Puts the recording in front of a new pipeline. May be done once.</summary>
     /// <param name="settings">The glider and the pilot's choices.</param>
     /// <param name="sink">Takes the pictures.</param>
-    /// <param name="streams">The settings of each stream by name.</param>
+    /// <param name="streams">What is to be known of each stream, by name.</param>
     /// <returns>The replay, before its first record.</returns>
     IReplay Start(FlightSettings settings, IPictureSink sink, Func<string, StreamSettings> streams);
 }

@@ -117,6 +117,8 @@ public sealed class DescentTests
     [Theory] // altitude m, offset K, headwind m/s, floor m
     [InlineData(2500, 15, 6, 400)]
     [InlineData(9000, -10, -8, 300)]
+    [InlineData(12500, 0, 0, 300)]
+    [InlineData(11800, 5, 0, 10000)]
     [InlineData(1200, 8, 15, 350)]
     [InlineData(400, 0, 0, 300)]
     public void TryEstimate_OffsetAirAndWind_AsTheFineSum(double altitudeM, double offsetK, double headwindMps, double floorM)
