@@ -13,6 +13,7 @@ internal static class DeskProgram
             CardCommand.Create(),
             PlanCommand.Create(),
             SimulateCommand.Create(),
+            SpoilCommand.Create(),
             ScoreCommand.Create(),
             GuidanceCommand.Create(),
             NoiseCommand.Create(),
