@@ -14,6 +14,7 @@ internal static class DeskProgram
             PlanCommand.Create(),
             SimulateCommand.Create(),
             SpoilCommand.Create(),
+            FaultsCommand.Create(),
             ScoreCommand.Create(),
             GuidanceCommand.Create(),
             NoiseCommand.Create(),

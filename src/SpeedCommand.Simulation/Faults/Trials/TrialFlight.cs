@@ -1,0 +1,89 @@
+using SpeedCommand.Flight.Gliders;
+using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Sentences;
+using SpeedCommand.Simulation.Scenarios;
+using SpeedCommand.Simulation.Truth;
+
+namespace SpeedCommand.Simulation.Faults.Trials;
+
+/// <summary>A short simulated flight, kept in memory to be flown again and again with faults.</summary>
+public sealed class TrialFlight : ISimulatedFlightSink
+{
+    private readonly List<(long TimeUs, byte[] Stream, byte[] Line)> _lines = [];
+    private readonly FlightSettings _settings;
+
+    /// <summary>Flies a scenario once.</summary>
+    /// <param name="scenario">The scenario.</param>
+    /// <param name="settings">The glider, and the pilot's choices.</param>
+    /// <param name="seed">The seed.</param>
+    public TrialFlight(Scenario scenario, FlightSettings settings, long seed)
+    {
+        ArgumentNullException.ThrowIfNull(settings);
+        _settings = settings;
+        var simulator = new FlightSimulator(scenario, settings.Glider, seed);
+        simulator.Fly(this);
+        EndUs = simulator.TimeUs;
+        Pictures = Fly(new FaultPlan("none", []), seed);
+    }
+
+    /// <summary>When the flight ends, microseconds.</summary>
+    public long EndUs { get; }
+
+    /// <summary>What the pilot sees without a fault, ten pictures a second.</summary>
+    public IReadOnlyList<CockpitPicture> Pictures { get; }
+
+    /// <summary>The settings used by all trials: those of a glider, with a climb expected so that the speed to fly says something.</summary>
+    /// <param name="glider">The glider.</param>
+    /// <returns>The settings.</returns>
+    public static FlightSettings SettingsOf(Glider glider) => new(glider) { ExpectedClimbMps = 1.5 };
+
+    /// <inheritdoc/>
+    public void OnLine(long timeUs, ReadOnlySpan<byte> stream, ReadOnlySpan<byte> line) => _lines.Add((timeUs, stream.ToArray(), line.ToArray()));
+
+    /// <inheritdoc/>
+    public void OnTruth(in TruthSample truth)
+    {
+    }
+
+    /// <summary>Flies it with faults.</summary>
+    /// <param name="plan">The faults.</param>
+    /// <param name="seed">Their seed.</param>
+    /// <returns>What the pilot sees.</returns>
+    public IReadOnlyList<CockpitPicture> Fly(FaultPlan plan, long seed)
+    {
+        var pictures = new KeptPictures();
+        var pipeline = new FlightPipeline(_settings, pictures);
+        var names = new List<byte[]>();
+        var spoiler = new FlightSpoiler(plan, seed, new PortLines((timeUs, stream, line) => pipeline.Accept(timeUs, StreamOf(stream), line)));
+        foreach (var (timeUs, stream, line) in _lines)
+        {
+            spoiler.OnLine(timeUs, stream, line);
+        }
+
+        spoiler.Finish(EndUs);
+        pipeline.AdvanceTo(spoiler.StampOf(EndUs));
+        return pictures.List;
+
+        int StreamOf(ReadOnlySpan<byte> name)
+        {
+            for (var i = 0; i < names.Count; i++)
+            {
+                if (name.SequenceEqual(names[i]))
+                {
+                    return i;
+                }
+            }
+
+            names.Add(name.ToArray());
+            return pipeline.AddStream(System.Text.Encoding.ASCII.GetString(name), ChecksumRule.Required);
+        }
+    }
+
+    private sealed class KeptPictures : IPictureSink
+    {
+        public List<CockpitPicture> List { get; } = [];
+
+        public void OnPicture(in CockpitPicture picture) => List.Add(picture);
+    }
+}
