@@ -14,6 +14,12 @@ public static class PipelineBounds
     /// </summary>
     public const long FreshnessUs = 1_000_000 - PicturePeriodUs;
 
+    /// <summary>
+    /// A load factor or bank older than this is silent, and an assumed one stands in. Boards send it as seldom as three times a second:
+    /// it must outlast the pressures by that much, lest a line that falls silent moves the targets before it blanks them.
+    /// </summary>
+    public const long LoadFreshnessUs = FreshnessUs + 350_000;
+
     /// <summary>Air temperature changes slowly, and thermometers are slow: after this the standard atmosphere stands in.</summary>
     public const long TemperatureFreshnessUs = 10_000_000;
 

@@ -27,7 +27,7 @@ internal sealed class LoadStage
     public void SetBank(long timeUs, double bankRad)
     {
         _bankRad.Set(timeUs, bankRad);
-        if (!_loadFactor.IsFresh(timeUs, PipelineBounds.FreshnessUs))
+        if (!_loadFactor.IsFresh(timeUs, PipelineBounds.LoadFreshnessUs))
         {
             Smooth(timeUs, 1 / Math.Cos(bankRad));
         }
@@ -35,16 +35,16 @@ internal sealed class LoadStage
 
     /// <summary>Whether a sensor tells; without one the load is taken as 1.</summary>
     public bool IsMeasured(long nowUs) =>
-        _loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs) || _bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+        _loadFactor.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs) || _bankRad.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs);
 
     public double Present(long nowUs)
     {
-        if (_loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs))
+        if (_loadFactor.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs))
         {
             return _loadFactor.Value;
         }
 
-        return _bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs) ? 1 / Math.Cos(_bankRad.Value) : 1;
+        return _bankRad.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs) ? 1 / Math.Cos(_bankRad.Value) : 1;
     }
 
     /// <summary>Never below 1: a push-over is no reason to fly nearer the stall. Without a sensor, circling is taken as a usual turn.</summary>

@@ -6,7 +6,7 @@ namespace SpeedCommand.Simulation.Faults.Trials;
 /// <summary>Draws a fault for a short flight: any kind, on any stream and sensor, mild or wild, over well before the flight is.</summary>
 public static class DrawnFaults
 {
-    private const double EarliestS = 4, LatestS = 11, LongestS = 4;
+    private const double EarliestS = 3, LatestS = 9, LongestS = 3;
 
     private static readonly string[] Streams = ["static", "pitot", ""];
     private static readonly ReadingKind[] Sensors =

@@ -34,7 +34,7 @@ public sealed class FaultTrials
         var flight = _flights[(int)(seed % _flights.Length)];
         var fault = DrawnFaults.Draw(seed);
         var faulty = flight.Fly(new FaultPlan("drawn", [fault]), seed);
-        return (fault, [.. WrongNumberJudge.Judge(flight.Pictures, faulty, fault, seed)]);
+        return (fault, [.. WrongNumberJudge.Judge(flight, faulty, fault, seed)]);
     }
 
     /// <summary>Flies many trials on all cores.</summary>

@@ -1,4 +1,7 @@
+using System.Text;
+using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Gliders;
+using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Sentences;
@@ -25,6 +28,7 @@ public sealed class TrialFlight : ISimulatedFlightSink
         simulator.Fly(this);
         EndUs = simulator.TimeUs;
         Pictures = Fly(new FaultPlan("none", []), seed);
+        UnsmoothedMps = [.. Pictures.Select(UnsmoothedSpeedToFly)];
     }
 
     /// <summary>When the flight ends, microseconds.</summary>
@@ -32,6 +36,9 @@ public sealed class TrialFlight : ISimulatedFlightSink
 
     /// <summary>What the pilot sees without a fault, ten pictures a second.</summary>
     public IReadOnlyList<CockpitPicture> Pictures { get; }
+
+    /// <summary>For each picture the speed to fly in the air of that very moment, m/s indicated; NaN where it is not known.</summary>
+    public IReadOnlyList<double> UnsmoothedMps { get; }
 
     /// <summary>The settings used by all trials: those of a glider, with a climb expected so that the speed to fly says something.</summary>
     /// <param name="glider">The glider.</param>
@@ -76,8 +83,21 @@ public sealed class TrialFlight : ISimulatedFlightSink
             }
 
             names.Add(name.ToArray());
-            return pipeline.AddStream(System.Text.Encoding.ASCII.GetString(name), ChecksumRule.Required);
+            return pipeline.AddStream(Encoding.ASCII.GetString(name), ChecksumRule.Required);
         }
+    }
+
+    private double UnsmoothedSpeedToFly(CockpitPicture picture)
+    {
+        if (!picture.NettoMps.IsKnown || !StandardAtmosphere.TryAt(picture.PressureAltitudeM.Value, out var state)
+            || !Air.TryMeasured(state.PressurePa, picture.TemperatureK.Value, double.NaN, out var air, out _))
+        {
+            return double.NaN;
+        }
+
+        var speed = new SpeedTargets(_settings.Glider, _settings.StallMargin).SpeedToFly(
+            air, new Loading(_settings.MassKg, 1, _settings.BugsFraction), _settings.ExpectedClimbMps, picture.NettoMps.Value).Speed;
+        return Math.Max(speed.IndicatedAirspeedMps, picture.MinSinkIndicatedMps.Value);
     }
 
     private sealed class KeptPictures : IPictureSink

@@ -25,35 +25,33 @@ public static class WrongNumberJudge
     /// </summary>
     private const double BestGlideDoubt = 1e-4;
 
-    private static readonly (string Name, Func<CockpitPicture, Gauge> Of, double Doubt)[] Targets =
+    private static readonly Target[] Targets =
     [
-        ("minimum sink", picture => picture.MinSinkIndicatedMps, MinSinkDoubt),
-        ("best glide", picture => picture.BestGlideIndicatedMps, BestGlideDoubt),
-        ("speed to fly", picture => picture.SpeedToFlyIndicatedMps, 0),
+        new("minimum sink", picture => picture.MinSinkIndicatedMps, MinSinkDoubt),
+        new("best glide", picture => picture.BestGlideIndicatedMps, BestGlideDoubt),
+        new("speed to fly", picture => picture.SpeedToFlyIndicatedMps, 0, IsSmoothed: true),
     ];
 
     /// <summary>Lists the wrong numbers.</summary>
-    /// <param name="good">The pictures without the fault.</param>
-    /// <param name="faulty">The pictures with it.</param>
+    /// <param name="good">The flight without the fault.</param>
+    /// <param name="faulty">Its pictures with it.</param>
     /// <param name="fault">The fault, at an exact time.</param>
     /// <param name="seed">The trial's seed, for the list.</param>
     /// <returns>Every target that is wrong, picture by picture.</returns>
-    public static IEnumerable<WrongNumber> Judge(
-        IReadOnlyList<CockpitPicture> good, IReadOnlyList<CockpitPicture> faulty, FaultSpec fault, long seed)
+    public static IEnumerable<WrongNumber> Judge(TrialFlight good, IReadOnlyList<CockpitPicture> faulty, FaultSpec fault, long seed)
     {
         ArgumentNullException.ThrowIfNull(good);
         ArgumentNullException.ThrowIfNull(faulty);
         ArgumentNullException.ThrowIfNull(fault);
         var reach = FaultReach.Of(fault.Kind);
-        foreach (var picture in faulty.Where(picture => !IsReached(picture.TimeS, fault, reach)))
+        foreach (var picture in faulty.Where(picture => reach.IsNoticed || !IsWithin(picture, fault, reach.AfterS)))
         {
-            var trueS = TrueTimeOf(picture.TimeS, fault);
-            foreach (var (name, of, doubt) in Targets)
+            foreach (var target in Targets)
             {
-                var shown = of(picture);
-                if (shown.IsKnown && Check(good, trueS, of, shown, doubt) is var (least, most) && !(shown.Value >= least && shown.Value <= most))
+                var shown = target.Of(picture);
+                if (shown.IsKnown && RangeOf(good, target, picture, fault) is var (least, most) && !(shown.Value >= least && shown.Value <= most))
                 {
-                    yield return new WrongNumber(seed, fault, picture.TimeS, name, shown.Value, least, most);
+                    yield return new WrongNumber(seed, fault, picture.TimeS, target.Name, shown.Value, least, most);
                 }
             }
 
@@ -64,26 +62,35 @@ public static class WrongNumberJudge
         }
     }
 
-    private static bool IsReached(double timeS, FaultSpec fault, FaultReach reach) =>
-        timeS > fault.AtS && timeS <= (reach.IsNoticed ? fault.AtS : fault.AtS + fault.ForS) + reach.AfterS;
+    /// <summary>Whether a picture lies within a fault, or not longer than that after it. A clock set forth leaves a gap as long as its step.</summary>
+    private static bool IsWithin(in CockpitPicture picture, FaultSpec fault, double afterS) => picture.TimeS >= fault.AtS
+        && picture.TimeS <= fault.AtS + (fault.Kind == FaultKind.ClockStep ? Math.Max(0, fault.ByS) : fault.ForS) + afterS;
 
     /// <summary>After the clock was stepped, a picture shows the flight as it was that much earlier or later.</summary>
     private static double TrueTimeOf(double timeS, FaultSpec fault) =>
-        fault.Kind == FaultKind.ClockStep && timeS > fault.AtS ? Math.Max(fault.AtS, timeS - fault.ByS) : timeS;
+        fault.Kind == FaultKind.ClockStep && timeS >= fault.AtS ? Math.Max(fault.AtS, timeS - fault.ByS) : timeS;
 
-    private static (double Least, double Most) Check(
-        IReadOnlyList<CockpitPicture> good, double trueS, Func<CockpitPicture, Gauge> of, in Gauge shown, double doubt)
+    private static (double Least, double Most) RangeOf(TrialFlight good, Target target, in CockpitPicture picture, FaultSpec fault)
     {
-        var (least, most) = (double.PositiveInfinity, double.NegativeInfinity);
-        var last = (int)Math.Round(trueS / PictureS) - 1;
-        for (var i = Math.Max(0, last - (int)Math.Round(FaultReach.OldestS / PictureS)); i <= Math.Min(last, good.Count - 1); i++)
+        var shown = target.Of(picture);
+        var countsUnsmoothed = target.IsSmoothed && IsWithin(picture, fault, FaultReach.SmoothingS);
+        var (least, most, sigma) = (double.PositiveInfinity, double.NegativeInfinity, 0.0);
+        void Count(double value) => (least, most) = (value < least ? value : least, value > most ? value : most);
+        var last = (int)Math.Round(TrueTimeOf(picture.TimeS, fault) / PictureS) - 1;
+        for (var i = Math.Max(0, last - (int)Math.Round(FaultReach.OldestS / PictureS)); i <= Math.Min(last, good.Pictures.Count - 1); i++)
         {
-            var value = of(good[i]).Value;
-            least = value < least ? value : least;
-            most = value > most ? value : most;
+            var expected = target.Of(good.Pictures[i]);
+            Count(expected.Value);
+            Count(countsUnsmoothed ? good.UnsmoothedMps[i] : double.NaN);
+            sigma = expected.Sigma > sigma ? expected.Sigma : sigma;
         }
 
-        var room = Sigmas * ((double.IsNaN(shown.Sigma) ? 0 : shown.Sigma) + doubt * shown.Value);
+        // A speed to fly that stands on the least-sink speed has that speed's doubt, and the good flight's sigma if it has none of its own.
+        var isHeldUp = shown.Value <= picture.MinSinkIndicatedMps.Value;
+        var own = isHeldUp ? Math.Max(sigma, shown.Sigma) : shown.Sigma;
+        var load = IsWithin(picture, fault, FaultReach.LoadS) ? FaultReach.LoadShare : 0;
+        var doubt = isHeldUp ? Sigmas * MinSinkDoubt + load : Sigmas * target.Doubt;
+        var room = Sigmas * (double.IsNaN(own) ? 0 : own) + doubt * shown.Value;
         return (least - room, most + room);
     }
 
@@ -93,4 +100,6 @@ public static class WrongNumberJudge
     /// </summary>
     private static bool HoldIsNeither(in CockpitPicture picture) => picture.HoldIndicatedMps.IsKnown && picture.HoldIndicatedMps
         != (picture.Phase == FlightPhase.Climbing ? picture.MinSinkIndicatedMps : picture.SpeedToFlyIndicatedMps);
+
+    private sealed record Target(string Name, Func<CockpitPicture, Gauge> Of, double Doubt, bool IsSmoothed = false);
 }
