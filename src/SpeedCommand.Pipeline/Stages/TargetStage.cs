@@ -35,6 +35,7 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
     private readonly SmoothNetto _smoothSigma = new();
 
     private double _firstSigmaMps = double.NaN;
+    private long _settledUs = long.MaxValue;
 
     public Loading LoadingAt(double loadFactor) => new(settings.MassKg, loadFactor, settings.BugsFraction);
 
@@ -44,10 +45,12 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
     /// <summary>Forgets the air flown through, as after a silence.</summary>
     public void Reset()
     {
-        _smoothNetto.Reset();
-        _smoothSigma.Reset();
-        _firstSigmaMps = double.NaN;
+        ForgetNetto();
+        _settledUs = long.MaxValue;
     }
+
+    /// <summary>Whether the climb has been there long enough for a speed to fly.</summary>
+    public bool IsSettled(long timeUs) => timeUs >= _settledUs;
 
     /// <summary>Computes once a picture.</summary>
     public Targets At(in TargetInputs inputs)
@@ -55,6 +58,7 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
         var straight = LoadingAt(1);
         var minSink = targets.MinSink(inputs.Air, LoadingAt(inputs.SteadyLoad));
         var bestGlide = targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
+        _settledUs = Math.Min(_settledUs, inputs.TimeUs + PipelineBounds.SettlingUs);
         var netto = inputs.IsOutsidePolar ? 0 : Smooth(inputs.TimeUs, inputs.Netto);
         var speedToFly = double.IsNaN(netto) || !(inputs.Netto.IsKnown || inputs.IsOutsidePolar)
             ? default
@@ -75,12 +79,24 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
             circle.IsKnown ? circle.SinkMps : double.NaN);
     }
 
-    /// <summary>After a silence the first netto is a guess, which must not colour the command once a better one is there.</summary>
+    private void ForgetNetto()
+    {
+        _smoothNetto.Reset();
+        _smoothSigma.Reset();
+        _firstSigmaMps = double.NaN;
+    }
+
+    /// <summary>The first netto is a doubtful one, which must not colour the command once a better one is there.</summary>
     private double Smooth(long timeUs, in Gauge netto)
     {
+        if (!IsSettled(timeUs))
+        {
+            return double.NaN;
+        }
+
         if (netto.Sigma * MuchSurer < _firstSigmaMps)
         {
-            Reset();
+            ForgetNetto();
         }
 
         if (double.IsNaN(_firstSigmaMps))

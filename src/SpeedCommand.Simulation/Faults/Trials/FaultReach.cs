@@ -16,7 +16,7 @@ public sealed record FaultReach(bool IsNoticed, double AfterS)
     /// After a gap the load factor is assumed until its sensor's next sample, up to 0.2 s, and smoothed from that one sample on, with a
     /// time constant of 1 s: so long the least-sink speed may be that of another load, s.
     /// </summary>
-    public const double LoadS = 1.5;
+    public const double LoadS = 2;
 
     /// <summary>By how much, as a share of the speed: the square root of a load factor between 1 and 1.7, a hard pull-up.</summary>
     public const double LoadShare = 0.3;
