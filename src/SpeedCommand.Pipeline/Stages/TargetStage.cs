@@ -26,15 +26,11 @@ internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge Sp
 /// <summary>Air, load and netto in, speeds to fly out.</summary>
 internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
 {
-    /// <summary>A netto this many times surer than the one the smoothing began with makes it begin again.</summary>
-    private const double MuchSurer = 2;
-
     private readonly SmoothNetto _smoothNetto = new();
 
     /// <summary>The doubt of the smoothed netto: that of its parts, smoothed alike, since they are wrong together.</summary>
     private readonly SmoothNetto _smoothSigma = new();
 
-    private double _firstSigmaMps = double.NaN;
     private long _settledUs = long.MaxValue;
 
     public Loading LoadingAt(double loadFactor) => new(settings.MassKg, loadFactor, settings.BugsFraction);
@@ -45,7 +41,8 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
     /// <summary>Forgets the air flown through, as after a silence.</summary>
     public void Reset()
     {
-        ForgetNetto();
+        _smoothNetto.Reset();
+        _smoothSigma.Reset();
         _settledUs = long.MaxValue;
     }
 
@@ -79,29 +76,11 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
             circle.IsKnown ? circle.SinkMps : double.NaN);
     }
 
-    private void ForgetNetto()
-    {
-        _smoothNetto.Reset();
-        _smoothSigma.Reset();
-        _firstSigmaMps = double.NaN;
-    }
-
-    /// <summary>The first netto is a doubtful one, which must not colour the command once a better one is there.</summary>
     private double Smooth(long timeUs, in Gauge netto)
     {
         if (!IsSettled(timeUs))
         {
             return double.NaN;
-        }
-
-        if (netto.Sigma * MuchSurer < _firstSigmaMps)
-        {
-            ForgetNetto();
-        }
-
-        if (double.IsNaN(_firstSigmaMps))
-        {
-            _firstSigmaMps = netto.Sigma;
         }
 
         _smoothSigma.Add(timeUs, netto.Sigma);
