@@ -14,6 +14,7 @@ namespace SpeedCommand.Simulation.Tests.Faults;
 /// The whole way from bytes to picture lines for twenty minutes of flight on a bad day, or for as many hours as SPEEDCOMMAND_SOAK_HOURS
 /// says: the demo flight over and over, each time with other faults, through the same framers, pipeline and writer.
 /// </summary>
+[Collection("alone")]
 public class SoakTests(ITestOutputHelper output)
 {
     private const double UsualHours = 1.0 / 3;
@@ -147,3 +148,7 @@ public class SoakTests(ITestOutputHelper output)
         public void OnLine(ReadOnlySpan<byte> line) => pipeline.Accept(TimeUs, _stream, line);
     }
 }
+
+/// <summary>Memory and handles are those of the process: no other test may run meanwhile.</summary>
+[CollectionDefinition("alone", DisableParallelization = true)]
+public class AloneCollection;

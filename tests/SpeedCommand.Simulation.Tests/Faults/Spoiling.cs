@@ -39,7 +39,8 @@ internal static class Spoiling
         var (dollar, star) = (line.LastIndexOf('$'), line.LastIndexOf('*'));
         return dollar >= 0 && star == line.Length - 3
             && line[(dollar + 1)..star].Aggregate(0, (sum, letter) => sum ^ letter).ToString("X2", CultureInfo.InvariantCulture) == line[(star + 1)..]
-            ? double.Parse(line[(dollar + 1)..].Split(',')[2], CultureInfo.InvariantCulture)
+            && double.TryParse(line[(dollar + 1)..].Split(',').ElementAtOrDefault(2), CultureInfo.InvariantCulture, out var value)
+            ? value
             : double.NaN;
     }
 

@@ -36,7 +36,7 @@ public class WrongNumberTests
 
     /// <summary>The judge must be awake.</summary>
     [Theory]
-    [InlineData("minimum sink", 1.06, 0)]
+    [InlineData("minimum sink", 1.12, 0)]
     [InlineData("minimum sink", 1, -1.3)]
     [InlineData("best glide", 1, 0.05)]
     [InlineData("speed to fly", 1, 12)]
