@@ -28,11 +28,11 @@ public class WrongNumberTests
     {
         var trials = new FaultTrials(Marram, 1);
         Assert.Equal(trials.Fly(16).Fault, trials.Fly(16).Fault);
-        Assert.Equal(Good.Fly(new FaultPlan("x", [Mild]), 3), Good.Fly(new FaultPlan("x", [Mild]), 3));
+        Assert.Equal(Good.Fly(new FaultPlan("x", [Mild]), 3, out _), Good.Fly(new FaultPlan("x", [Mild]), 3, out _));
     }
 
     [Fact]
-    public void Judge_GoodFlightItself_IsRight() => Assert.Empty(WrongNumberJudge.Judge(Good, Good.Pictures, Mild, 1));
+    public void Judge_GoodFlightItself_IsRight() => Assert.Empty(WrongNumberJudge.Judge(Good, Good.Pictures, Mild, FaultReach.Of(Mild.Kind), 1));
 
     /// <summary>The judge must be awake.</summary>
     [Theory]
@@ -55,12 +55,12 @@ public class WrongNumberTests
             SpeedToFlyIndicatedMps = speedToFly,
             HoldIndicatedMps = Off(speedToFly, "hold"),
         };
-        Assert.Equal(target, Assert.Single(WrongNumberJudge.Judge(Good, faulty, Mild, 1)).Target);
+        Assert.Equal(target, Assert.Single(WrongNumberJudge.Judge(Good, faulty, Mild, FaultReach.Of(Mild.Kind), 1)).Target);
     }
 
     [Fact]
     public void Judge_Blank_IsNeverWrong() => Assert.Empty(WrongNumberJudge.Judge(
-        Good, [.. Good.Pictures.Select(picture => CockpitPicture.Blank(picture.TimeUs, PictureFaults.None))], Mild, 1));
+        Good, [.. Good.Pictures.Select(picture => CockpitPicture.Blank(picture.TimeUs, PictureFaults.None))], Mild, FaultReach.Of(Mild.Kind), 1));
 
     [Fact]
     public void DrawnFaults_AreOfEveryKind_AndOverBeforeTheFlightIs()

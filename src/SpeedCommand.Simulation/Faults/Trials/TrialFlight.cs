@@ -14,6 +14,7 @@ namespace SpeedCommand.Simulation.Faults.Trials;
 public sealed class TrialFlight : ISimulatedFlightSink
 {
     private readonly List<(long TimeUs, byte[] Stream, byte[] Line)> _lines = [];
+    private readonly HashSet<string> _sent = new(StringComparer.Ordinal);
     private readonly FlightSettings _settings;
 
     /// <summary>Flies a scenario once.</summary>
@@ -27,7 +28,7 @@ public sealed class TrialFlight : ISimulatedFlightSink
         var simulator = new FlightSimulator(scenario, settings.Glider, seed);
         simulator.Fly(this);
         EndUs = simulator.TimeUs;
-        Pictures = Fly(new FaultPlan("none", []), seed);
+        Pictures = Fly(new FaultPlan("none", []), seed, out _);
         UnsmoothedMps = [.. Pictures.Select(UnsmoothedSpeedToFly)];
     }
 
@@ -46,7 +47,11 @@ public sealed class TrialFlight : ISimulatedFlightSink
     public static FlightSettings SettingsOf(Glider glider) => new(glider) { ExpectedClimbMps = 1.5 };
 
     /// <inheritdoc/>
-    public void OnLine(long timeUs, ReadOnlySpan<byte> stream, ReadOnlySpan<byte> line) => _lines.Add((timeUs, stream.ToArray(), line.ToArray()));
+    public void OnLine(long timeUs, ReadOnlySpan<byte> stream, ReadOnlySpan<byte> line)
+    {
+        _lines.Add((timeUs, stream.ToArray(), line.ToArray()));
+        _sent.Add(Encoding.Latin1.GetString(line));
+    }
 
     /// <inheritdoc/>
     public void OnTruth(in TruthSample truth)
@@ -56,13 +61,19 @@ public sealed class TrialFlight : ISimulatedFlightSink
     /// <summary>Flies it with faults.</summary>
     /// <param name="plan">The faults.</param>
     /// <param name="seed">Their seed.</param>
+    /// <param name="isForged">Whether a sentence came that no board had sent and whose checksum fits all the same.</param>
     /// <returns>What the pilot sees.</returns>
-    public IReadOnlyList<CockpitPicture> Fly(FaultPlan plan, long seed)
+    public IReadOnlyList<CockpitPicture> Fly(FaultPlan plan, long seed, out bool isForged)
     {
+        var forged = false;
         var pictures = new KeptPictures();
         var pipeline = new FlightPipeline(_settings, pictures);
         var names = new List<byte[]>();
-        var spoiler = new FlightSpoiler(plan, seed, new PortLines((timeUs, stream, line) => pipeline.Accept(timeUs, StreamOf(stream), line)));
+        var spoiler = new FlightSpoiler(plan, seed, new PortLines((timeUs, stream, line) =>
+        {
+            forged |= IsForged(line);
+            pipeline.Accept(timeUs, StreamOf(stream), line);
+        }));
         foreach (var (timeUs, stream, line) in _lines)
         {
             spoiler.OnLine(timeUs, stream, line);
@@ -70,6 +81,7 @@ public sealed class TrialFlight : ISimulatedFlightSink
 
         spoiler.Finish(EndUs);
         pipeline.AdvanceTo(spoiler.StampOf(EndUs));
+        isForged = forged;
         return pictures.List;
 
         int StreamOf(ReadOnlySpan<byte> name)
@@ -86,6 +98,9 @@ public sealed class TrialFlight : ISimulatedFlightSink
             return pipeline.AddStream(Encoding.ASCII.GetString(name), ChecksumRule.Required);
         }
     }
+
+    private bool IsForged(ReadOnlySpan<byte> line) => SentenceReader.TryRead(line, ChecksumRule.Required, out _) == SentenceFault.None
+        && !_sent.Contains(Encoding.Latin1.GetString(line[line.LastIndexOf((byte)'$')..]));
 
     private double UnsmoothedSpeedToFly(CockpitPicture picture)
     {

@@ -36,14 +36,16 @@ public static class WrongNumberJudge
     /// <param name="good">The flight without the fault.</param>
     /// <param name="faulty">Its pictures with it.</param>
     /// <param name="fault">The fault, at an exact time.</param>
+    /// <param name="reach">How far it may reach.</param>
     /// <param name="seed">The trial's seed, for the list.</param>
     /// <returns>Every target that is wrong, picture by picture.</returns>
-    public static IEnumerable<WrongNumber> Judge(TrialFlight good, IReadOnlyList<CockpitPicture> faulty, FaultSpec fault, long seed)
+    public static IEnumerable<WrongNumber> Judge(
+        TrialFlight good, IReadOnlyList<CockpitPicture> faulty, FaultSpec fault, FaultReach reach, long seed)
     {
         ArgumentNullException.ThrowIfNull(good);
         ArgumentNullException.ThrowIfNull(faulty);
         ArgumentNullException.ThrowIfNull(fault);
-        var reach = FaultReach.Of(fault.Kind);
+        ArgumentNullException.ThrowIfNull(reach);
         foreach (var picture in faulty.Where(picture => reach.IsNoticed || !IsWithin(picture, fault, reach.AfterS)))
         {
             foreach (var target in Targets)
