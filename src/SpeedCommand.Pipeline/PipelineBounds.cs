@@ -14,6 +14,18 @@ public static class PipelineBounds
     /// </summary>
     public const long FreshnessUs = 1_000_000 - PicturePeriodUs;
 
+    /// <summary>
+    /// A load factor or bank older than this is silent, and an assumed one stands in. Boards send it as seldom as three times a second:
+    /// it must outlast the pressures by that much, lest a line that falls silent moves the targets before it blanks them.
+    /// </summary>
+    public const long LoadFreshnessUs = FreshnessUs + 350_000;
+
+    /// <summary>
+    /// After a silence the climb begins anew from two readings that were not sensed at the same moment, and is surer of itself than
+    /// it should be: the speed to fly waits so long. Half of the two seconds promised for its return.
+    /// </summary>
+    public const long SettlingUs = 1_000_000;
+
     /// <summary>Air temperature changes slowly, and thermometers are slow: after this the standard atmosphere stands in.</summary>
     public const long TemperatureFreshnessUs = 10_000_000;
 

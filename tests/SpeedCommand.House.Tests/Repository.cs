@@ -26,9 +26,9 @@ internal static class Repository
     public static IEnumerable<string> Sources(params string[] folders) => Files.Where(file =>
         file.EndsWith(".cs", StringComparison.Ordinal) && folders.Any(folder => file.StartsWith(folder + "/", StringComparison.Ordinal)));
 
-    /// <summary>README.md, DEVELOPERS.md and everything under docs.</summary>
+    /// <summary>README.md, DEVELOPERS.md and everything under docs and replay-logs.</summary>
     public static IEnumerable<string> Documents => Files.Where(file => file.EndsWith(".md", StringComparison.Ordinal)
-        && (!file.Contains('/') || file.StartsWith("docs/", StringComparison.Ordinal)));
+        && (!file.Contains('/') || file.StartsWith("docs/", StringComparison.Ordinal) || file.StartsWith("replay-logs/", StringComparison.Ordinal)));
 
     public static string PathOf(string file) => Path.Combine(Root, file);
 

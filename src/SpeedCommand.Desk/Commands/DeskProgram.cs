@@ -13,6 +13,8 @@ internal static class DeskProgram
             CardCommand.Create(),
             PlanCommand.Create(),
             SimulateCommand.Create(),
+            SpoilCommand.Create(),
+            FaultsCommand.Create(),
             ScoreCommand.Create(),
             GuidanceCommand.Create(),
             NoiseCommand.Create(),

@@ -49,7 +49,7 @@ internal sealed class LoadStage
     {
         _bankRad.Set(timeUs, bankRad);
         _bankFilter.Add(1 / Math.Cos(bankRad));
-        if (!_loadFactor.IsFresh(timeUs, PipelineBounds.FreshnessUs))
+        if (!_loadFactor.IsFresh(timeUs, PipelineBounds.LoadFreshnessUs))
         {
             Smooth(timeUs, 1 / Math.Cos(bankRad));
         }
@@ -57,17 +57,17 @@ internal sealed class LoadStage
 
     /// <summary>Whether a sensor tells; without one the load is assumed.</summary>
     public bool IsMeasured(long nowUs) =>
-        _loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs) || _bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs);
+        _loadFactor.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs) || _bankRad.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs);
 
     /// <summary>The load at this moment; without a sensor a usual one for what the glider does.</summary>
     public LoadBelief Present(long nowUs, FlightPhase phase)
     {
-        if (_loadFactor.IsFresh(nowUs, PipelineBounds.FreshnessUs))
+        if (_loadFactor.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs))
         {
             return new LoadBelief(Likely(_loadFilter.Value, LoadSensorSigma), LoadSensorSigma);
         }
 
-        if (_bankRad.IsFresh(nowUs, PipelineBounds.FreshnessUs))
+        if (_bankRad.IsFresh(nowUs, PipelineBounds.LoadFreshnessUs))
         {
             return new LoadBelief(Likely(_bankFilter.Value, LevelSigma), BankSensorSigma);
         }

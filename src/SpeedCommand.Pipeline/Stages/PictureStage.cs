@@ -198,7 +198,7 @@ internal sealed class PictureStage
         faults |= _airData.IsAirspeedFresh(nowUs) ? Faults.None : Faults.AirspeedSilent;
         faults |= _airData.IsTemperatureFresh(nowUs) ? Faults.None : Faults.TemperatureSilent;
         faults |= IsOutsidePolar(picture) ? Faults.OutsidePolar : Faults.None;
-        faults |= picture.NettoMps.IsKnown && !picture.SpeedToFlyIndicatedMps.IsKnown ? Faults.NoLimits : Faults.None;
+        faults |= picture.NettoMps.IsKnown && !picture.SpeedToFlyIndicatedMps.IsKnown && _targets.IsSettled(nowUs) ? Faults.NoLimits : Faults.None;
         return faults;
     }
 }

@@ -28,13 +28,26 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
 {
     private readonly SmoothNetto _smoothNetto = new();
 
+    /// <summary>The doubt of the smoothed netto: that of its parts, smoothed alike, since they are wrong together.</summary>
+    private readonly SmoothNetto _smoothSigma = new();
+
+    private long _settledUs = long.MaxValue;
+
     public Loading LoadingAt(double loadFactor) => new(settings.MassKg, loadFactor, settings.BugsFraction);
 
     public bool TrySink(TrueAirspeed airspeed, in Air air, double loadFactor, out double sinkMps) =>
         targets.TrySink(airspeed, air, LoadingAt(loadFactor), out sinkMps);
 
     /// <summary>Forgets the air flown through, as after a silence.</summary>
-    public void Reset() => _smoothNetto.Reset();
+    public void Reset()
+    {
+        _smoothNetto.Reset();
+        _smoothSigma.Reset();
+        _settledUs = long.MaxValue;
+    }
+
+    /// <summary>Whether the climb has been there long enough for a speed to fly.</summary>
+    public bool IsSettled(long timeUs) => timeUs >= _settledUs;
 
     /// <summary>Computes once a picture.</summary>
     public Targets At(in TargetInputs inputs)
@@ -42,11 +55,12 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
         var straight = LoadingAt(1);
         var minSink = targets.MinSink(inputs.Air, LoadingAt(inputs.SteadyLoad));
         var bestGlide = targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
-        var netto = inputs.IsOutsidePolar ? 0 : _smoothNetto.Add(inputs.TimeUs, inputs.Netto.Value);
+        _settledUs = Math.Min(_settledUs, inputs.TimeUs + PipelineBounds.SettlingUs);
+        var netto = inputs.IsOutsidePolar ? 0 : Smooth(inputs.TimeUs, inputs.Netto);
         var speedToFly = double.IsNaN(netto) || !(inputs.Netto.IsKnown || inputs.IsOutsidePolar)
             ? default
             : targets.SpeedToFly(inputs.Air, straight, settings.ExpectedClimbMps, netto);
-        var sigma = inputs.IsOutsidePolar ? double.NaN : Math.Abs(speedToFly.AirSensitivity) * inputs.Netto.Sigma;
+        var sigma = inputs.IsOutsidePolar ? double.NaN : DoubtOf(speedToFly, inputs.Air, netto);
         if (speedToFly.Speed.IsKnown && minSink.IsKnown && speedToFly.Speed.IndicatedAirspeedMps < minSink.IndicatedAirspeedMps)
         {
             // In a turn or a pull-up the stall comes up; so does the slowest speed that may be asked for.
@@ -61,6 +75,32 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
             speedToFly.LimitedBy,
             circle.IsKnown ? circle.SinkMps : double.NaN);
     }
+
+    private double Smooth(long timeUs, in Gauge netto)
+    {
+        if (!IsSettled(timeUs))
+        {
+            return double.NaN;
+        }
+
+        _smoothSigma.Add(timeUs, netto.Sigma);
+        return _smoothNetto.Add(timeUs, netto.Value);
+    }
+
+    /// <summary>
+    /// How far the speed to fly moves with netto's doubt. One that a limit holds does not move with a little of it, which says nothing
+    /// about how well it is known: there netto is tried with all of its doubt, both ways.
+    /// </summary>
+    private double DoubtOf(in SpeedToFlyTarget speedToFly, in Air air, double netto)
+    {
+        var doubt = _smoothSigma.NettoMps;
+        return speedToFly.AirSensitivity != 0
+            ? Math.Abs(speedToFly.AirSensitivity) * doubt
+            : Math.Max(Apart(speedToFly, air, netto - doubt), Apart(speedToFly, air, netto + doubt));
+    }
+
+    private double Apart(in SpeedToFlyTarget speedToFly, in Air air, double netto) => Math.Abs(
+        targets.SpeedToFly(air, LoadingAt(1), settings.ExpectedClimbMps, netto).Speed.IndicatedAirspeedMps - speedToFly.Speed.IndicatedAirspeedMps);
 
     private static Gauge Show(in TargetSpeed speed, double sigma, double ageS) =>
         speed.IsKnown ? new Gauge(speed.IndicatedAirspeedMps, sigma, ageS) : Gauge.Blank;

@@ -10,7 +10,8 @@ internal static class ScenarioSensors
     public static readonly (string Word, SensorGrade Value)[] Grades =
         [("common", SensorGrade.Common), ("fine", SensorGrade.Fine), ("poor", SensorGrade.Poor)];
 
-    private static readonly (string Word, ReadingKind Value)[] Kinds =
+    /// <summary>The words for the kinds of reading: the ids of their sentences.</summary>
+    public static readonly (string Word, ReadingKind Value)[] Kinds =
     [
         ("STATIC", ReadingKind.StaticPressurePa), ("IMPACT", ReadingKind.ImpactPressurePa),
         ("TEPROBE", ReadingKind.TotalEnergyProbePa), ("IAS", ReadingKind.IndicatedAirspeedMps),
@@ -58,7 +59,8 @@ internal static class ScenarioSensors
         return trouble;
     }
 
-    private static double ErrorIn(JsonFields fields, string key, ReadingKind kind, double usual) => kind switch
+    /// <summary>A deviation of a reading, in its SI unit; a missing one without a usual value is a fault.</summary>
+    public static double ErrorIn(JsonFields fields, string key, ReadingKind kind, double? usual) => kind switch
     {
         ReadingKind.StaticPressurePa or ReadingKind.ImpactPressurePa or ReadingKind.TotalEnergyProbePa =>
             fields.Quantity(key, QuantityKind.Pressure, usual),
