@@ -4,15 +4,16 @@ using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Sentences;
 using SpeedCommand.Simulation.Scenarios;
 using SpeedCommand.Simulation.Sensors;
+using Fault = SpeedCommand.Pipeline.Picture.Faults;
 
 namespace SpeedCommand.Simulation.Tests;
 
 /// <summary>Sound sensors of any grade, in any air, name no fault of health: a false alarm blanks a number the pilot needs.</summary>
 public class FalseAlarmTests
 {
-    private const Faults Health = Faults.StaticBlocked | Faults.PitotBlocked | Faults.StaticStuck | Faults.AirspeedStuck
-        | Faults.StaticJumps | Faults.AirspeedJumps | Faults.TemperatureJumps | Faults.LoadJumps | Faults.ProbeDoubtful
-        | Faults.StaticDisagrees | Faults.AirspeedDisagrees | Faults.ThermometerDoubtful;
+    private const Fault Health = Fault.StaticBlocked | Fault.PitotBlocked | Fault.StaticStuck | Fault.AirspeedStuck
+        | Fault.StaticJumps | Fault.AirspeedJumps | Fault.TemperatureJumps | Fault.LoadJumps | Fault.ProbeDoubtful
+        | Fault.StaticDisagrees | Fault.AirspeedDisagrees | Fault.ThermometerDoubtful;
 
     public static TheoryData<string, SensorGrade> Flights
     {
@@ -45,7 +46,7 @@ public class FalseAlarmTests
 
     private sealed class FaultSpans : IPictureSink
     {
-        private Faults _before;
+        private Fault _before;
 
         public List<string> Seen { get; } = [];
 
@@ -56,7 +57,7 @@ public class FalseAlarmTests
             Count++;
             var begun = picture.Faults & Health & ~_before;
             _before = picture.Faults & Health;
-            if (begun != Faults.None)
+            if (begun != Fault.None)
             {
                 Seen.Add($"{begun} at {picture.TimeS:F1} s");
             }

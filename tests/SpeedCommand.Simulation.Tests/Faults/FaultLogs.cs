@@ -39,7 +39,7 @@ internal static class FaultLogs
     {
         var pilot = new Pilot();
         using var records = FlightLogReader.Open(log);
-        new FlightReplay(records, new FlightPipeline(new FlightSettings(Marram), pilot), _ => ChecksumRule.Required).RunToEnd();
+        new FlightReplay(records, new FlightPipeline(new FlightSettings(Marram), pilot), _ => StreamSettings.Sentences(ChecksumRule.Required)).RunToEnd();
         Assert.Empty(records.Problems);
         return pilot.Pictures;
     }
