@@ -36,7 +36,7 @@ public sealed class ReplayCommandTests : IDisposable
         // 45 s at 2 x 20 Hz; the flight begins at 90 000 Pa, which are 988.5 m (ISO 2533), and sinks. The static port's error is 12 Pa, a metre, at most.
         var fields = rows[4].Split(' ', StringSplitOptions.RemoveEmptyEntries);
         Assert.Equal([first, "done", "0:00:44", "1800", "0"], fields[..5]);
-        Assert.Equal(988.5, double.Parse(fields[5]), 2);
+        Assert.Equal(988.5, double.Parse(fields[5]), 2.0);
         var told = errors.Split('\n', StringSplitOptions.RemoveEmptyEntries);
         Assert.Equal(["1 of 4 flights", "2 of 4 flights", "3 of 4 flights", "4 of 4 flights"], told[..4].Select(line => line.Split(':')[0]));
         Assert.StartsWith($"{missing}: expected a flight log", told[4], StringComparison.Ordinal);
