@@ -2,12 +2,6 @@ using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Simulation.Faults;
 
-/// <summary>Takes a line that was framed from the bytes of a port.</summary>
-/// <param name="timeUs">When its last bytes arrived, microseconds.</param>
-/// <param name="stream">Name of the port's stream.</param>
-/// <param name="line">The line without its end; valid during the call.</param>
-public delegate void PortLineTaker(long timeUs, ReadOnlySpan<byte> stream, ReadOnlySpan<byte> line);
-
 /// <summary>Cuts the bytes of each port into lines as the service does: a framer a port, emptied by a hang-up.</summary>
 /// <param name="take">Who takes the lines.</param>
 public sealed class PortLines(PortLineTaker take) : IPortBytesSink
