@@ -126,9 +126,13 @@ public sealed class FlightPipeline
     /// <summary>The age of a number counts from its arrival; what the estimator joins, it joins at the moment of the sample.</summary>
     private void Take(in Reading reading, long sampleUs)
     {
-        if (!_health.Accepts(TimeUs, reading))
+        switch (_health.Judge(TimeUs, reading))
         {
-            return;
+            case Verdict.Refused:
+                return;
+            case Verdict.NewTruth:
+                _energy.Reset();
+                break;
         }
 
         switch (reading.Kind)

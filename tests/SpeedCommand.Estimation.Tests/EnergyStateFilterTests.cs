@@ -19,7 +19,7 @@ public class EnergyStateFilterTests
         const double Q = 0.1;
         var noise = new EnergyNoise(1e-12, Q, 1e-12, 1e-12, Q * T * T * T / qT3OverR, 1e-12);
         var filter = new EnergyStateFilter();
-        filter.Start(0, 0, noise);
+        filter.Start(new EnergyStart(0, 0), noise);
         for (var i = 0; i < 2000; i++)
         {
             TakeBoth(filter, T, 0, noise);
@@ -43,7 +43,7 @@ public class EnergyStateFilterTests
     {
         var noise = new EnergyNoise(1e-12, 1e-12, 1e-12, 1e-12, 0.01, 1e-12);
         var filter = new EnergyStateFilter();
-        filter.Start(0, 0, noise);
+        filter.Start(new EnergyStart(0, 0), noise);
         for (var i = 1; i < samples; i++)
         {
             TakeBoth(filter, everyS, 0, noise);
@@ -63,7 +63,7 @@ public class EnergyStateFilterTests
     {
         var noise = new EnergyNoise(0.1, 0.005, 1, 0.01, 0.01, 0.01);
         var filter = new EnergyStateFilter();
-        filter.Start(1000, 40, noise);
+        filter.Start(new EnergyStart(1000, 40), noise);
         var step = new EnergyStep(0.05, default);
         var instant = new EnergyStep(0, default);
         for (var i = 1; i <= 4000; i++)
@@ -85,7 +85,7 @@ public class EnergyStateFilterTests
         // here in steps of a millisecond, independently of the filter.
         var noise = new EnergyNoise(0.02, 0.004, 200, 1e-4, 1e-4, 1e-4);
         var filter = new EnergyStateFilter();
-        filter.Start(1000, 60, noise);
+        filter.Start(new EnergyStart(1000, 60), noise);
         double tubeHeight = 1000, tubeKinetic = 60, worst = 0;
         for (var ms = 1; ms <= 12_000; ms++)
         {

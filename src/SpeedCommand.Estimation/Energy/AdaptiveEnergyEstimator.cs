@@ -14,6 +14,9 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     /// <summary>A sample that comes later than this is dropped, microseconds.</summary>
     private const long MaxLateUs = 500_000;
 
+    /// <summary>How fast a height may be changing when the instrument comes alive, m/s: a dive or a zoom.</summary>
+    private const double StartRateMps = 11;
+
     /// <summary>Over a longer gap than this the old state is no guide to the new one, microseconds.</summary>
     private const long MaxGapUs = 2_000_000;
 
@@ -34,6 +37,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     private long _timeUs;
     private long _firstProbeUs;
     private double _firstHeightM;
+    private long _firstHeightUs;
     private double _heightDatumM;
     private double _energyDatumM;
     private bool _started;
@@ -176,16 +180,17 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         switch (channel)
         {
             case EnergyChannel.Height:
-                _firstHeightM = metres;
+                (_firstHeightM, _firstHeightUs) = (metres, timeUs);
                 break;
             case EnergyChannel.Kinetic when !double.IsNaN(_firstHeightM):
-                Start(_firstHeightM, metres, 0);
+                var staleM = StartRateMps * (timeUs - _firstHeightUs) * 1e-6;
+                Start(new EnergyStart(_firstHeightM, metres, 0, staleM * staleM));
                 break;
             case EnergyChannel.Probe:
                 _firstProbeUs = Math.Min(_firstProbeUs, timeUs);
                 if (timeUs - _firstProbeUs >= PatienceUs)
                 {
-                    Start(double.IsNaN(_firstHeightM) ? metres - TotalEnergyProbe.UsualKineticM : _firstHeightM, TotalEnergyProbe.UsualKineticM, GuessVarianceM2);
+                    Start(new EnergyStart(double.IsNaN(_firstHeightM) ? metres - TotalEnergyProbe.UsualKineticM : _firstHeightM, TotalEnergyProbe.UsualKineticM, GuessVarianceM2));
                     StartProbe(new EnergyStep(0, _lags, hasAirspeed: false), metres);
                 }
 
@@ -193,10 +198,10 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         }
     }
 
-    private void Start(double heightM, double kineticM, double guessVarianceM2)
+    private void Start(in EnergyStart start)
     {
         _started = true;
-        _modes.Start(heightM, kineticM, guessVarianceM2, _learner.Noise);
-        _learner.Start(heightM, kineticM, guessVarianceM2);
+        _modes.Start(start, _learner.Noise);
+        _learner.Start(start);
     }
 }

@@ -38,12 +38,10 @@ public sealed class EnergyStateFilter
     /// <summary>Its rate, m/s.</summary>
     public double KineticRateMps => _state[KineticRate];
 
-    /// <summary>Starts anew from one height and one kinetic height, without a probe.</summary>
-    /// <param name="heightM">Height, m.</param>
-    /// <param name="kineticM">Kinetic height, m.</param>
+    /// <summary>Starts anew from one height and one kinetic height.</summary>
+    /// <param name="start">The two.</param>
     /// <param name="noise">The noise.</param>
-    /// <param name="guessVarianceM2">What to add to the kinetic height's variance when it is a guess, m².</param>
-    public void Start(double heightM, double kineticM, in EnergyNoise noise, double guessVarianceM2 = 0)
+    public void Start(in EnergyStart start, in EnergyNoise noise)
     {
         // ±5 m/s of climb and ±10 m/s of kinetic height cover whatever a glider does when the instrument comes alive.
         const double ClimbVarianceAtStart = 25;
@@ -52,18 +50,19 @@ public sealed class EnergyStateFilter
         _count = StatesWithoutProbe;
         Array.Clear(_covariance);
         Array.Clear(_state);
-        _state[EnergyHeight] = heightM + kineticM;
-        _state[Kinetic] = _state[TubeKinetic] = kineticM;
-        _state[TubeHeight] = heightM;
-        var kinetic = noise.KineticVarianceM2 + noise.GustVarianceM2 + guessVarianceM2;
-        Set(EnergyHeight, EnergyHeight, kinetic + noise.HeightVarianceM2);
+        _state[EnergyHeight] = start.HeightM + start.KineticM;
+        _state[Kinetic] = _state[TubeKinetic] = start.KineticM;
+        _state[TubeHeight] = start.HeightM;
+        var kinetic = noise.KineticVarianceM2 + noise.GustVarianceM2 + start.GuessVarianceM2;
+        Set(EnergyHeight, EnergyHeight, kinetic + noise.HeightVarianceM2 + start.StaleVarianceM2);
+        Set(EnergyHeight, TubeHeight, start.StaleVarianceM2);
         Set(EnergyHeight, Kinetic, kinetic);
         Set(EnergyHeight, Gust, -noise.GustVarianceM2);
         Set(Kinetic, Kinetic, kinetic);
         Set(Kinetic, Gust, -noise.GustVarianceM2);
         Set(Gust, Gust, noise.GustVarianceM2);
-        Set(TubeHeight, TubeHeight, noise.HeightVarianceM2);
-        Set(TubeKinetic, TubeKinetic, noise.KineticVarianceM2 + guessVarianceM2);
+        Set(TubeHeight, TubeHeight, noise.HeightVarianceM2 + start.StaleVarianceM2);
+        Set(TubeKinetic, TubeKinetic, noise.KineticVarianceM2 + start.GuessVarianceM2);
         Set(Staying, Staying, ClimbVarianceAtStart);
         Set(Passing, Passing, noise.ClimbDensity * EnergyStep.PassingTimeS / 2);
         Set(KineticRate, KineticRate, KineticRateVarianceAtStart);

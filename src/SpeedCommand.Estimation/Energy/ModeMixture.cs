@@ -55,12 +55,12 @@ internal sealed class ModeMixture
     /// <summary>How likely it is that the pilot moves the stick, 0 to 1.</summary>
     public double StickWeight => _weights[(int)FlightMode.Stick];
 
-    public void Start(double heightM, double kineticM, double guessVarianceM2, in EnergyNoise noise)
+    public void Start(in EnergyStart start, in EnergyNoise noise)
     {
         _weights[0] = 1;
         for (var i = 1; i < Modes; i++)
         {
-            _filters[i].Start(heightM, kineticM, NoiseOf((FlightMode)i, noise), guessVarianceM2);
+            _filters[i].Start(start, NoiseOf((FlightMode)i, noise));
             _weights[i] = 0;
         }
     }

@@ -36,13 +36,13 @@ internal sealed class NoiseLearner
     /// <summary>The filter with that noise.</summary>
     public EnergyStateFilter Usual { get; }
 
-    public void Start(double heightM, double kineticM, double guessVarianceM2)
+    public void Start(in EnergyStart start)
     {
         _running = ProbeVariance;
-        Usual.Start(heightM, kineticM, Noise, guessVarianceM2);
+        Usual.Start(start, Noise);
         for (var i = 0; i < _running; i++)
         {
-            _filters[i].Start(heightM, kineticM, _perturbed[i], guessVarianceM2);
+            _filters[i].Start(start, _perturbed[i]);
         }
     }
 

@@ -31,26 +31,33 @@ internal sealed class HealthStage(AirDataStage airData, EventFaults events)
     /// <summary>Judges a reading that is in range.</summary>
     /// <param name="timeUs">The moment, microseconds.</param>
     /// <param name="reading">The reading.</param>
-    /// <returns>Whether it may be used.</returns>
-    public bool Accepts(long timeUs, in Reading reading)
+    /// <returns>What to do with it.</returns>
+    public Verdict Judge(long timeUs, in Reading reading)
     {
-        switch (reading.Kind)
+        var watch = reading.Kind switch
         {
-            case ReadingKind.StaticPressurePa:
-                return Passes(_static, timeUs, reading.Value, out var sinceUs) ? PassesLines(timeUs, reading) : TakeBackStatic(sinceUs);
-            case ReadingKind.ImpactPressurePa:
-                return Passes(_impact, timeUs, reading.Value, out sinceUs) ? PassesLines(timeUs, reading) : TakeBackImpact(sinceUs);
-            case ReadingKind.IndicatedAirspeedMps:
-                return Passes(_indicated, timeUs, reading.Value, out sinceUs) ? PassesLines(timeUs, reading) : TakeBackImpact(sinceUs);
-            case ReadingKind.TotalEnergyProbePa:
-                return Passes(_probe, timeUs, reading.Value, out _);
-            case ReadingKind.OutsideAirTemperatureK:
-                return Passes(_temperature, timeUs, reading.Value, out _);
-            case ReadingKind.LoadFactor:
-                return Passes(_load, timeUs, reading.Value, out _);
-            default:
-                return true;
+            ReadingKind.StaticPressurePa => _static,
+            ReadingKind.ImpactPressurePa => _impact,
+            ReadingKind.IndicatedAirspeedMps => _indicated,
+            ReadingKind.TotalEnergyProbePa => _probe,
+            ReadingKind.OutsideAirTemperatureK => _temperature,
+            ReadingKind.LoadFactor => _load,
+            _ => null,
+        };
+        if (watch is null)
+        {
+            return Verdict.Good;
         }
+
+        var verdict = watch.Judge(timeUs, reading.Value, airData.IsFlying(timeUs), out var sinceUs, out var fault);
+        NoteIf(fault != Faults.None, fault, timeUs);
+        if (reading.Kind is ReadingKind.StaticPressurePa or ReadingKind.ImpactPressurePa or ReadingKind.IndicatedAirspeedMps)
+        {
+            return verdict == Verdict.Refused ? TakeBack(fault, sinceUs) : PassesLines(timeUs, reading) ? verdict : Verdict.Refused;
+        }
+
+        // A new temperature or load is no reason to doubt the climb.
+        return verdict == Verdict.NewTruth && reading.Kind != ReadingKind.TotalEnergyProbePa ? Verdict.Good : verdict;
     }
 
     /// <summary>Looks at a temperature that is in use, and at the humidity with it.</summary>
@@ -92,18 +99,19 @@ internal sealed class HealthStage(AirDataStage airData, EventFaults events)
         NoteIf(_gnss.IsSpeedApart, Faults.AirspeedDisagrees, timeUs);
     }
 
-    private bool Passes(SensorWatch watch, long timeUs, double value, out long sinceUs)
+    /// <summary>Of a stuck sensor nothing is known since its value first came; a jump says nothing of what was before it.</summary>
+    private Verdict TakeBack(Faults fault, long sinceUs)
     {
-        var fault = watch.Judge(timeUs, value, airData.IsFlying(timeUs), out sinceUs);
-        if (fault == Faults.None)
+        if (fault == Faults.StaticStuck)
         {
-            return true;
+            airData.TakeBackStatic(sinceUs);
+        }
+        else if (fault == Faults.AirspeedStuck)
+        {
+            airData.TakeBackImpact(sinceUs);
         }
 
-        events.Note(fault, timeUs);
-        var isStuck = (fault & (Faults.StaticStuck | Faults.AirspeedStuck)) != 0;
-        sinceUs = isStuck ? sinceUs : long.MaxValue;
-        return false;
+        return Verdict.Refused;
     }
 
     private bool PassesLines(long timeUs, in Reading reading)
@@ -123,21 +131,19 @@ internal sealed class HealthStage(AirDataStage airData, EventFaults events)
 
         NoteIf(_lines.IsStaticBlocked, Faults.StaticBlocked, timeUs);
         NoteIf(_lines.IsPitotBlocked, Faults.PitotBlocked, timeUs);
-        return reading.Kind == ReadingKind.StaticPressurePa
-            ? !_lines.IsStaticBlocked || TakeBackStatic(long.MinValue / 2)
-            : !_lines.IsPitotBlocked || TakeBackImpact(long.MinValue / 2);
-    }
+        if (reading.Kind == ReadingKind.StaticPressurePa && _lines.IsStaticBlocked)
+        {
+            airData.TakeBackStatic(long.MinValue / 2);
+            return false;
+        }
 
-    private bool TakeBackStatic(long sinceUs)
-    {
-        airData.TakeBackStatic(sinceUs);
-        return false;
-    }
+        if (reading.Kind != ReadingKind.StaticPressurePa && _lines.IsPitotBlocked)
+        {
+            airData.TakeBackImpact(long.MinValue / 2);
+            return false;
+        }
 
-    private bool TakeBackImpact(long sinceUs)
-    {
-        airData.TakeBackImpact(sinceUs);
-        return false;
+        return true;
     }
 
     private void NoteIf(bool happens, Faults fault, long timeUs)

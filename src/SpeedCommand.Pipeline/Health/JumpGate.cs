@@ -25,23 +25,22 @@ internal sealed class JumpGate(double floor, double ratePerS)
     private int _agreeing;
 
     /// <summary>Judges one value.</summary>
-    /// <returns>Whether it may be used.</returns>
-    public bool Accepts(long timeUs, double value)
+    public Verdict Judge(long timeUs, double value)
     {
+        var dt = Math.Max(0, timeUs - _timeUs) * 1e-6;
+        var step = Math.Abs(value - _value);
         if (timeUs - _timeUs > PipelineBounds.FreshnessUs)
         {
             Believe(timeUs, value);
-            return true;
+            return step <= Widest(dt) ? Verdict.Good : Verdict.NewTruth;
         }
 
-        var dt = Math.Max(0, timeUs - _timeUs) * 1e-6;
-        var step = Math.Abs(value - _value);
         if (step <= Widest(dt))
         {
             // A step at the edge of the gate widens it only a little.
             _usualStep += (Math.Min(step, 3 * _usualStep + floor) - _usualStep) * Math.Min(1, dt / MemoryS);
             Believe(timeUs, value);
-            return true;
+            return Verdict.Good;
         }
 
         if (_agreeing == 0 || Math.Abs(value - _suspect) > Widest(Math.Max(0, timeUs - _suspectUs) * 1e-6))
@@ -54,11 +53,11 @@ internal sealed class JumpGate(double floor, double ratePerS)
         (_suspect, _suspectUs) = (value, timeUs);
         if (_agreeing < Confirmations || timeUs - _firstSuspectUs < ConfirmationUs)
         {
-            return false;
+            return Verdict.Refused;
         }
 
         Believe(timeUs, value);
-        return true;
+        return Verdict.NewTruth;
     }
 
     private double Widest(double dt) => floor + ratePerS * dt + UsualSteps * _usualStep;

@@ -15,11 +15,14 @@ internal sealed class SensorWatch(JumpGate gate, Faults jumps, Faults stuck)
     /// <param name="value">Its value.</param>
     /// <param name="isFlying">Whether the glider flies.</param>
     /// <param name="sinceUs">When a stuck value first came; nothing later is known of what the sensor should read.</param>
-    /// <returns>What is wrong with it, or none.</returns>
-    public Faults Judge(long timeUs, double value, bool isFlying, out long sinceUs)
+    /// <param name="fault">What is wrong with it; none when it may be used.</param>
+    /// <returns>What to do with it.</returns>
+    public Verdict Judge(long timeUs, double value, bool isFlying, out long sinceUs, out Faults fault)
     {
         var isStuck = stuck != Faults.None && _repeats.IsStuckAt(timeUs, value, isFlying);
         sinceUs = _repeats.SinceUs;
-        return isStuck ? stuck : gate.Accepts(timeUs, value) ? Faults.None : jumps;
+        var verdict = isStuck ? Verdict.Refused : gate.Judge(timeUs, value);
+        fault = isStuck ? stuck : verdict == Verdict.Refused ? jumps : Faults.None;
+        return verdict;
     }
 }

@@ -102,6 +102,33 @@ public class FaultLogTests
         Assert.All(after, picture => Assert.Equal(Good[Index(picture)].PressureAltitudeM.Value, picture.PressureAltitudeM.Value, 0.5));
     }
 
+    /// <summary>Sensors that lie are named, and what rests on them is blank: at most a second late, or as late as docs/failures.md says.</summary>
+    [Theory]
+    [InlineData("frozen-static", StaticStuck, 8.0, 13)]
+    [InlineData("frozen-impact", AirspeedStuck, 8.0, 13)]
+    [InlineData("pitot-drained", PitotBlocked, 10.1, 13)]
+    public void LyingSensor_IsNamed_BlankAndBack(string plan, PictureFaults named, double blankFromS, double untilS)
+    {
+        var pictures = Watch(plan);
+        foreach (var picture in pictures.Where(picture => picture.TimeS > blankFromS - 1e-6 && picture.TimeS < untilS))
+        {
+            Assert.Equal(named, picture.Faults & named);
+            Assert.False(picture.HoldIndicatedMps.IsKnown || picture.ClimbMps.IsKnown || picture.MinSinkIndicatedMps.IsKnown);
+        }
+
+        Assert.All(pictures.Where(picture => picture.TimeS > untilS + 2), picture => Assert.True(picture.HoldIndicatedMps.IsKnown));
+    }
+
+    /// <summary>Large spikes are left out; those within what gusts can do move the speed to hold no farther than its own doubt.</summary>
+    [Fact]
+    public void Spikes_AreNamed_AndMoveTheHoldWithinItsDoubt()
+    {
+        var pictures = Watch("spikes");
+        Assert.Contains(pictures, picture => picture.Faults.HasFlag(StaticJumps));
+        Assert.All(pictures.Where(picture => picture.TimeS > 1), picture =>
+            Assert.InRange(Math.Abs(picture.HoldIndicatedMps.Value - Good[Index(picture)].HoldIndicatedMps.Value), 0, 4 * picture.HoldIndicatedMps.Sigma));
+    }
+
     private static int Index(in CockpitPicture picture) => (int)(picture.TimeUs / 100_000) - 1;
 
     private static List<CockpitPicture> Watch(string plan) => FaultLogs.Watch(File.OpenRead(FaultLogs.PathOf(plan)));

@@ -32,7 +32,9 @@ public sealed record FaultReach(bool IsNoticed, double AfterS)
     /// <returns>Its reach.</returns>
     public static FaultReach Of(FaultKind kind) => kind switch
     {
-        FaultKind.Frozen or FaultKind.PitotBlocked or FaultKind.StaticBlocked or FaultKind.Spike or FaultKind.ClockStep => new(false, 10),
+        FaultKind.Frozen or FaultKind.Spike => new(false, 3),
+        FaultKind.PitotBlocked or FaultKind.StaticBlocked => new(false, 7),
+        FaultKind.ClockStep => new(false, 4),
         _ => new(true, 0),
     };
 }

@@ -35,7 +35,8 @@ public sealed class FaultTrials
         var fault = DrawnFaults.Draw(seed);
         var faulty = flight.Fly(new FaultPlan("drawn", [fault]), seed, out var isForged);
         // What the checksum let through is a value that is off, whatever made it.
-        var reach = FaultReach.Of(isForged ? FaultKind.Spike : fault.Kind);
+        var own = FaultReach.Of(fault.Kind);
+        var reach = isForged && own.IsNoticed ? FaultReach.Of(FaultKind.Spike) : own;
         return (fault, [.. WrongNumberJudge.Judge(flight, faulty, fault, reach, seed)]);
     }
 
