@@ -21,10 +21,10 @@ public static class PipelineBounds
     public const long LoadFreshnessUs = FreshnessUs + 350_000;
 
     /// <summary>
-    /// After a silence the climb begins anew from two readings that were not sensed at the same moment, and is surer of itself than
-    /// it should be: the speed to fly waits so long. Half of the two seconds promised for its return.
+    /// After a silence the climb begins anew from a few readings, and the smoothed speed to fly would keep for seconds what it began
+    /// with: it waits so long. A quarter of the two seconds promised for its return.
     /// </summary>
-    public const long SettlingUs = 1_000_000;
+    public const long SettlingUs = 500_000;
 
     /// <summary>Air temperature changes slowly, and thermometers are slow: after this the standard atmosphere stands in.</summary>
     public const long TemperatureFreshnessUs = 10_000_000;
