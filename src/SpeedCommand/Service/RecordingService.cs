@@ -35,7 +35,6 @@ internal sealed class RecordingService(CockpitMachine machine, LatestPicture lat
         using var timer = new PeriodicTimer(Period, time);
         try
         {
-            // Not on the caller's thread: what waits for a disk must not hold up the start of the other services.
             while (await timer.WaitForNextTickAsync(stoppingToken).ConfigureAwait(false))
             {
                 recorder.Drain();

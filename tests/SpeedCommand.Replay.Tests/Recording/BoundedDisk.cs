@@ -19,7 +19,7 @@ internal sealed class BoundedDisk
         public override void Write(ReadOnlySpan<byte> buffer)
         {
             var fitting = (int)Math.Min(buffer.Length, disk.FreeBytes);
-            base.Write(buffer[..fitting]);
+            base.Write(buffer[..fitting].ToArray(), 0, fitting);
             disk.FreeBytes -= fitting;
             if (fitting < buffer.Length)
             {

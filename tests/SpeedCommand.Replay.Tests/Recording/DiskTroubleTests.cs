@@ -44,7 +44,7 @@ public sealed class DiskTroubleTests : IDisposable
             recorder.Drain();
             Assert.Null(recorder.StopReason);
             Assert.Equal(1, LinesIn(disk.Files[1], isPacked));
-        }, iter: 200, threads: 1);
+        }, iter: 100, threads: 1);
 
     [MountFact]
     public void RealFullDisk_ThenAReadOnlyCard_ThenAGoodOne()

@@ -15,7 +15,7 @@ internal sealed class RecordedFiles : IDisposable
     public RecorderOptions Options => new(Folder);
 
     /// <summary>The recordings, the oldest first.</summary>
-    public string[] Paths => [.. Directory.GetFiles(Folder, "*Z-*").Order(StringComparer.Ordinal)];
+    public string[] Paths => [.. Directory.GetFiles(Folder, "*Z-*").OrderBy(path => Path.GetFileName(path).Split('.')[0], StringComparer.Ordinal)];
 
     public void Dispose() => _folder.Delete(recursive: true);
 
