@@ -119,14 +119,16 @@ public sealed class FlightRecorder : IPictureSink, IDisposable
         var isBegun = _draining.Marks.Any(mark => mark.IsBegin);
         var fault = Try(() => _files.Write(_draining));
         _draining.Clear();
+        if (fault is not null)
+        {
+            _files.Abandon();
+            Stop(fault);
+            return;
+        }
+
         lock (_gate)
         {
-            if (fault is not null)
-            {
-                _files.Abandon();
-                Stop(fault);
-            }
-            else if (isBegun && _isOpen)
+            if (isBegun && _isOpen)
             {
                 StopReason = null;
             }

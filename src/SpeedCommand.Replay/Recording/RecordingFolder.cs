@@ -60,7 +60,7 @@ internal sealed class RecordingFolder
 
         if (_options.DeletesOldest)
         {
-            foreach (var file in Recordings().Where(file => file.FullName != Path.GetFullPath(currentPath, _options.Folder)))
+            foreach (var file in Recordings().Where(file => file.Name != Path.GetFileName(currentPath)))
             {
                 if (_otherBytes + currentBytes <= _options.MaxFolderBytes)
                 {

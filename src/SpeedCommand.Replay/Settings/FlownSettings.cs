@@ -25,7 +25,7 @@ public sealed record FlownSettings(IReadOnlyList<KeyValuePair<string, string>> V
 
     /// <summary>Gathers what the settings say; call when everything was read from them.</summary>
     /// <param name="source">The settings.</param>
-    /// <param name="glider">The glider file's name or path as it was found; empty for none.</param>
+    /// <param name="glider">The glider file's name or path; empty when the glider is the recorded one.</param>
     /// <returns>What was flown with.</returns>
     public static FlownSettings Of(SettingsSource source, string glider)
     {

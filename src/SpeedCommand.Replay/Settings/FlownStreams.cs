@@ -20,6 +20,7 @@ public static class FlownStreams
         {
             if (parts[0] == "iio")
             {
+                source.Find(string.Join('.', parts));
                 streams[parts[1]] = KernelSensor;
             }
             else if (parts[0] == "ports" && !streams.ContainsKey(parts[1]))

@@ -33,12 +33,13 @@ internal static class CockpitSettingsReader
             return null;
         }
 
-        var glider = gliderOption ?? source.Find("glider")?.Text ?? gliderFallback ?? "";
+        var named = gliderOption ?? source.Find("glider")?.Text;
+        var glider = named ?? gliderFallback ?? "";
         return new CockpitSettings(flight, Path.GetFileName(glider), ports, units, terminal, serialText, recorder, logFile)
         {
             Serial = serial,
             IioDevices = iioDevices,
-            Flown = FlownSettings.Of(source, glider),
+            Flown = FlownSettings.Of(source, named is null && source.Recorded.GliderText.Length > 0 ? "" : glider),
             FlownStreams = flownStreams,
         };
     }
