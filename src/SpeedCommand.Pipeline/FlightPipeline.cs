@@ -77,6 +77,14 @@ public sealed class FlightPipeline
         return _inputs.Count - 1;
     }
 
+    /// <summary>Lets data time begin later than at 0, for a recording that is the continuation of another: no picture is made up to then.</summary>
+    /// <param name="timeUs">Microseconds since the start. Call before the first line.</param>
+    public void BeginAt(long timeUs)
+    {
+        TimeUs = timeUs;
+        _nextPictureUs = (timeUs / PipelineBounds.PicturePeriodUs + 1) * PipelineBounds.PicturePeriodUs;
+    }
+
     /// <summary>Takes one line. Pictures due before it are made first.</summary>
     /// <param name="timeUs">Its stamp, microseconds since the start; an earlier one than the newest counts as the newest.</param>
     /// <param name="stream">The stream's number, as it was given when added.</param>

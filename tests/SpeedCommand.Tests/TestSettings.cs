@@ -2,6 +2,7 @@ using System.Text;
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Replay.Recording;
 using SpeedCommand.Settings;
 
 namespace SpeedCommand.Tests;
@@ -18,5 +19,5 @@ internal static class TestSettings
 
     public static CockpitSettings For(string? recordIn, SerialTextSettings? serialText = null, params PortSettings[] ports) => new(
         Flight, "test-15.json", ports, DisplayUnits.Metric, IsTerminalOn: false, serialText,
-        recordIn is null ? null : new RecorderSettings(recordIn, 64 << 20), Path.Combine(recordIn ?? Path.GetTempPath(), "service.log"));
+        recordIn is null ? null : new RecorderOptions(recordIn), Path.Combine(recordIn ?? Path.GetTempPath(), "service.log"));
 }

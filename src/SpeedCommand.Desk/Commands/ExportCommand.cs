@@ -45,7 +45,7 @@ internal static class ExportCommand
         }
 
         using var recording = flight.Open();
-        var settings = flight.ReadSettings(recording.GliderFile, out var streams);
+        var settings = flight.ReadSettings(recording.GliderFile, recording.Flown, out var streams);
         foreach (var remark in recording.Remarks)
         {
             Console.Error.WriteLine($"{flight.Path}: {remark}");
@@ -97,7 +97,7 @@ internal static class ExportCommand
             return _ => StreamSettings.Sentences(ChecksumRule.Required);
         }
 
-        flight.ReadSettings(log.Header.GliderFile, out var streams);
+        flight.ReadSettings(log.Header.GliderFile, log.Header.Flown, out var streams);
         return streams;
     }
 }

@@ -34,9 +34,10 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
 
     /// <summary>Reads the settings; what the boards on the ports speak comes with them.</summary>
     /// <param name="gliderFallback">The glider the recording names.</param>
+    /// <param name="flown">What the recording was flown with.</param>
     /// <param name="streams">What is to be known of each stream, by name.</param>
     /// <exception cref="DeskFailure">Something in them is wrong.</exception>
-    public FlightSettings ReadSettings(string gliderFallback, out Func<string, StreamSettings> streams)
+    public FlightSettings ReadSettings(string gliderFallback, FlownSettings flown, out Func<string, StreamSettings> streams)
     {
         if (SettingsFile is not null && !File.Exists(SettingsFile))
         {
@@ -48,9 +49,11 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
             throw new DeskFailure(ExitStatus.BadSettings, problem.ToString());
         }
 
+        source.Recorded = flown;
         var flight = FlightSettingsReader.Read(source, Glider, gliderFallback);
         var ports = source.NamedElements("ports").ToDictionary(name => name, name => StreamSettingsReader.Read(source, $"ports.{name}"), StringComparer.Ordinal);
-        streams = name => ports.GetValueOrDefault(name) ?? StreamSettings.Sentences(ChecksumRule.Required);
+        var flownStreams = FlownStreams.Read(source);
+        streams = name => ports.GetValueOrDefault(name) ?? flownStreams.GetValueOrDefault(name) ?? StreamSettings.Sentences(ChecksumRule.Required);
         return flight is null || source.HasErrors
             ? throw new DeskFailure(ExitStatus.BadSettings, [.. source.Problems.Where(one => !one.IsWarning).Select(one => one.ToString())])
             : flight;

@@ -10,7 +10,7 @@ internal static class ReplayedLines
     public static IEnumerable<string> Of(FlightInput flight)
     {
         using var recording = flight.Open();
-        var settings = flight.ReadSettings(recording.GliderFile, out var streams);
+        var settings = flight.ReadSettings(recording.GliderFile, recording.Flown, out var streams);
         using var buffer = new MemoryStream();
         var replay = recording.Start(settings, new PictureLines(buffer), streams);
         while (replay.Step())

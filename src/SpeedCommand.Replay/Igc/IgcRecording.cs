@@ -3,6 +3,7 @@ using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Replaying;
+using SpeedCommand.Replay.Settings;
 
 namespace SpeedCommand.Replay.Igc;
 
@@ -34,6 +35,9 @@ public sealed class IgcRecording : IRecording
 
     /// <inheritdoc/>
     public string GliderFile => "";
+
+    /// <inheritdoc/>
+    public FlownSettings Flown => FlownSettings.None;
 
     /// <inheritdoc/>
     public IReadOnlyList<LogProblem> Problems => _reader.Problems;

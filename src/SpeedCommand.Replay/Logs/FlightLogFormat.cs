@@ -30,6 +30,14 @@ internal static class FlightLogFormat
 
     public static ReadOnlySpan<byte> Note => "#note "u8;
 
+    public static ReadOnlySpan<byte> Program => "#program "u8;
+
+    public static ReadOnlySpan<byte> From => "#from "u8;
+
+    public static ReadOnlySpan<byte> Setting => "#setting "u8;
+
+    public static ReadOnlySpan<byte> GliderLine => "#glider-line "u8;
+
     public static ReadOnlySpan<byte> End => "#end "u8;
 
     public static ReadOnlySpan<byte> Truth => "truth"u8;

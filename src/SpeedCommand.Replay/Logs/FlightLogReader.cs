@@ -85,43 +85,27 @@ public sealed class FlightLogReader : IDisposable
             throw new FormatException($"line 1: expected version {FlightLogFormat.Version}, found '{version}'");
         }
 
-        DateTimeOffset start = default;
-        var glider = "";
+        var header = new LogHeaderLines();
         while (_lines.MoveNext())
         {
             var line = _lines.Current;
-            if (line.StartsWith(FlightLogFormat.Start))
-            {
-                start = ReadStart(Encoding.ASCII.GetString(line[FlightLogFormat.Start.Length..]));
-            }
-            else if (line.StartsWith(FlightLogFormat.Glider))
-            {
-                glider = Encoding.UTF8.GetString(line[FlightLogFormat.Glider.Length..]);
-            }
-            else if (line.StartsWith(FlightLogFormat.Note))
+            if (line.StartsWith(FlightLogFormat.Note))
             {
                 _notes.Add(Encoding.UTF8.GetString(line[FlightLogFormat.Note.Length..]));
             }
-            else
+            else if (!header.TryTake(line, out var problem))
             {
                 _firstRecordPending = true;
                 break;
             }
+            else if (problem is not null)
+            {
+                Report(problem);
+            }
         }
 
-        Header = new FlightLogHeader(start, glider, _notes);
-    }
-
-    private DateTimeOffset ReadStart(string text)
-    {
-        if (DateTimeOffset.TryParseExact(text, FlightLogFormat.StartTimeFormat, CultureInfo.InvariantCulture,
-                DateTimeStyles.AssumeUniversal, out var start))
-        {
-            return start;
-        }
-
-        Report($"expected a start time like 2026-06-14T10:00:00.000Z, found '{text}'");
-        return default;
+        Header = header.With(_notes);
+        _lastTimeUs = Header.FromUs;
     }
 
     private bool TryReadRecord(ReadOnlySpan<byte> line, out LogRecord record)

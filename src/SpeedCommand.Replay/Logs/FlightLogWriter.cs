@@ -1,6 +1,4 @@
 using System.Buffers.Text;
-using System.Globalization;
-using System.Text;
 
 namespace SpeedCommand.Replay.Logs;
 
@@ -20,22 +18,11 @@ public sealed class FlightLogWriter : IDisposable
     {
         ArgumentNullException.ThrowIfNull(header);
         _stream = stream;
-        var text = new StringBuilder();
-        text.Append(CultureInfo.InvariantCulture, $"#speedcommand-log {FlightLogFormat.Version}\n");
-        text.Append(CultureInfo.InvariantCulture,
-            $"#start {header.StartUtc.UtcDateTime.ToString(FlightLogFormat.StartTimeFormat, CultureInfo.InvariantCulture)}\n");
-        if (header.GliderFile.Length > 0)
-        {
-            text.Append(CultureInfo.InvariantCulture, $"#glider {OneLine(header.GliderFile)}\n");
-        }
-
-        foreach (var note in header.Notes)
-        {
-            text.Append(CultureInfo.InvariantCulture, $"#note {OneLine(note)}\n");
-        }
-
-        Write(Encoding.UTF8.GetBytes(text.ToString()));
+        Write(LogHeaderText.Of(header));
     }
+
+    /// <summary>For records alone, when their header is written by somebody else.</summary>
+    internal FlightLogWriter(Stream stream) => _stream = stream;
 
     /// <summary>Bytes written so far, header included.</summary>
     public long Length { get; private set; }
@@ -126,6 +113,4 @@ public sealed class FlightLogWriter : IDisposable
         _stream.Write(bytes);
         Length += bytes.Length;
     }
-
-    private static string OneLine(string text) => text.ReplaceLineEndings(" ");
 }

@@ -1,45 +1,65 @@
+using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 
 namespace SpeedCommand.Replay.Recording;
 
 /// <summary>
-/// Records a flight without ever making the pipeline wait for a disk: records go to memory, <see cref="Drain"/> carries them
-/// to the file from another thread. When the disk fails or falls behind, or the log is full, recording stops for good and
-/// says why; flying goes on.
+/// Records flights without ever making the pipeline wait for a disk: records go to memory, <see cref="Drain"/> carries them
+/// to files from another thread. A file a flight, and more when it grows too long. When the disk fails or falls behind, recording
+/// stops, says why, and is tried again later with a new file; flying goes on.
 /// </summary>
-public sealed class FlightRecorder : IDisposable
+public sealed class FlightRecorder : IPictureSink, IDisposable
 {
     /// <summary>Memory for what the disk has not taken yet: half a minute of a flooded cockpit.</summary>
     public const int MaxPendingBytes = 1 << 20;
 
-    private readonly Lock _gate = new();
-    private readonly FileStream _file;
-    private readonly long _maxBytes;
-    private readonly FlightLogWriter _writer;
-    private MemoryStream _pending = new(MaxPendingBytes);
-    private MemoryStream _draining = new(MaxPendingBytes);
+    /// <summary>Data time until a recording that stopped is tried again: a card that is changed is found soon, a broken one is not worn.</summary>
+    public const long RetryUs = 30_000_000;
 
-    /// <summary>Creates the log file.</summary>
-    /// <param name="path">Where; the folder must exist.</param>
-    /// <param name="header">The log's header.</param>
-    /// <param name="maxBytes">Size at which recording stops.</param>
-    /// <exception cref="IOException">The file cannot be created.</exception>
-    /// <exception cref="UnauthorizedAccessException">The folder may not be written.</exception>
-    public FlightRecorder(string path, FlightLogHeader header, long maxBytes)
+    /// <summary>Room that is kept for a record and the one that ends a file.</summary>
+    private const int MinFreeBytes = 2 * FlightLogFormat.MaxRecordLength;
+
+    private readonly Lock _gate = new();
+    private readonly RecorderOptions _options;
+    private readonly FlightWatch _watch;
+    private readonly RecordingFiles _files;
+    private PendingRecords _pending = new(MaxPendingBytes);
+    private PendingRecords _draining = new(MaxPendingBytes);
+    private bool _isOpen;
+    private bool _hasBegun;
+    private long _lastUs;
+    private long _retryAtUs;
+
+    /// <summary>Makes a recorder; files come with the first records.</summary>
+    /// <param name="options">Where and how.</param>
+    /// <param name="header">The header of every file, but for where it begins.</param>
+    /// <param name="processId">A number for the files' names that no other recorder in the folder has.</param>
+    /// <param name="create">Creates a file for writing; null for the file system.</param>
+    public FlightRecorder(RecorderOptions options, FlightLogHeader header, int processId, Func<string, Stream>? create = null)
     {
-        Path = path;
-        _maxBytes = maxBytes;
-        _file = new FileStream(path, FileMode.CreateNew, FileAccess.Write, FileShare.Read, 1);
-        _writer = new FlightLogWriter(new PendingStream(this), header);
+        ArgumentNullException.ThrowIfNull(options);
+        ArgumentNullException.ThrowIfNull(header);
+        _options = options;
+        _watch = new FlightWatch(options.FlyingAirspeedMps, options.LandedAfterUs);
+        _files = new RecordingFiles(options, header, new RecordingFolder(options, processId, create));
     }
 
-    /// <summary>Where the log is.</summary>
-    public string Path { get; }
+    /// <summary>The newest file; null before the first.</summary>
+    public string? Path => _files.Path;
 
-    /// <summary>Why recording stopped; null while it goes on.</summary>
+    /// <summary>Why recording stopped; null while it goes on or waits for a flight.</summary>
     public string? StopReason { get; private set; }
 
-    /// <summary>Records one line; after recording stopped, nothing happens.</summary>
+    /// <summary>Finds out before the flight whether the folder can be written; if not, recording is stopped until it is tried again.</summary>
+    public void Probe()
+    {
+        if (Try(_files.Probe) is { } fault)
+        {
+            Stop(fault);
+        }
+    }
+
+    /// <summary>Records one line, if there is a flight to record.</summary>
     /// <param name="timeUs">The stamp the pipeline got.</param>
     /// <param name="streamName">The stream's name.</param>
     /// <param name="line">The line without its end.</param>
@@ -47,28 +67,48 @@ public sealed class FlightRecorder : IDisposable
     {
         lock (_gate)
         {
-            if (StopReason is null)
+            if (!_isOpen && !TryBegin(timeUs))
             {
-                _writer.WriteLine(timeUs, streamName, line);
-                StopWhenFull();
+                return;
+            }
+
+            if (_pending.Free < MinFreeBytes)
+            {
+                Stop("the disk did not keep up");
+                return;
+            }
+
+            _pending.Writer.WriteLine(timeUs, streamName, line);
+            _pending.LastUs = _lastUs = timeUs;
+        }
+    }
+
+    /// <summary>Watches for take-off and landing.</summary>
+    /// <param name="picture">The next picture of the pipeline.</param>
+    public void OnPicture(in CockpitPicture picture)
+    {
+        lock (_gate)
+        {
+            var landings = _watch.Landings;
+            _watch.Look(picture);
+            if (_watch.Landings > landings)
+            {
+                End(picture.TimeUs);
             }
         }
     }
 
-    /// <summary>Records how long the flight was watched.</summary>
+    /// <summary>Records how long the flight was watched, and ends the file.</summary>
     /// <param name="timeUs">The pipeline's newest time.</param>
     public void RecordEnd(long timeUs)
     {
         lock (_gate)
         {
-            if (StopReason is null)
-            {
-                _writer.WriteEnd(timeUs);
-            }
+            End(timeUs);
         }
     }
 
-    /// <summary>Carries what was recorded since the last time to the disk; call at least once a second, from one thread.</summary>
+    /// <summary>Carries what was recorded since the last time to the disk; call twice a second, from one thread.</summary>
     public void Drain()
     {
         lock (_gate)
@@ -76,40 +116,69 @@ public sealed class FlightRecorder : IDisposable
             (_pending, _draining) = (_draining, _pending);
         }
 
-        try
+        var isBegun = _draining.Marks.Any(mark => mark.IsBegin);
+        var fault = Try(() => _files.Write(_draining));
+        _draining.Clear();
+        if (fault is not null)
         {
-            if (_draining.Length > 0)
-            {
-                _file.Write(_draining.GetBuffer(), 0, (int)_draining.Length);
-                _file.Flush(flushToDisk: true);
-            }
-        }
-        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
-        {
-            Stop(fault.Message);
+            _files.Abandon();
+            Stop(fault);
+            return;
         }
 
-        _draining.SetLength(0);
+        lock (_gate)
+        {
+            if (isBegun && _isOpen)
+            {
+                StopReason = null;
+            }
+        }
     }
 
     /// <inheritdoc/>
     public void Dispose()
     {
         Drain();
-        _file.Dispose();
+        _files.Dispose();
         _pending.Dispose();
         _draining.Dispose();
     }
 
-    private void StopWhenFull()
+    private static string? Try(Action write)
     {
-        if (_writer.Length > _maxBytes)
+        try
         {
-            StopReason = $"the log reached its limit of {_maxBytes} bytes";
+            write();
+            return null;
         }
-        else if (_pending.Length > MaxPendingBytes - FlightLogFormat.MaxRecordLength)
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {
-            StopReason = "the disk did not keep up";
+            return fault.Message;
+        }
+    }
+
+    /// <summary>The very first file begins with the pipeline's own time, so that its replay gives all the pictures there were.</summary>
+    private bool TryBegin(long timeUs)
+    {
+        var isWanted = _watch.IsFlying || (_options.Begin == RecordingBegin.Data && _watch.Landings == 0);
+        if (!isWanted || (StopReason is not null && timeUs < _retryAtUs))
+        {
+            return false;
+        }
+
+        var isWhole = !_hasBegun && StopReason is null && _options.Begin == RecordingBegin.Data;
+        _pending.Mark(isBegin: true, isWhole ? 0 : timeUs);
+        _isOpen = _hasBegun = true;
+        return true;
+    }
+
+    private void End(long timeUs)
+    {
+        if (_isOpen)
+        {
+            _pending.Writer.WriteEnd(Math.Max(timeUs, _lastUs));
+            _pending.Mark(isBegin: false, timeUs);
+            _isOpen = false;
         }
     }
 
@@ -117,39 +186,9 @@ public sealed class FlightRecorder : IDisposable
     {
         lock (_gate)
         {
-            StopReason ??= reason;
+            StopReason = reason;
+            _retryAtUs = _lastUs + RetryUs;
+            _isOpen = false;
         }
-    }
-
-    /// <summary>The writer's end of the memory; the two buffers change places behind it.</summary>
-    private sealed class PendingStream(FlightRecorder recorder) : Stream
-    {
-        public override bool CanRead => false;
-
-        public override bool CanSeek => false;
-
-        public override bool CanWrite => true;
-
-        public override long Length => throw new NotSupportedException();
-
-        public override long Position
-        {
-            get => throw new NotSupportedException();
-            set => throw new NotSupportedException();
-        }
-
-        public override void Write(ReadOnlySpan<byte> buffer) => recorder._pending.Write(buffer);
-
-        public override void Write(byte[] buffer, int offset, int count) => Write(buffer.AsSpan(offset, count));
-
-        public override void Flush()
-        {
-        }
-
-        public override int Read(byte[] buffer, int offset, int count) => throw new NotSupportedException();
-
-        public override long Seek(long offset, SeekOrigin origin) => throw new NotSupportedException();
-
-        public override void SetLength(long value) => throw new NotSupportedException();
     }
 }

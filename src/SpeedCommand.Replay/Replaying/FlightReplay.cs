@@ -21,9 +21,12 @@ public sealed class FlightReplay : IReplay
     /// <param name="streams">The settings of each stream by name.</param>
     public FlightReplay(FlightLogReader log, FlightPipeline pipeline, Func<string, StreamSettings> streams)
     {
+        ArgumentNullException.ThrowIfNull(log);
+        ArgumentNullException.ThrowIfNull(pipeline);
         _log = log;
         _pipeline = pipeline;
         _streams = streams;
+        pipeline.BeginAt(log.Header.FromUs);
     }
 
     /// <inheritdoc/>

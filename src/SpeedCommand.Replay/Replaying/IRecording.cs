@@ -1,6 +1,7 @@
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
+using SpeedCommand.Replay.Settings;
 
 namespace SpeedCommand.Replay.Replaying;
 
@@ -9,6 +10,9 @@ public interface IRecording : IDisposable
 {
     /// <summary>File name of the glider the recording names; empty when it names none.</summary>
     string GliderFile { get; }
+
+    /// <summary>The settings and the glider the recording was flown with, as far as it tells them.</summary>
+    FlownSettings Flown { get; }
 
     /// <summary>The first lines that could not be used.</summary>
     IReadOnlyList<LogProblem> Problems { get; }

@@ -1,6 +1,7 @@
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
+using SpeedCommand.Replay.Settings;
 
 namespace SpeedCommand.Replay.Replaying;
 
@@ -8,6 +9,8 @@ namespace SpeedCommand.Replay.Replaying;
 internal sealed class LogRecording(FlightLogReader log) : IRecording
 {
     public string GliderFile => log.Header.GliderFile;
+
+    public FlownSettings Flown => log.Header.Flown;
 
     public IReadOnlyList<LogProblem> Problems => log.Problems;
 

@@ -1,3 +1,4 @@
+using System.Text;
 using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Flight.LocatedJson;
 using SpeedCommand.Flight.Quantities;
@@ -66,6 +67,13 @@ public static class FlightSettingsReader
     private static Glider? ReadGlider(SettingsSource source, string? gliderOption, string? gliderFallback)
     {
         var setting = source.Text("glider");
+        if (gliderOption is null && setting is null && source.Recorded.GliderText is { Length: > 0 } text)
+        {
+            var recorded = GliderFile.Read(Encoding.UTF8.GetBytes(text), $"glider in the log's header ({gliderFallback})");
+            source.Report(recorded.Problems);
+            return recorded.Glider;
+        }
+
         var name = gliderOption ?? setting?.Text ?? gliderFallback;
         if (string.IsNullOrEmpty(name))
         {

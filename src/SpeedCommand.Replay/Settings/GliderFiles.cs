@@ -37,6 +37,22 @@ public static class GliderFiles
     /// <returns>Whether there is a file, readable or not.</returns>
     public static bool Exists(string name, string besideFile) => Candidates(name, besideFile).Any(File.Exists);
 
+    /// <summary>The text of a glider file.</summary>
+    /// <param name="name">Path or bare file name.</param>
+    /// <param name="besideFile">A file whose folder is searched next; empty for none.</param>
+    /// <returns>The text, or null when there is no file that can be read.</returns>
+    public static string? TextOf(string name, string besideFile)
+    {
+        try
+        {
+            return Candidates(name, besideFile).FirstOrDefault(File.Exists) is { } path ? File.ReadAllText(path) : null;
+        }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            return null;
+        }
+    }
+
     /// <summary>The glider files that lie beside the program.</summary>
     /// <returns>File names in order.</returns>
     public static IEnumerable<string> Bundled() => Directory.Exists(BundledFolder)

@@ -5,8 +5,8 @@ using SpeedCommand.Flight.Quantities;
 namespace SpeedCommand.Replay.Settings;
 
 /// <summary>
-/// Looks settings up by their path, first on the command line, then in the environment, then in the file, and collects every
-/// fault with its origin, so that a person mends them all at once.
+/// Looks settings up by their path, first on the command line, then in the environment, then in the file, then among what a recorded
+/// flight was flown with, and collects every fault with its origin, so that a person mends them all at once.
 /// </summary>
 public sealed class SettingsSource
 {
@@ -49,6 +49,9 @@ public sealed class SettingsSource
     /// <summary>Every path asked for so far: all the settings there are, once everything was read.</summary>
     public IReadOnlyCollection<string> AskedPaths => _asked;
 
+    /// <summary>What a recorded flight was flown with: it stands in for what nothing else sets. Give it before anything is read.</summary>
+    public FlownSettings Recorded { get; set; } = FlownSettings.None;
+
     /// <summary>A setting as it was written.</summary>
     /// <param name="path">The setting's path, for example "recorder.folder".</param>
     /// <returns>The text and where it stands, or null when nothing sets it.</returns>
@@ -67,7 +70,7 @@ public sealed class SettingsSource
 
         if (InFile(path) is not { } place || place.Kind == JsonPlaceKind.Null)
         {
-            return null;
+            return Recorded.Values.LastOrDefault(pair => pair.Key == path) is { Value: { } text } ? new SettingText(text, "the log's header", 0, path) : null;
         }
 
         if (place.Kind is JsonPlaceKind.Object or JsonPlaceKind.Array)
@@ -113,6 +116,13 @@ public sealed class SettingsSource
         return [.. list.Elements.Where(element => element.Kind == JsonPlaceKind.Text)
             .Select((element, index) => new SettingText(element.Text, File, element.Line, $"{path}[{index}]"))];
     }
+
+    /// <summary>What is set, as it would be given on the command line.</summary>
+    /// <param name="path">The setting's path.</param>
+    /// <returns>The text; of a list, with commas between its elements; empty when nothing sets it.</returns>
+    public string TextOf(string path) => InFile(path) is { Kind: JsonPlaceKind.Array } && !IsOverridden(path)
+        ? string.Join(", ", Texts(path).Select(one => one.Text))
+        : Find(path)?.Text ?? "";
 
     /// <summary>A quantity with a unit.</summary>
     /// <param name="path">The setting's path.</param>

@@ -55,7 +55,7 @@ internal sealed class BenchPlayer(
         var startUs = clock.NowUs;
         while (TryReadLine(records, out var timeUs, out var streamName, out var length))
         {
-            await WaitUntilAsync(startUs + timeUs, stop).ConfigureAwait(false);
+            await WaitUntilAsync(startUs + timeUs - flight.Header.FromUs, stop).ConfigureAwait(false);
             var line = flight.Lines[streamName];
             for (var sent = 0; sent < length;)
             {

@@ -9,6 +9,7 @@ internal sealed class Pacer(TimeProvider time, double pace, CancellationToken ca
     private static readonly TimeSpan LongestWait = TimeSpan.FromMinutes(1);
 
     private readonly long _start = time.GetTimestamp();
+    private long _firstUs = -1;
 
     public bool IsPaced => double.IsFinite(pace);
 
@@ -30,10 +31,12 @@ internal sealed class Pacer(TimeProvider time, double pace, CancellationToken ca
         return double.TryParse(text, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out pace) && pace is >= 0.1 and <= 1000;
     }
 
+    /// <summary>Waits for a record; the first is at once, wherever the recording begins.</summary>
     public void WaitUntil(long timeUs)
     {
+        _firstUs = _firstUs < 0 ? timeUs : _firstUs;
         while (!cancel.IsCancellationRequested
-            && TimeSpan.FromMicroseconds(timeUs / pace) - time.GetElapsedTime(_start) is var ahead && ahead > TimeSpan.Zero)
+            && TimeSpan.FromMicroseconds((timeUs - _firstUs) / pace) - time.GetElapsedTime(_start) is var ahead && ahead > TimeSpan.Zero)
         {
             cancel.WaitHandle.WaitOne(ahead < LongestWait ? ahead : LongestWait);
         }

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using SpeedCommand.Bench;
+using SpeedCommand.Replay.Settings;
 using SpeedCommand.Service;
 using SpeedCommand.Settings;
 
@@ -66,6 +67,7 @@ internal static class RunCommand
         try
         {
             using var flight = isBench ? new BenchFlight(log) : null;
+            source.Recorded = flight?.Header.Flown ?? FlownSettings.None;
             var settings = CockpitSettingsReader.Read(source, null, flight?.Header.GliderFile, needsPorts: !isBench);
             SettingsOptions.Tell(source);
             return settings is null

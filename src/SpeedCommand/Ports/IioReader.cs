@@ -2,7 +2,7 @@ using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
-using SpeedCommand.Sentences;
+using SpeedCommand.Replay.Settings;
 using SpeedCommand.Service;
 using SpeedCommand.Settings;
 
@@ -19,7 +19,7 @@ internal sealed class IioReader(
     private static readonly TimeSpan FirstDelay = TimeSpan.FromMilliseconds(100), LongestDelay = TimeSpan.FromSeconds(1);
 
     /// <summary>A value is read when it is stamped: there is no delay to take out.</summary>
-    public static StreamSettings Stream { get; } = StreamSettings.Sentences(ChecksumRule.Required) with { IsArrivalExact = true };
+    public static StreamSettings Stream => FlownStreams.KernelSensor;
 
     private readonly int _stream = machine.AddStream(settings.Name, Stream);
     private string _lastComplaint = "";

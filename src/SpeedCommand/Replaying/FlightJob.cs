@@ -31,6 +31,7 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
                 return new FlightResult(path, exitStatus, null, 0, 0);
             }
 
+            source.Recorded = recording.Flown;
             var settings = CockpitSettingsReader.Read(source, request.Glider, recording.GliderFile, needsPorts: false);
             SettingsOptions.Tell(source, errors);
             return settings is null

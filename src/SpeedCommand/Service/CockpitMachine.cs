@@ -22,7 +22,7 @@ internal sealed class CockpitMachine : IDisposable
     {
         _clock = clock;
         _recorder = recorder;
-        _pipeline = new FlightPipeline(settings, new PictureFan([.. sinks]));
+        _pipeline = new FlightPipeline(settings, new PictureFan(recorder is null ? [.. sinks] : [.. sinks, recorder]));
     }
 
     /// <summary>Counts of each stream; exact once the readers have stopped.</summary>

@@ -1,7 +1,6 @@
 using System.Runtime.InteropServices;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Hosting;
-using Microsoft.Extensions.Logging;
 using NLog.Extensions.Logging;
 using SpeedCommand.Bench;
 using SpeedCommand.Displaying;
@@ -61,9 +60,10 @@ internal static class CockpitService
             .AddSingleton(settings)
             .AddSingleton(clock)
             .AddSingleton(latest)
-            .AddSingleton(services => new CockpitMachine(settings.Flight, clock, OpenRecorder(settings, flight, clock, services), [latest, .. extraSinks]));
+            .AddSingleton(_ => new CockpitMachine(settings.Flight, clock, MakeRecorder(settings, flight, clock), [latest, .. extraSinks]));
         AddPorts(builder.Services, settings, ports, sensors, states);
         builder.Services.AddHostedService<PictureTicker>();
+        builder.Services.AddHostedService<RecordingService>();
         AddDisplays(builder.Services, settings, isPanelShown);
         if (flight is not null)
         {
@@ -105,31 +105,11 @@ internal static class CockpitService
         }
     }
 
-    /// <summary>A recorder that cannot start is a fault to show, not a reason to stay on the ground.</summary>
-    private static FlightRecorder? OpenRecorder(CockpitSettings settings, BenchFlight? flight, CockpitClock clock, IServiceProvider services)
+    private static FlightRecorder? MakeRecorder(CockpitSettings settings, BenchFlight? flight, CockpitClock clock)
     {
-        if (settings.Recorder is not { } recorder)
-        {
-            return null;
-        }
-
         string[] notes = flight is null ? [] : [$"bench flight, played from {Path.GetFileName(flight.LogPath)}"];
-        var log = services.GetRequiredService<ILoggerFactory>().CreateLogger<FlightRecorder>();
-        var stamp = clock.StartUtc.ToString("yyyy-MM-dd'T'HHmmss'Z'", System.Globalization.CultureInfo.InvariantCulture);
-        var path = Path.Combine(recorder.Folder, $"{stamp}-{Environment.ProcessId}.log");
-        try
-        {
-            Directory.CreateDirectory(recorder.Folder);
-            var opened = new FlightRecorder(path, new FlightLogHeader(clock.StartUtc, settings.GliderName, notes), recorder.MaxBytes);
-            log.LogInformation("recording to {Path}", path);
-            return opened;
-        }
-        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
-        {
-            log.LogError("the flight is not recorded: {Cause}", fault.Message);
-            services.GetRequiredService<LatestPicture>().RecorderStopped();
-            return null;
-        }
+        var header = new FlightLogHeader(clock.StartUtc, settings.GliderName, notes) { Program = ProgramName.WithVersion, Flown = settings.Flown };
+        return settings.Recorder is { } options ? new FlightRecorder(options, header, Environment.ProcessId) : null;
     }
 
     /// <summary>A hosted service that broke is our own bug: the service manager must see it and start us again.</summary>

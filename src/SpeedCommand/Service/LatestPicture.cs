@@ -18,12 +18,12 @@ internal sealed class LatestPicture(IReadOnlyList<PortState> ports) : IPictureSi
     /// <summary>Every fault that any picture of this flight has named.</summary>
     public Faults FaultsSeen { get; private set; }
 
-    /// <summary>From now on every picture names the recorder's fault; the pipeline knows nothing of recorders.</summary>
-    public void RecorderStopped()
+    /// <summary>From now on every picture names the recorder's fault, or no longer; the pipeline knows nothing of recorders.</summary>
+    public void SetRecorder(bool isStopped)
     {
         lock (_gate)
         {
-            _recorderFault = Faults.RecorderStopped;
+            _recorderFault = isStopped ? Faults.RecorderStopped : Faults.None;
         }
     }
 

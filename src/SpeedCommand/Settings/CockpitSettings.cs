@@ -1,6 +1,8 @@
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Ports;
+using SpeedCommand.Replay.Recording;
+using SpeedCommand.Replay.Settings;
 using SpeedCommand.Sentences;
 
 namespace SpeedCommand.Settings;
@@ -21,7 +23,7 @@ internal sealed record CockpitSettings(
     DisplayUnits Units,
     bool IsTerminalOn,
     SerialTextSettings? SerialText,
-    RecorderSettings? Recorder,
+    RecorderOptions? Recorder,
     string LogFile)
 {
     /// <summary>How serial lines are found and read.</summary>
@@ -30,12 +32,19 @@ internal sealed record CockpitSettings(
     /// <summary>Sensors that the kernel reads; default none.</summary>
     public IReadOnlyList<IioSettings> IioDevices { get; init; } = [];
 
+    /// <summary>What the pipeline's numbers depend on, for the header of what is recorded.</summary>
+    public FlownSettings Flown { get; init; } = FlownSettings.None;
+
+    /// <summary>Streams that only the header of the log to be replayed describes.</summary>
+    public IReadOnlyDictionary<string, StreamSettings> FlownStreams { get; init; } = new Dictionary<string, StreamSettings>();
+
     /// <summary>What the pipeline must know of a stream of the flight, live and in a replay.</summary>
     /// <param name="name">The stream's name.</param>
     /// <returns>Its settings; those of a board that speaks sentences, when it is none of the settings' streams.</returns>
     public StreamSettings StreamOf(string name) =>
         Ports.FirstOrDefault(port => port.Name == name)?.Stream
-        ?? (IioDevices.Any(device => device.Name == name) ? IioReader.Stream : StreamSettings.Sentences(ChecksumRule.Required));
+        ?? (IioDevices.Any(device => device.Name == name) ? IioReader.Stream : FlownStreams.GetValueOrDefault(name))
+        ?? StreamSettings.Sentences(ChecksumRule.Required);
 }
 
 /// <summary>Port of a character display.</summary>
@@ -46,8 +55,3 @@ internal sealed record SerialTextSettings(string Device, int Baud)
     /// <summary>Data bits, parity, stop bits, flow control.</summary>
     public LineFraming Framing { get; init; } = LineFraming.Standard;
 }
-
-/// <summary>Where flights are recorded.</summary>
-/// <param name="Folder">The folder; made when missing.</param>
-/// <param name="MaxBytes">Size at which the recording of one flight stops.</param>
-internal sealed record RecorderSettings(string Folder, long MaxBytes);

@@ -12,7 +12,6 @@ internal static class CockpitSettingsReader
     private static readonly string[] OnOff = ["on", "off"];
     private static readonly string[] ReaderWords = ["portable", "poll"];
     private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
-    private const int Megabyte = 1 << 20;
 
     /// <summary>Reads everything; null when a fault makes the service impossible.</summary>
     public static CockpitSettings? Read(SettingsSource source, string? gliderOption, string? gliderFallback, bool needsPorts)
@@ -25,19 +24,23 @@ internal static class CockpitSettingsReader
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
         var serialText = ReadSerialText(source, ports);
         var serial = ReadSerial(source);
-        var recorder = ReadRecorder(source);
+        var recorder = RecorderSettingsReader.Read(source);
         var logFile = source.Text("logFile")?.Text ?? "";
+        var flownStreams = FlownStreams.Read(source);
         source.ReportUnknown();
         if (flight is null || source.HasErrors)
         {
             return null;
         }
 
-        var gliderName = Path.GetFileName(gliderOption ?? source.Find("glider")?.Text ?? gliderFallback ?? "");
-        return new CockpitSettings(flight, gliderName, ports, units, terminal, serialText, recorder, logFile)
+        var named = gliderOption ?? source.Find("glider")?.Text;
+        var glider = named ?? gliderFallback ?? "";
+        return new CockpitSettings(flight, Path.GetFileName(glider), ports, units, terminal, serialText, recorder, logFile)
         {
             Serial = serial,
             IioDevices = iioDevices,
+            Flown = FlownSettings.Of(source, named is null && source.Recorded.GliderText.Length > 0 ? "" : glider),
+            FlownStreams = flownStreams,
         };
     }
 
@@ -150,13 +153,5 @@ internal static class CockpitSettingsReader
         }
 
         return new SerialSettings((PortReaderKind)Array.IndexOf(ReaderWords, reader), folder);
-    }
-
-    private static RecorderSettings? ReadRecorder(SettingsSource source)
-    {
-        var isOn = source.Word("recorder.active", OnOff, "on") == "on";
-        var folder = source.Text("recorder.folder")?.Text ?? StateFolder.Flights;
-        var maxMegabytes = source.Integer("recorder.maxMegabytes", 64, 1, 4_096);
-        return isOn ? new RecorderSettings(folder, (long)maxMegabytes * Megabyte) : null;
     }
 }

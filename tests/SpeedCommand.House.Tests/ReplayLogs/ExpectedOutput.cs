@@ -41,10 +41,13 @@ internal static class ExpectedOutput
     {
         using var records = FlightLogFile.Open(Repository.PathOf(log));
         var source = new SettingsSource(null, "", Nothing, Nothing);
+        source.Recorded = records.Header.Flown;
         var flight = FlightSettingsReader.Read(source, null, records.Header.GliderFile);
+        var streams = FlownStreams.Read(source);
         Assert.Empty(source.Problems);
         using var output = new MemoryStream();
-        new FlightReplay(records, new FlightPipeline(flight!, new PictureLines(output)), _ => StreamSettings.Sentences(ChecksumRule.Required)).RunToEnd();
+        new FlightReplay(records, new FlightPipeline(flight!, new PictureLines(output)),
+            name => streams.GetValueOrDefault(name) ?? StreamSettings.Sentences(ChecksumRule.Required)).RunToEnd();
         return output.ToArray();
     }
 
