@@ -20,6 +20,8 @@ internal static class DeskProgram
             NoiseCommand.Create(),
             CompareCommand.Create(),
             ExportCommand.Create(),
+            FitCommand.Create(),
+            FitTrialsCommand.Create(),
         };
         var parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)
