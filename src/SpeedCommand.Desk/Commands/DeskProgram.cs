@@ -20,6 +20,7 @@ internal static class DeskProgram
             NoiseCommand.Create(),
             CompareCommand.Create(),
             ExportCommand.Create(),
+            ReportCommand.Create(),
             FitCommand.Create(),
             FitTrialsCommand.Create(),
         };

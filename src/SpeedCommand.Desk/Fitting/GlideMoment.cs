@@ -1,3 +1,4 @@
+using SpeedCommand.Desk.Reports;
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Polars;
 using SpeedCommand.Flight.Targets;
@@ -20,9 +21,7 @@ internal readonly record struct GlideMoment(
     {
         moment = default;
         if (!picture.ClimbMps.IsKnown || !picture.SmoothIndicatedAirspeedMps.IsKnown || !picture.MinSinkIndicatedMps.IsKnown
-            || !StandardAtmosphere.TryAt(picture.PressureAltitudeM.Value, out var state)
-            || !Air.TryMeasured(state.PressurePa, picture.TemperatureK.Value, double.NaN, out var air, out _)
-            || targets.MinSink(air, new Loading(settings.MassKg, 1, 0)) is not { IsKnown: true } straight)
+            || !PictureAir.TryOf(picture, out var air))
         {
             return false;
         }
@@ -30,12 +29,11 @@ internal readonly record struct GlideMoment(
         // The gusts of the indicator are in the true airspeed too.
         var smooth = picture.SmoothIndicatedAirspeedMps.Value;
         var trueMps = picture.TrueAirspeedMps.Value * smooth / picture.IndicatedAirspeedMps.Value;
-        // A picture has no load of its own, but its least-sink speed grows with the root of the load.
-        var ratio = picture.MinSinkIndicatedMps.Value / straight.IndicatedAirspeedMps;
+        var load = PictureAir.LoadFactorOf(picture, air, settings, targets);
         var terms = DragTerms.At(trueMps, air.DensityKgPerM3, settings.MassKg / handbook.WingAreaM2, 1);
         var reference = trueMps * Math.Sqrt(air.DensityKgPerM3 / StandardAtmosphere.SeaLevelDensityKgPerM3 * handbook.ReferenceMassKg / settings.MassKg);
-        moment = new(picture.TimeS, trueMps, smooth, picture.ClimbMps.Value, ratio * ratio, reference,
+        moment = new(picture.TimeS, trueMps, smooth, picture.ClimbMps.Value, load, reference,
             terms.SinkMps(handbook.Cd0, handbook.K1, handbook.K2), terms);
-        return double.IsFinite(trueMps) && trueMps > 0;
+        return double.IsFinite(trueMps + load) && trueMps > 0;
     }
 }

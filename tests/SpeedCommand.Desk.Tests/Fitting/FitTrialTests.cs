@@ -14,7 +14,7 @@ public sealed class FitTrialTests
     [Fact]
     public void Trials_IntervalsHoldTheTruthAndAreUseful()
     {
-        var trial = new FitTrial(ScenarioInput.ReadGlider("marram-15.json", null));
+        var trial = new FitTrial(ScenarioInput.ReadGlider("marram-15.json", null), isQuiet: false);
         Assert.InRange(trial.Truth.SinkMps(PolarBelief.BestGlideMps(trial.Truth)) / ((Flight.Polars.DragPolar)trial.Handbook.Polar).SinkMps(PolarBelief.BestGlideMps(trial.Truth)), 1.07, 1.10);
         var results = Enumerable.Range(1, Seeds).AsParallel().AsOrdered().Select(seed => trial.Run(seed)).ToList();
         foreach (var number in PolarBelief.Numbers)
