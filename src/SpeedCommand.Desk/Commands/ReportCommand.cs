@@ -69,7 +69,8 @@ internal static class ReportCommand
         return names;
     }
 
-    private static ReportFlight Replay(FlightInput input)
+    /// <summary>Replays a recording into what a report needs of it.</summary>
+    public static ReportFlight Replay(FlightInput input)
     {
         using var recording = input.Open();
         var settings = input.ReadSettings(recording.GliderFile, out var streams);

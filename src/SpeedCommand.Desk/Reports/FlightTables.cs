@@ -18,7 +18,7 @@ internal sealed class FlightTables(ReportFlight flight, DisplayUnits units)
         var climbS = climbs.Sum(one => one.DurationS);
         return ReportHtml.Facts(
             ("duration", ReportNumbers.Time(flight.DurationS)),
-            ("highest, pressure altitude", With(units.Height, altitudes.Max())),
+            ("highest", With(units.Height, altitudes.Max())),
             ("climbs", climbs.Count.ToString(CultureInfo.InvariantCulture)),
             ("average climb", climbs.Count == 0 ? ReportNumbers.Unknown : With(units.Vertical, climbs.Sum(one => one.GainM) / climbS)),
             ("glided through the air", $"{ReportNumbers.Distance(units.Distance, glides.Sum(one => one.DistanceM))} {units.Distance.Label}"),

@@ -38,6 +38,11 @@ internal static class ReportFigure
         area.SetTicks(
             NiceSteps.Between(0, endMinutes, NiceSteps.For(endMinutes, 12)).Select(value => (value, Text(value, endMinutes < 10 ? "0.#" : "0"))),
             NiceSteps.Between(low, high, step).Select(value => (value, Text(value, step < 1 ? "0.0" : "0"))));
+        if (low < 0 && high > 0)
+        {
+            area.AddLine([(0, 0), (endMinutes, 0)], PictureColors.Quiet, 1, LinePattern.Solid);
+        }
+
         for (var i = 0; i < lines.Count; i++)
         {
             AddLine(area, moments, lines[i], series[i], (low, high));

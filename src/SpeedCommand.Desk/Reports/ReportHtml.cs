@@ -47,6 +47,8 @@ internal static class ReportHtml
     public static XElement Figure(string caption, string description, string id, string svg)
     {
         var drawing = XElement.Parse(svg.Replace("id=\"", $"id=\"{id}-", StringComparison.Ordinal).Replace("url(#", $"url(#{id}-", StringComparison.Ordinal));
+        // A plot wipes its place in black before it paints it white; in a scaled drawing an edge of that would show.
+        drawing.Elements().Where(one => one.Name.LocalName == "rect" && one.Attribute("fill") is null && one.Attribute("x") is null).Remove();
         drawing.SetAttributeValue("viewBox", $"0 0 {drawing.Attribute("width")!.Value} {drawing.Attribute("height")!.Value}");
         drawing.SetAttributeValue("role", "img");
         drawing.SetAttributeValue("aria-label", description);
