@@ -46,9 +46,10 @@ internal static class FlightLegs
     private static ClimbLeg Climb(List<ReportMoment> stretch)
     {
         var loads = stretch.Where(one => double.IsFinite(one.LoadFactor)).ToList();
+        var gainM = Sum(stretch, one => one.ClimbMps.Value);
         return new(
             stretch[0].TimeS - PeriodS, stretch[^1].TimeS, stretch[0].PressureAltitudeM,
-            Sum(stretch, one => one.ClimbMps.Value),
+            gainM, gainM / (stretch.Count(one => one.ClimbMps.IsKnown) * PeriodS),
             loads.Count == 0 ? double.NaN : loads.Count(one => one.LoadFactor > TurningLoad) / (double)loads.Count);
     }
 
@@ -56,9 +57,11 @@ internal static class FlightLegs
     {
         var held = stretch.Where(one => double.IsFinite(one.HoldMps) && double.IsFinite(one.IndicatedMps)).ToList();
         var isGuided = held.Count > 0;
+        // A ratio needs distance and height of the same moments, and after a silence the climb comes back later.
+        var known = stretch.Where(one => double.IsFinite(one.TrueMps) && one.ClimbMps.IsKnown).ToList();
         return new(
             stretch[0].TimeS - PeriodS, stretch[^1].TimeS,
-            Sum(stretch, one => one.TrueMps), -Sum(stretch, one => one.ClimbMps.Value),
+            Sum(known, one => one.TrueMps), -Sum(known, one => one.ClimbMps.Value),
             stretch.Where(one => double.IsFinite(one.IndicatedMps)).Select(one => one.IndicatedMps).DefaultIfEmpty(double.NaN).Average(),
             isGuided ? held.Average(one => one.HoldMps) : double.NaN,
             isGuided ? Sum(stretch, one => one.OffSpeedMps) : double.NaN);
