@@ -20,6 +20,9 @@ internal static class DeskProgram
             NoiseCommand.Create(),
             CompareCommand.Create(),
             ExportCommand.Create(),
+            ReportCommand.Create(),
+            FitCommand.Create(),
+            FitTrialsCommand.Create(),
         };
         var parsed = root.Parse(args);
         if (parsed.Errors.Count > 0)

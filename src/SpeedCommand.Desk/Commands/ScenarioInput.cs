@@ -27,11 +27,15 @@ internal static class ScenarioInput
     }
 
     /// <summary>A glider file beside what names it, or one that comes with the program.</summary>
-    public static Glider ReadGlider(string file, string? folder)
+    public static Glider ReadGlider(string file, string? folder) => ReadGliderBytes(file, folder).Glider;
+
+    /// <summary>The same, with the bytes of the file.</summary>
+    public static (byte[] Bytes, Glider Glider) ReadGliderBytes(string file, string? folder = null)
     {
         var path = new[] { Path.Combine(folder ?? "", file), Path.Combine(GliderFolder, file) }.FirstOrDefault(File.Exists)
             ?? throw new DeskFailure(ExitStatus.NoInput, $"glider: expected a file here or in {GliderFolder}, found no '{file}'");
-        var result = GliderFile.Read(File.ReadAllBytes(path), file);
-        return result.Glider ?? throw new DeskFailure(ExitStatus.BadData, result.Problems.First(problem => !problem.IsWarning).ToString());
+        var bytes = File.ReadAllBytes(path);
+        var result = GliderFile.Read(bytes, file);
+        return (bytes, result.Glider ?? throw new DeskFailure(ExitStatus.BadData, result.Problems.First(problem => !problem.IsWarning).ToString()));
     }
 }

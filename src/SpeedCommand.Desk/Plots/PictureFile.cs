@@ -55,6 +55,14 @@ internal sealed partial class PictureFile
         File.WriteAllBytes(_path, content.ToArray());
     }
 
+    /// <summary>The same as text of an SVG, without a file.</summary>
+    public static string Svg(int width, int height, Action<SKCanvas> draw)
+    {
+        using var content = new MemoryStream();
+        WriteSvg(content, width, height, draw);
+        return Encoding.UTF8.GetString(content.ToArray());
+    }
+
     private static void WritePng(Stream content, int width, int height, Action<SKCanvas> draw, int pixelsPerUnit)
     {
         using var surface = SKSurface.Create(new SKImageInfo(width * pixelsPerUnit, height * pixelsPerUnit));
