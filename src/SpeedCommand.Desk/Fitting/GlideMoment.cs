@@ -11,7 +11,12 @@ namespace SpeedCommand.Desk.Fitting;
 internal readonly record struct GlideMoment(
     double TimeS, double TrueMps, double IndicatedMps, double ClimbMps, double LoadFactor, double ReferenceMps, double HandbookSinkMps, DragTerms Terms)
 {
-    /// <summary>Reads a picture; false where climb, airspeed or air are not known.</summary>
+    /// <summary>Numbers are shown in spite of these, but a polar must not be learnt from them.</summary>
+    private const Faults Doubtful = Faults.StaticBlocked | Faults.PitotBlocked | Faults.StaticStuck | Faults.AirspeedStuck
+        | Faults.StaticDisagrees | Faults.AirspeedDisagrees | Faults.ThermometerDoubtful | Faults.IcingPossible
+        | Faults.StaticJumps | Faults.AirspeedJumps | Faults.ProbeDoubtful;
+
+    /// <summary>Reads a picture; false where climb, airspeed or air are not known, or doubtful.</summary>
     /// <param name="picture">The picture.</param>
     /// <param name="settings">Glider and mass it was made with.</param>
     /// <param name="targets">Targets of that glider.</param>
@@ -20,7 +25,7 @@ internal readonly record struct GlideMoment(
     public static bool TryRead(in CockpitPicture picture, FlightSettings settings, SpeedTargets targets, DragPolar handbook, out GlideMoment moment)
     {
         moment = default;
-        if (!picture.ClimbMps.IsKnown || !picture.SmoothIndicatedAirspeedMps.IsKnown || !picture.MinSinkIndicatedMps.IsKnown
+        if ((picture.Faults & Doubtful) != 0 || !picture.ClimbMps.IsKnown || !picture.SmoothIndicatedAirspeedMps.IsKnown || !picture.MinSinkIndicatedMps.IsKnown
             || !PictureAir.TryOf(picture, out var air))
         {
             return false;

@@ -18,7 +18,7 @@ internal static class SegmentVerdicts
     public static string WordsOf(SegmentVerdict verdict) => verdict switch
     {
         SegmentVerdict.Used => "used",
-        SegmentVerdict.NotKnown => "climb, airspeed or air not known",
+        SegmentVerdict.NotKnown => "climb, airspeed or air not known, or doubtful",
         SegmentVerdict.Climbing => "climbing",
         SegmentVerdict.Turning => "turning",
         SegmentVerdict.SpeedChanging => "airspeed changing",
