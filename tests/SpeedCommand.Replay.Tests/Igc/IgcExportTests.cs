@@ -1,5 +1,5 @@
-using SpeedCommand.Pipeline;
 using System.Text.Json;
+using SpeedCommand.Pipeline;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Sentences;
