@@ -27,6 +27,23 @@ public class CovarianceCycleTests
         Assert.Equal(p22 + q * (0.5 + 0.0025), cycle.MeanVarianceOf(Vector<double>.Build.DenseOfArray([0, 1])), 2e-4 * (p22 + q));
     }
 
+    /// <summary>
+    /// Kalata's alpha-beta tracker (IEEE AES-20, 1984; from memory, rows agreed with scipy solve_discrete_are): tracking index
+    /// lambda = sigma_a T²/sigma_z, P22 after the update. Its acceleration is constant over a period, ours is white noise of
+    /// density lambda²; for slow targets the two become one (a quarter per cent apart at 0.1).
+    /// </summary>
+    [Theory]
+    [InlineData(0.001, 0.00004422)]
+    [InlineData(0.01, 0.00136510)]
+    [InlineData(0.1, 0.04)]
+    public void MeanVarianceOf_PositionAndRate_IsTheAlphaBetaTrackersForSlowTargets(double trackingIndex, double p22)
+    {
+        var q = trackingIndex * trackingIndex;
+        var rates = Matrix<double>.Build.DenseOfArray(new double[,] { { 0, 1 }, { 0, 0 } });
+        var cycle = new CovarianceCycle(rates, Vector<double>.Build.DenseOfArray([0, q]), [new SampledState(0, 1, 1)]);
+        Assert.Equal(1, cycle.MeanVarianceOf(Vector<double>.Build.DenseOfArray([0, 1])) / (p22 + q * (0.5 + 0.0025)), 0.005);
+    }
+
     [Fact]
     public void MeanVarianceOf_GaussMarkovWithoutUsefulSensor_IsItsOwnVariance()
     {
