@@ -96,6 +96,7 @@ public sealed class FlightPipeline
         if (!input.TryRead(TimeUs, line, _readings, out var count, out var sampleUs))
         {
             _events.Note(Faults.BadLines, TimeUs);
+            return;
         }
 
         if (count == 0 && SentenceReader.TryRead(line, ChecksumRule.Required, out var sentence) == SentenceFault.None)

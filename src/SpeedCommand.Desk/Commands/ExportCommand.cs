@@ -59,10 +59,7 @@ internal static class ExportCommand
             _ => new PictureLines(stream),
         };
         using var ended = sink as IDisposable;
-        var replay = recording.Start(settings, sink, streams);
-        while (replay.Step())
-        {
-        }
+        recording.Start(settings, sink, streams).RunToEnd();
     }
 
     private static void WriteIgc(FlightInput flight, string to)

@@ -61,10 +61,7 @@ internal static class FitCommand
         using var recording = flight.Open();
         var settings = flight.ReadSettings(recording.GliderFile, recording.Flown, out var streams);
         var cutter = new GlideSegments(number, settings, handbook);
-        var replay = recording.Start(settings, cutter, streams);
-        while (replay.Step())
-        {
-        }
+        recording.Start(settings, cutter, streams).RunToEnd();
 
         cutter.End();
         return cutter;

@@ -75,10 +75,7 @@ internal static class ReportCommand
         using var recording = input.Open();
         var settings = input.ReadSettings(recording.GliderFile, recording.Flown, out var streams);
         var flight = new ReportFlight(RecordingFile.StemOf(input.Path), settings);
-        var replay = recording.Start(settings, flight, streams);
-        while (replay.Step())
-        {
-        }
+        recording.Start(settings, flight, streams).RunToEnd();
 
         flight.End();
         flight.Remarks.AddRange(recording.Remarks);

@@ -16,4 +16,13 @@ public interface IReplay
     /// <returns>False at the end of the recording.</returns>
     /// <exception cref="IOException">The recording cannot be read, or the pipeline's sink cannot be written.</exception>
     bool Step(Action<long>? before = null);
+
+    /// <summary>Replays the rest as fast as it goes.</summary>
+    /// <exception cref="IOException">The recording cannot be read, or the pipeline's sink cannot be written.</exception>
+    void RunToEnd()
+    {
+        while (Step())
+        {
+        }
+    }
 }

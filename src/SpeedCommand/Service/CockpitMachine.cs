@@ -28,6 +28,9 @@ internal sealed class CockpitMachine : IDisposable
     /// <summary>Counts of each stream; exact once the readers have stopped.</summary>
     public IReadOnlyList<StreamHealth> Streams => _pipeline.Streams;
 
+    /// <summary>When each fault of the pipeline came and went; exact once the readers have stopped.</summary>
+    public IEnumerable<FaultSpan> FaultSpans => _pipeline.FaultHistory.Spans;
+
     public FlightRecorder? Recorder => _recorder;
 
     public int AddStream(string name, StreamSettings settings)

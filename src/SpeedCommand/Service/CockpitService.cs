@@ -1,6 +1,7 @@
 using System.Runtime.InteropServices;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Hosting;
+using Microsoft.Extensions.Logging;
 using NLog.Extensions.Logging;
 using SpeedCommand.Bench;
 using SpeedCommand.Displaying;
@@ -29,6 +30,7 @@ internal static class CockpitService
         await host.StartAsync().ConfigureAwait(false);
         await host.WaitForShutdownAsync().ConfigureAwait(false);
         host.Services.GetRequiredService<CockpitMachine>().Finish();
+        TellFaults(host);
         var exitStatus = ExitStatusOf(host);
         if (flight is not null)
         {
@@ -36,6 +38,17 @@ internal static class CockpitService
         }
 
         return exitStatus;
+    }
+
+    /// <summary>What was wrong, how often and when, for who looks into it after the flight.</summary>
+    private static void TellFaults(IHost host)
+    {
+        var log = host.Services.GetRequiredService<ILogger<CockpitMachine>>();
+        foreach (var span in host.Services.GetRequiredService<CockpitMachine>().FaultSpans)
+        {
+            log.LogInformation("fault {Name}: {Count} times, {LastedS:F1} s in all, first at {FirstS:F1} s, last at {LastS:F1} s",
+                span.Name, span.Count, span.LastedUs / 1e6, span.FirstUs / 1e6, span.LastUs / 1e6);
+        }
     }
 
     internal static IHost Build(CockpitSettings settings, BenchFlight? flight, double pace, params IPictureSink[] extraSinks)
