@@ -75,15 +75,16 @@ public class AdaptiveEnergyEstimatorTests
     public void Add_OnceRunning_AllocatesNothing()
     {
         var estimator = Fly(10, 0, out var timeUs);
-        var before = GC.GetAllocatedBytesForCurrentThread();
-        for (var i = 1; i < 10_000; i++)
+        Assert.Equal(0, Allocation.Of(() =>
         {
-            estimator.AddHeight(timeUs + i * 50_000, 1000);
-            estimator.AddKineticHeight(timeUs + i * 50_000 + 20_000, 40);
-            estimator.EstimateAt(timeUs + i * 50_000 + 25_000);
-        }
-
-        Assert.Equal(0, GC.GetAllocatedBytesForCurrentThread() - before);
+            for (var i = 0; i < 2_000; i++)
+            {
+                timeUs += 50_000;
+                estimator.AddHeight(timeUs, 1000);
+                estimator.AddKineticHeight(timeUs + 20_000, 40);
+                estimator.EstimateAt(timeUs + 25_000);
+            }
+        }));
     }
 
     [Theory]

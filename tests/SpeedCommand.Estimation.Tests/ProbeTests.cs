@@ -98,11 +98,12 @@ public class ProbeTests
     {
         var flight = new MadeFlight();
         flight.Fly(10, 0, height: true, kinetic: true, probe: true);
-        var before = GC.GetAllocatedBytesForCurrentThread();
-        flight.Fly(30, 0, height: true, kinetic: false, probe: true);
-        flight.Fly(30, 0, height: true, kinetic: true, probe: false);
-        flight.Fly(30, 0, height: true, kinetic: true, probe: true);
-        Assert.Equal(0, GC.GetAllocatedBytesForCurrentThread() - before);
+        Assert.Equal(0, Allocation.Of(() =>
+        {
+            flight.Fly(10, 0, height: true, kinetic: false, probe: true);
+            flight.Fly(10, 0, height: true, kinetic: true, probe: false);
+            flight.Fly(10, 0, height: true, kinetic: true, probe: true);
+        }));
     }
 
     /// <summary>A glider with three sensors at 20 Hz.</summary>

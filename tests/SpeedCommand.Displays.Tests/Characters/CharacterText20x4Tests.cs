@@ -41,12 +41,7 @@ public class CharacterText20x4Tests
         var frame = new byte[CharacterText20x4.Length];
         var display = new CharacterText20x4(DisplayUnits.American);
         var pictures = Pictures.Names.Select(Pictures.Named).ToArray();
-        RenderAll();
-
-        var before = GC.GetAllocatedBytesForCurrentThread();
-        RenderAll();
-
-        Assert.Equal(0, GC.GetAllocatedBytesForCurrentThread() - before);
+        Assert.Equal(0, Allocation.Of(RenderAll));
 
         void RenderAll()
         {

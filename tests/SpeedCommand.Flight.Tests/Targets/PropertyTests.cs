@@ -143,10 +143,7 @@ public sealed class PropertyTests
     {
         var air = ReferenceGlider.StandardAirAt(1500);
         var table = Make(11, 400, 0.01, -0.002, 0.02, true);
-        Run();
-        var before = GC.GetAllocatedBytesForCurrentThread();
-        Run();
-        Assert.Equal(before, GC.GetAllocatedBytesForCurrentThread());
+        Assert.Equal(0, Allocation.Of(Run));
 
         void Run()
         {
