@@ -29,7 +29,8 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     /// <summary>Doubt of the kinetic height of a glider whose airspeed is not known, m²: 30 m/s, give or take 10 m/s.</summary>
     private const double GuessVarianceM2 = 30 * 30;
 
-    private readonly NoiseLearner _learner = new();
+    private readonly EnergyFilterBank _filters = new();
+    private readonly NoiseLearner _learner;
     private readonly ModeMixture _modes;
     private readonly TubeLags _lags;
     private readonly ChannelTimes _times = new();
@@ -48,7 +49,9 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     public AdaptiveEnergyEstimator(TubeLags lags = default)
     {
         _lags = lags;
-        _modes = new ModeMixture(_learner.Usual);
+        _learner = new NoiseLearner(_filters);
+        _modes = new ModeMixture(_filters);
+        _modes.Expect(_learner.Noise);
         Reset();
     }
 
@@ -82,8 +85,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     {
         if (_started && double.IsFinite(changeMps))
         {
-            _learner.AddKnownClimb(-changeMps);
-            _modes.AddKnownClimb(-changeMps);
+            _filters.AddKnownClimb(-changeMps);
         }
     }
 
@@ -96,7 +98,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         }
 
         var aheadS = Math.Max(0, timeUs - _timeUs) * 1e-6;
-        var estimate = _modes.EstimateAhead(aheadS, _learner.Noise);
+        var estimate = _modes.EstimateAhead(aheadS);
         var hasAirspeed = timeUs - _times.Of(EnergyChannel.Kinetic) <= MaxGapUs;
         return estimate.ClimbSigmaMps <= MaxUsefulSigmaMps
             ? estimate with
@@ -133,8 +135,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         if (_hasProbe && timeUs - _times.Of(EnergyChannel.Probe) > MaxGapUs)
         {
             _hasProbe = false;
-            _learner.DropProbe();
-            _modes.DropProbe();
+            _filters.DropProbe();
         }
 
         Take(new EnergyStep(dt, _lags, _hasProbe, timeUs - _times.Of(EnergyChannel.Kinetic) <= MaxGapUs), new EnergySample(metres, lateS, channel), isBack);
@@ -151,14 +152,16 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
         if (sample.Channel == EnergyChannel.Height && isBack)
         {
             // A height that was silent may have moved its datum; what was learnt of the climb meanwhile is worth more.
-            _heightDatumM = _learner.Usual.HeightAtSensorM - sample.Metres;
+            _heightDatumM = _filters.Usual.HeightAtSensorM - sample.Metres;
         }
 
         var datumM = sample.Channel == EnergyChannel.Height ? _heightDatumM : 0;
-        var noise = _learner.Noise;
         var energyM = _modes.EnergyM;
-        _newest = _learner.Take(step, sample with { Metres = sample.Metres + datumM }, _modes.StickWeight);
-        _modes.Take(step, sample with { Metres = sample.Metres + datumM }, _newest, noise);
+        _filters.Take(step, sample with { Metres = sample.Metres + datumM });
+        _newest = _filters.Usual.Newest;
+        _learner.Learn(step.Dt, _modes.StickWeight, _hasProbe);
+        _modes.Expect(_learner.Noise);
+        _modes.Weigh(step.Dt);
         if (sample.Channel == EnergyChannel.Kinetic && isBack)
         {
             // Energy height was counted with a guess of the airspeed; it goes on from where it was.
@@ -168,11 +171,9 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
 
     private void StartProbe(in EnergyStep step, double probeM)
     {
-        _learner.Predict(step);
-        _modes.Predict(step, _learner.Noise);
+        _filters.Predict(step);
         _hasProbe = true;
-        _learner.AddProbe(probeM, step.HasAirspeed);
-        _modes.AddProbe(probeM, step.HasAirspeed);
+        _filters.AddProbe(probeM, step.HasAirspeed);
     }
 
     private void TryStart(long timeUs, double metres, EnergyChannel channel)
@@ -201,7 +202,7 @@ public sealed class AdaptiveEnergyEstimator : IEnergyEstimator
     private void Start(in EnergyStart start)
     {
         _started = true;
-        _modes.Start(start, _learner.Noise);
-        _learner.Start(start);
+        _filters.Start(start);
+        _modes.Start();
     }
 }

@@ -1,6 +1,8 @@
+using Lanes = System.Runtime.Intrinsics.Vector256<double>;
+
 namespace SpeedCommand.Estimation.Energy;
 
-/// <summary>The states of <see cref="EnergyStateFilter"/> and how they move; docs/estimators.md derives it.</summary>
+/// <summary>The states of <see cref="EnergyStateFilters"/> and how they move; docs/estimators.md derives it.</summary>
 internal static class EnergyModel
 {
     public const int EnergyHeight = 0;
@@ -21,13 +23,13 @@ internal static class EnergyModel
     public const int ProbeSlope = 11;
     public const int States = 12;
 
-    /// <summary>One column of states, taken over a step. The tubes come first: they need the others as they were.</summary>
+    /// <summary>One column of states of all filters, taken over a step. The tubes come first: they need the others as they were.</summary>
     /// <param name="x">The column, or a row of the covariance.</param>
     /// <param name="at">Where it begins.</param>
     /// <param name="stride">From one state to the next.</param>
     /// <param name="probe">What the probe's slope counts; null without a probe.</param>
     /// <param name="step">The step.</param>
-    public static void Move(double[] x, int at, int stride, ProbeFactor? probe, in EnergyStep step)
+    public static void Move(Lanes[] x, int at, int stride, ProbeFactor? probe, in EnergyStep step)
     {
         ref var energy = ref x[at];
         ref var staying = ref x[at + Staying * stride];

@@ -10,4 +10,7 @@ namespace SpeedCommand.Estimation.Energy;
 /// <param name="ProbeVarianceM2">Variance of one probe height sample, m²; without a probe nothing depends on it.</param>
 public readonly record struct EnergyNoise(
     double ClimbDensity, double StayingDensity, double KineticDensity, double GustVarianceM2, double HeightVarianceM2, double KineticVarianceM2,
-    double ProbeVarianceM2 = 0.01);
+    double ProbeVarianceM2 = 0.01)
+{
+    internal const int Parameters = 7;
+}

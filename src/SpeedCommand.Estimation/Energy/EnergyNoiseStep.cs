@@ -1,4 +1,6 @@
+using System.Runtime.Intrinsics;
 using static SpeedCommand.Estimation.Energy.EnergyModel;
+using Lanes = System.Runtime.Intrinsics.Vector256<double>;
 
 namespace SpeedCommand.Estimation.Energy;
 
@@ -15,15 +17,15 @@ internal readonly ref struct EnergyNoiseStep
     private const double ProbeErrorDensity = 0.002;
 
     private readonly EnergyStep _step;
-    private readonly EnergyNoise _noise;
+    private readonly EnergyNoiseLanes _noise;
 
-    public EnergyNoiseStep(in EnergyStep step, in EnergyNoise noise)
+    public EnergyNoiseStep(in EnergyStep step, EnergyNoiseLanes noise)
     {
         _step = step;
         _noise = noise;
     }
 
-    public void AddTo(double[] p, bool hasProbe)
+    public void AddTo(Lanes[] p, bool hasProbe)
     {
         var dt = _step.Dt;
         var staying = _noise.StayingDensity * dt;
@@ -50,13 +52,13 @@ internal readonly ref struct EnergyNoiseStep
         }
     }
 
-    private void AddProbe(double[] p, double staying, double passing, double gust, double kineticShare)
+    private void AddProbe(Lanes[] p, Lanes staying, Lanes passing, Lanes gust, double kineticShare)
     {
         AddTube(p, TubeProbe, _step.ProbeTube, staying, passing);
         var (probe, height) = (_step.ProbeTube, _step.HeightTube);
         Add(p, TubeProbe, TubeHeight, (staying + passing) / 2 * (probe.Early * height.Early + probe.Late * height.Late));
         var share = (1 - probe.Kept) / 2;
-        var error = ProbeErrorDensity * _step.Dt;
+        var error = Vector256.Create(ProbeErrorDensity * _step.Dt);
         Add(p, TubeProbe, TubeProbe, share * share * (gust + error));
         Add(p, TubeProbe, Gust, share * gust);
         Add(p, TubeProbe, TubeKinetic, share * kineticShare * gust);
@@ -64,7 +66,7 @@ internal readonly ref struct EnergyNoiseStep
         Add(p, ProbeError, ProbeError, error);
     }
 
-    private void AddTube(double[] p, int tube, in EnergyTube through, double staying, double passing)
+    private void AddTube(Lanes[] p, int tube, in EnergyTube through, Lanes staying, Lanes passing)
     {
         var half = _step.Dt / 2;
         var mean = (through.Early + through.Late) / 2;
@@ -75,7 +77,7 @@ internal readonly ref struct EnergyNoiseStep
         Add(p, tube, tube, (staying + passing) / 2 * (through.Early * through.Early + through.Late * through.Late));
     }
 
-    private static void Add(double[] p, int i, int j, double value)
+    private static void Add(Lanes[] p, int i, int j, Lanes value)
     {
         p[i * States + j] += value;
         if (i != j)

@@ -28,12 +28,11 @@ internal sealed class ModeMixture
     private readonly double[] _weights = new double[Modes];
     private readonly double[] _likelihoods = new double[Modes];
 
-    public ModeMixture(EnergyStateFilter usual)
+    public ModeMixture(EnergyFilterBank bank)
     {
-        _filters[0] = usual;
-        for (var i = 1; i < Modes; i++)
+        for (var i = 0; i < Modes; i++)
         {
-            _filters[i] = new EnergyStateFilter();
+            _filters[i] = bank.Of((FlightMode)i);
         }
     }
 
@@ -55,64 +54,33 @@ internal sealed class ModeMixture
     /// <summary>How likely it is that the pilot moves the stick, 0 to 1.</summary>
     public double StickWeight => _weights[(int)FlightMode.Stick];
 
-    public void Start(in EnergyStart start, in EnergyNoise noise)
+    public void Start()
     {
-        _weights[0] = 1;
-        for (var i = 1; i < Modes; i++)
-        {
-            _filters[i].Start(start, NoiseOf((FlightMode)i, noise));
-            _weights[i] = 0;
-        }
+        Array.Clear(_weights);
+        _weights[(int)FlightMode.Usual] = 1;
     }
 
-    public void AddProbe(double probeM, bool hasAirspeed)
+    /// <summary>The noise is learnt anew.</summary>
+    public void Expect(in EnergyNoise noise)
     {
-        for (var i = 1; i < Modes; i++)
-        {
-            _filters[i].AddProbe(probeM, hasAirspeed);
-        }
+        _filters[(int)FlightMode.Stick].Expect(noise with { KineticDensity = Math.Max(StickDensity, noise.KineticDensity) });
+        _filters[(int)FlightMode.Edge].Expect(noise with { ClimbDensity = Math.Max(EdgeDensity, noise.ClimbDensity) });
     }
 
-    public void DropProbe()
+    /// <summary>Weighs the modes by a sample that the filters have taken.</summary>
+    public void Weigh(double dt)
     {
-        for (var i = 1; i < Modes; i++)
+        var best = double.NegativeInfinity;
+        for (var i = 0; i < Modes; i++)
         {
-            _filters[i].DropProbe();
-        }
-    }
-
-    /// <summary>Goes on in time, after the usual filter.</summary>
-    public void Predict(in EnergyStep step, in EnergyNoise noise)
-    {
-        for (var i = 1; i < Modes; i++)
-        {
-            _filters[i].Predict(step, NoiseOf((FlightMode)i, noise));
-        }
-    }
-
-    public void AddKnownClimb(double changeMps)
-    {
-        for (var i = 1; i < Modes; i++)
-        {
-            _filters[i].AddKnownClimb(changeMps);
-        }
-    }
-
-    /// <summary>Takes a sample that the usual filter has taken already.</summary>
-    public void Take(in EnergyStep step, in EnergySample sample, in Innovation usual, in EnergyNoise noise)
-    {
-        _likelihoods[0] = LikelihoodOf(usual);
-        var best = _likelihoods[0];
-        for (var i = 1; i < Modes; i++)
-        {
-            _likelihoods[i] = LikelihoodOf(_filters[i].Take(step, sample, NoiseOf((FlightMode)i, noise)));
+            _likelihoods[i] = LikelihoodOf(_filters[i].Newest);
             best = Math.Max(best, _likelihoods[i]);
         }
 
-        Weigh(step.Dt, best);
+        Weigh(dt, best);
     }
 
-    public EnergyEstimate EstimateAhead(double aheadS, in EnergyNoise noise)
+    public EnergyEstimate EstimateAhead(double aheadS)
     {
         double climb = 0, kinetic = 0, variance = 0;
         for (var i = 0; i < Modes; i++)
@@ -124,7 +92,7 @@ internal sealed class ModeMixture
         for (var i = 0; i < Modes; i++)
         {
             var apart = _filters[i].ClimbMps - climb;
-            variance += _weights[i] * (_filters[i].ClimbVariance + apart * apart + DensityOf(NoiseOf((FlightMode)i, noise)) * aheadS);
+            variance += _weights[i] * (_filters[i].ClimbVariance + apart * apart + _filters[i].ClimbDensity * aheadS);
         }
 
         return new EnergyEstimate(EnergyM + climb * aheadS, climb, Math.Sqrt(variance * OwnDoubt), kinetic);
@@ -152,13 +120,4 @@ internal sealed class ModeMixture
             _weights[i] /= sum;
         }
     }
-
-    private static double DensityOf(in EnergyNoise noise) => noise.ClimbDensity + noise.StayingDensity;
-
-    private static EnergyNoise NoiseOf(FlightMode mode, in EnergyNoise noise) => mode switch
-    {
-        FlightMode.Stick => noise with { KineticDensity = Math.Max(StickDensity, noise.KineticDensity) },
-        FlightMode.Edge => noise with { ClimbDensity = Math.Max(EdgeDensity, noise.ClimbDensity) },
-        _ => noise,
-    };
 }

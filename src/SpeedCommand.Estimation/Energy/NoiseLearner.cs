@@ -3,28 +3,25 @@ namespace SpeedCommand.Estimation.Energy;
 /// <summary>The noise parameters, each learnt with the help of a filter that has a little more of it.</summary>
 internal sealed class NoiseLearner
 {
-    private const int Parameters = 7;
-
-    /// <summary>The probe's variance is learnt only while there is a probe, so that without one its filter costs nothing.</summary>
+    /// <summary>The probe's variance is learnt only while there is a probe.</summary>
     private const int ProbeVariance = 6;
 
     private const int KineticDensity = 2;
 
-    private readonly EnergyStateFilter[] _filters = new EnergyStateFilter[Parameters];
+    private readonly EnergyStateFilter _usual;
+    private readonly EnergyStateFilter[] _filters = new EnergyStateFilter[EnergyNoise.Parameters];
     private readonly LearntNoise[] _learnt;
-    private readonly EnergyNoise[] _perturbed = new EnergyNoise[Parameters];
-    private int _running = ProbeVariance;
 
-    public NoiseLearner()
+    public NoiseLearner(EnergyFilterBank bank)
     {
         _learnt =
         [
             new(0.05, 2.5, 0.01), new(0.008, 2.5, 0.001), new(1, 3, 0.1), new(0.03, 2.5, 0.0025), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6), new(0.01, 3, 1e-6),
         ];
-        Usual = new EnergyStateFilter();
-        for (var i = 0; i < Parameters; i++)
+        _usual = bank.Usual;
+        for (var i = 0; i < _filters.Length; i++)
         {
-            _filters[i] = new EnergyStateFilter();
+            _filters[i] = bank.Learning(i);
         }
 
         Publish();
@@ -33,80 +30,28 @@ internal sealed class NoiseLearner
     /// <summary>The noise as learnt so far.</summary>
     public EnergyNoise Noise { get; private set; }
 
-    /// <summary>The filter with that noise.</summary>
-    public EnergyStateFilter Usual { get; }
-
-    public void Start(in EnergyStart start)
-    {
-        _running = ProbeVariance;
-        Usual.Start(start, Noise);
-        for (var i = 0; i < _running; i++)
-        {
-            _filters[i].Start(start, _perturbed[i]);
-        }
-    }
-
-    public void AddProbe(double probeM, bool hasAirspeed)
-    {
-        _filters[ProbeVariance].CopyFrom(Usual);
-        _running = Parameters;
-        Usual.AddProbe(probeM, hasAirspeed);
-        for (var i = 0; i < _running; i++)
-        {
-            _filters[i].AddProbe(probeM, hasAirspeed);
-        }
-    }
-
-    public void DropProbe()
-    {
-        _running = ProbeVariance;
-        Usual.DropProbe();
-        for (var i = 0; i < _running; i++)
-        {
-            _filters[i].DropProbe();
-        }
-    }
-
-    public void Predict(in EnergyStep step)
-    {
-        Usual.Predict(step, Noise);
-        for (var i = 0; i < _running; i++)
-        {
-            _filters[i].Predict(step, _perturbed[i]);
-        }
-    }
-
-    public void AddKnownClimb(double changeMps)
-    {
-        Usual.AddKnownClimb(changeMps);
-        for (var i = 0; i < _running; i++)
-        {
-            _filters[i].AddKnownClimb(changeMps);
-        }
-    }
-
     /// <summary>
-    /// Learns from a sample; returns the surprise of the filter with the usual noise. While the stick moves, what surprises is about the
-    /// stick; the air and the sensors are not to blame.
+    /// Learns from a sample that the filters have taken. While the stick moves, what surprises is about the stick; the air and the
+    /// sensors are not to blame.
     /// </summary>
-    public Innovation Take(in EnergyStep step, in EnergySample sample, double stickWeight)
+    public void Learn(double dt, double stickWeight, bool hasProbe)
     {
-        var usual = Usual.Take(step, sample, Noise);
-        for (var i = 0; i < _running; i++)
+        var usual = _usual.Newest;
+        for (var i = 0; i < (hasProbe ? EnergyNoise.Parameters : ProbeVariance); i++)
         {
-            _learnt[i].Learn(usual, _filters[i].Take(step, sample, _perturbed[i]), step.Dt, i == KineticDensity ? 1 : 1 - stickWeight);
+            _learnt[i].Learn(usual, _filters[i].Newest, dt, i == KineticDensity ? 1 : 1 - stickWeight);
         }
 
         Publish();
-        return usual;
     }
 
     private void Publish()
     {
         Noise = With(-1);
-        for (var i = 0; i < Parameters; i++)
+        _usual.Expect(Noise);
+        for (var i = 0; i < _filters.Length; i++)
         {
-            _perturbed[i] = With(i);
+            _filters[i].Expect(With(i));
         }
     }
 

@@ -2,7 +2,7 @@ using SpeedCommand.Estimation.Energy;
 
 namespace SpeedCommand.Estimation.Tests;
 
-public class EnergyStateFilterTests
+public class EnergyStateFiltersTests
 {
     /// <summary>
     /// With the passing climb all but still, the height axis of the filter is the textbook tracker [position, rate] with continuous white
@@ -18,16 +18,17 @@ public class EnergyStateFilterTests
         const double T = 0.05;
         const double Q = 0.1;
         var noise = new EnergyNoise(1e-12, Q, 1e-12, 1e-12, Q * T * T * T / qT3OverR, 1e-12);
-        var filter = new EnergyStateFilter();
-        filter.Start(new EnergyStart(0, 0), noise);
+        var filters = Four(noise);
+        var filter = filters[0];
+        filters.Start(new EnergyStart(0, 0));
         for (var i = 0; i < 2000; i++)
         {
-            TakeBoth(filter, T, 0, noise);
+            TakeBoth(filters, T, 0);
         }
 
-        filter.Predict(new EnergyStep(T, default), noise);
+        filters.Predict(new EnergyStep(T, default));
         var (energyM, climbMps) = (filter.EnergyM, filter.ClimbMps);
-        filter.Take(new EnergyStep(0, default), new EnergySample(1, 0, EnergyChannel.Height), noise);
+        filters.Take(new EnergyStep(0, default), new EnergySample(1, 0, EnergyChannel.Height));
         // Two milliseconds stand for no tube at all: a twenty-fifth of the step.
         Assert.Equal(alpha, filter.EnergyM - energyM, 0.03 * alpha);
         Assert.Equal(beta, (filter.ClimbMps - climbMps) * T, 0.03 * beta);
@@ -42,34 +43,47 @@ public class EnergyStateFilterTests
     public void ClimbVariance_ClimbThatNeverChanges_IsTheCramerRaoBoundOfALine(int samples, double everyS, double sigmaMps)
     {
         var noise = new EnergyNoise(1e-12, 1e-12, 1e-12, 1e-12, 0.01, 1e-12);
-        var filter = new EnergyStateFilter();
-        filter.Start(new EnergyStart(0, 0), noise);
+        var filters = Four(noise);
+        var filter = filters[0];
+        filters.Start(new EnergyStart(0, 0));
         for (var i = 1; i < samples; i++)
         {
-            TakeBoth(filter, everyS, 0, noise);
+            TakeBoth(filters, everyS, 0);
         }
 
         Assert.Equal(sigmaMps, Math.Sqrt(filter.ClimbVariance), 0.005 * sigmaMps);
     }
 
-    private static void TakeBoth(EnergyStateFilter filter, double stepS, double heightM, in EnergyNoise noise)
+    private static EnergyStateFilters Four(in EnergyNoise noise)
     {
-        filter.Take(new EnergyStep(stepS, default), new EnergySample(heightM, 0, EnergyChannel.Height), noise);
-        filter.Take(new EnergyStep(0, default), new EnergySample(0, 0, EnergyChannel.Kinetic), noise);
+        var filters = new EnergyStateFilters();
+        for (var lane = 0; lane < EnergyStateFilters.Count; lane++)
+        {
+            filters[lane].Expect(noise);
+        }
+
+        return filters;
+    }
+
+    private static void TakeBoth(EnergyStateFilters filters, double stepS, double heightM)
+    {
+        filters.Take(new EnergyStep(stepS, default), new EnergySample(heightM, 0, EnergyChannel.Height));
+        filters.Take(new EnergyStep(0, default), new EnergySample(0, 0, EnergyChannel.Kinetic));
     }
 
     [Fact]
     public void Take_ConstantClimb_IsFoundWithoutBias()
     {
         var noise = new EnergyNoise(0.1, 0.005, 1, 0.01, 0.01, 0.01);
-        var filter = new EnergyStateFilter();
-        filter.Start(new EnergyStart(1000, 40), noise);
+        var filters = Four(noise);
+        var filter = filters[0];
+        filters.Start(new EnergyStart(1000, 40));
         var step = new EnergyStep(0.05, default);
         var instant = new EnergyStep(0, default);
         for (var i = 1; i <= 4000; i++)
         {
-            filter.Take(step, new EnergySample(1000 + 2.5 * i * 0.05, 0, EnergyChannel.Height), noise);
-            filter.Take(instant, new EnergySample(40, 0, EnergyChannel.Kinetic), noise);
+            filters.Take(step, new EnergySample(1000 + 2.5 * i * 0.05, 0, EnergyChannel.Height));
+            filters.Take(instant, new EnergySample(40, 0, EnergyChannel.Kinetic));
         }
 
         Assert.Equal(2.5, filter.ClimbMps, 0.02);
@@ -84,8 +98,9 @@ public class EnergyStateFilterTests
         // Height and kinetic height exchange 30 m in a smooth swap; the sensors feel it through first-order tubes, integrated
         // here in steps of a millisecond, independently of the filter.
         var noise = new EnergyNoise(0.02, 0.004, 200, 1e-4, 1e-4, 1e-4);
-        var filter = new EnergyStateFilter();
-        filter.Start(new EnergyStart(1000, 60), noise);
+        var filters = Four(noise);
+        var filter = filters[0];
+        filters.Start(new EnergyStart(1000, 60));
         double tubeHeight = 1000, tubeKinetic = 60, worst = 0;
         for (var ms = 1; ms <= 12_000; ms++)
         {
@@ -94,8 +109,8 @@ public class EnergyStateFilterTests
             tubeHeight += (1060 - kinetic - tubeHeight) * 0.001 / heightLagS;
             if (ms % 50 == 0)
             {
-                filter.Take(new EnergyStep(0.05, new TubeLags(heightLagS, kineticLagS)), new EnergySample(tubeHeight, 0, EnergyChannel.Height), noise);
-                filter.Take(new EnergyStep(0, new TubeLags(heightLagS, kineticLagS)), new EnergySample(tubeKinetic, 0, EnergyChannel.Kinetic), noise);
+                filters.Take(new EnergyStep(0.05, new TubeLags(heightLagS, kineticLagS)), new EnergySample(tubeHeight, 0, EnergyChannel.Height));
+                filters.Take(new EnergyStep(0, new TubeLags(heightLagS, kineticLagS)), new EnergySample(tubeKinetic, 0, EnergyChannel.Kinetic));
                 worst = ms > 3000 ? Math.Max(worst, Math.Abs(filter.ClimbMps)) : 0;
             }
         }
