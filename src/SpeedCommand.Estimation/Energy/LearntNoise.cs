@@ -17,6 +17,8 @@ public sealed class LearntNoise
 
     private const double MostBelieved = 16;
 
+    private static readonly double s_perturbation = Math.Exp(Perturbation);
+
     private readonly double _usual;
     private readonly double _priorInformation;
     private readonly double _leastLog;
@@ -71,6 +73,6 @@ public sealed class LearntNoise
     {
         _log = Math.Max(log, _leastLog);
         Value = _usual * Math.Exp(_log);
-        Perturbed = Value * Math.Exp(Perturbation);
+        Perturbed = Value * s_perturbation;
     }
 }

@@ -19,8 +19,7 @@ internal sealed class ArrivalEnvelope
 
     private readonly double[] _x = new double[Buckets];
     private readonly double[] _y = new double[Buckets];
-    private readonly double[] _spread = new double[Buckets];
-    private readonly double[] _sorted = new double[Buckets];
+    private readonly RunningMedian _spreads = new(Buckets);
     private readonly int[] _hull = new int[Buckets];
     private int _count;
     private bool _isRateHeld;
@@ -36,7 +35,7 @@ internal sealed class ArrivalEnvelope
     public double SlopeUs { get; private set; }
 
     /// <summary>The greatest delay of an ordinary half second, microseconds: the median, which losses and stalls do not move.</summary>
-    public double UsualSpreadUs { get; private set; }
+    public double UsualSpreadUs => _spreads.Median;
 
     /// <summary>The least delay of the last two seconds, microseconds: far above 0 when the board's clock is no longer this line.</summary>
     public double LeastRecentUs { get; private set; }
@@ -47,7 +46,8 @@ internal sealed class ArrivalEnvelope
         (_anchorX, _anchorY, SlopeUs) = (x, y, slopeUs);
         _count = 0;
         _isRateHeld = false;
-        UsualSpreadUs = LeastRecentUs = 0;
+        LeastRecentUs = 0;
+        _spreads.Clear();
         OpenBucket(y);
     }
 
@@ -103,12 +103,12 @@ internal sealed class ArrivalEnvelope
         {
             Array.Copy(_x, 1, _x, 0, Buckets - 1);
             Array.Copy(_y, 1, _y, 0, Buckets - 1);
-            Array.Copy(_spread, 1, _spread, 0, Buckets - 1);
             _count--;
         }
 
-        (_x[_count], _y[_count], _spread[_count]) = (_bucketX, _bucketY, _bucketMost);
+        (_x[_count], _y[_count]) = (_bucketX, _bucketY);
         _count++;
+        _spreads.Add(_bucketMost);
         Fit();
         LookBack();
     }
@@ -183,10 +183,5 @@ internal sealed class ArrivalEnvelope
         {
             LeastRecentUs = Math.Min(LeastRecentUs, _y[i] - At(_x[i]));
         }
-
-        var sorted = _sorted.AsSpan(0, _count);
-        _spread.AsSpan(0, _count).CopyTo(sorted);
-        sorted.Sort();
-        UsualSpreadUs = sorted[_count / 2];
     }
 }
