@@ -1,7 +1,7 @@
 namespace SpeedCommand.Estimation.Energy;
 
 /// <summary>
-/// The estimator flown: <see cref="EnergyStateFilter"/> with its noise learnt from the data as they come in, so that neither the
+/// The estimator flown: <see cref="EnergyStateFilters"/> with its noise learnt from the data as they come in, so that neither the
 /// sensors' grade nor the day's turbulence is a setting, and with two more of it standing by for what cannot be learnt in
 /// time: a stick moved (<see cref="FlightMode.Stick"/>) and a sudden edge of air (<see cref="FlightMode.Edge"/>). It knows the climb
 /// while it hears height and kinetic height, or a total-energy probe, or all of them; a channel that comes or goes changes sigma only.

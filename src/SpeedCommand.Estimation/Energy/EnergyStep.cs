@@ -24,7 +24,8 @@ public readonly struct EnergyStep
         Passing = Markov(dt, PassingTimeS);
         Gust = Markov(dt, GustTimeS);
         HeightTube = new EnergyTube(dt, lags.HeightS);
-        KineticTube = new EnergyTube(dt, lags.KineticS);
+        // Lags are often the same, and a tube costs three exponentials.
+        KineticTube = lags.KineticS == lags.HeightS ? HeightTube : new EnergyTube(dt, lags.KineticS);
         ProbeTube = hasProbe ? new EnergyTube(dt, lags.ProbeS) : default;
         // The exact exponential of [[0, 1], [-1/T², -2/T]], critically damped.
         var u = dt / KineticTimeS;
