@@ -24,16 +24,22 @@ public sealed class KilledRecordingTests(ITestOutputHelper output)
     {
         var random = new Random(seed);
         var worstS = 0.0;
-        for (var i = 0; i < Kills; i++)
+        for (var i = 0; i < Kills; i += 2)
         {
-            using var cockpit = new KilledCockpit(packing);
-            await cockpit.KillAsync(TimeSpan.FromSeconds(random.NextDouble() * 2.5));
-            var lostS = cockpit.LostS(Replayed(cockpit.Recording));
-            worstS = Math.Max(worstS, lostS);
-            Assert.True(lostS <= MostLostS, FormattableString.Invariant($"seed {seed}, kill {i}: lost {lostS:F3} s"));
+            // Two at a time: a cockpit mostly waits, and each is a process of its own.
+            var lost = await Task.WhenAll(KillAsync(packing, random.NextDouble() * 2.5), KillAsync(packing, random.NextDouble() * 2.5));
+            worstS = Math.Max(worstS, lost.Max());
+            Assert.True(lost.Max() <= MostLostS, FormattableString.Invariant($"seed {seed}, kills {i} and {i + 1}: lost {lost[0]:F3} and {lost[1]:F3} s"));
         }
 
         output.WriteLine(FormattableString.Invariant($"{packing}: {Kills} kills, worst loss {worstS:F3} s"));
+    }
+
+    private static async Task<double> KillAsync(string packing, double afterS)
+    {
+        using var cockpit = new KilledCockpit(packing);
+        await cockpit.KillAsync(TimeSpan.FromSeconds(afterS));
+        return cockpit.LostS(Replayed(cockpit.Recording));
     }
 
     /// <summary>Replays without a settings file; the number of the last static line.</summary>
