@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using SpeedCommand.Pipeline.Controls;
 
 namespace SpeedCommand.Replay.Logs;
 
@@ -25,6 +26,11 @@ internal static class LogHeaderText
         if (header.FromUs > 0)
         {
             text.Append(CultureInfo.InvariantCulture, $"#from {header.FromUs / 1_000_000}.{header.FromUs % 1_000_000:D6}\n");
+        }
+
+        foreach (var (timeUs, change) in header.Controls)
+        {
+            text.Append(CultureInfo.InvariantCulture, $"#control {timeUs / 1_000_000}.{timeUs % 1_000_000:D6} {ControlText.Write(change)}\n");
         }
 
         foreach (var (path, value) in header.Flown.Values)
