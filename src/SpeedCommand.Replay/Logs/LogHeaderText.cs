@@ -28,11 +28,6 @@ internal static class LogHeaderText
             text.Append(CultureInfo.InvariantCulture, $"#from {header.FromUs / 1_000_000}.{header.FromUs % 1_000_000:D6}\n");
         }
 
-        foreach (var (timeUs, change) in header.Controls)
-        {
-            text.Append(CultureInfo.InvariantCulture, $"#control {timeUs / 1_000_000}.{timeUs % 1_000_000:D6} {ControlText.Write(change)}\n");
-        }
-
         foreach (var (path, value) in header.Flown.Values)
         {
             text.Append("#setting ").Append(path).Append(' ').Append(OneLine(value)).Append('\n');
@@ -44,6 +39,11 @@ internal static class LogHeaderText
             {
                 text.Append("#glider-line ").Append(line).Append('\n');
             }
+        }
+
+        foreach (var (timeUs, change) in header.Controls)
+        {
+            text.Append(CultureInfo.InvariantCulture, $"#control {timeUs / 1_000_000}.{timeUs % 1_000_000:D6} {ControlText.Write(change)}\n");
         }
 
         return Encoding.UTF8.GetBytes(text.ToString());

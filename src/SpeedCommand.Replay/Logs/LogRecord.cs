@@ -13,7 +13,7 @@ public readonly ref struct LogRecord
         Content = content;
     }
 
-    internal LogRecord(long timeUs, in ControlChange change)
+    internal LogRecord(long timeUs, ControlChange change)
     {
         Kind = LogRecordKind.Control;
         TimeUs = timeUs;
