@@ -48,15 +48,13 @@ public sealed record ControlSpec(ControlId Id, string Name, string Meaning)
         ? "the next word"
         : string.Join(", ", Steps.Select(step => string.Create(CultureInfo.InvariantCulture, $"{step.Size:G} {step.Unit}")));
 
-    /// <summary>What is accepted, for messages.</summary>
+    /// <summary>What is accepted, for messages about what is none of it.</summary>
     public string Expectation
     {
         get
         {
-            var others = string.Join(", ", [.. Verbs, "+", "-"]);
-            return Quantity is { } kind
-                ? $"{Range}, {Flight.Quantities.Quantity.Expectation(kind)}, or {others}"
-                : $"one of {Range}, {others}";
+            string[] others = [.. Quantity is null ? Words : Verbs, "+"];
+            return (Quantity is { } kind ? Flight.Quantities.Quantity.Expectation(kind) + ", " : "") + string.Join(", ", others) + " or -";
         }
     }
 

@@ -101,7 +101,9 @@ public static class ControlText
         value = value.Trim(' ');
         if (ReadValue(spec, value) is not { } read)
         {
-            problem = $"{spec.Name}: expected {spec.Expectation}, found '{Show(value)}'";
+            // A good quantity that is too much or too little is told its range, anything else what is understood.
+            var isQuantity = spec.Quantity is { } kind && Quantity.TryParse(value, kind, out _, out _);
+            problem = $"{spec.Name}: expected {(isQuantity ? spec.Range : spec.Expectation)}, found '{Show(value)}'";
             return false;
         }
 
