@@ -39,7 +39,7 @@ public readonly record struct ControlValues
     /// <summary>The phase the pilot insists on; null when the air data decide.</summary>
     public FlightPhase? ForcedPhase { get; init; }
 
-    /// <summary>Altimeter setting, Pa.</summary>
+    /// <summary>Altimeter setting, Pa; 0 in a picture that says nothing of it.</summary>
     public double QnhPa { get; init; }
 
     /// <summary>Brightness, 0 to 1.</summary>
@@ -58,7 +58,7 @@ public readonly record struct ControlValues
     public long LastChangedUs { get; init; }
 
     /// <summary>Whether the altimeter shows pressure altitude: nobody has set it to anything else.</summary>
-    public bool IsQnhStandard => QnhPa == StandardAtmosphere.SeaLevelPressurePa;
+    public bool IsQnhStandard => QnhPa is 0 or StandardAtmosphere.SeaLevelPressurePa;
 
     /// <summary>The change that would bring a control to where it stands now.</summary>
     /// <param name="control">The control.</param>

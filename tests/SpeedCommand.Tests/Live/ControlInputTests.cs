@@ -39,6 +39,8 @@ public sealed class ControlInputTests
             dead.Bind(new UnixDomainSocketEndPoint(socketPath));
         }
 
+        cockpit.Static.PlugIn();
+        cockpit.Pitot.PlugIn();
         await cockpit.StartAsync();
         await cockpit.WaitUntilKnownAsync();
         Assert.Equal(
