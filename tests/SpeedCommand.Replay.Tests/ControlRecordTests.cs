@@ -19,7 +19,7 @@ public sealed class ControlRecordTests : IPictureSink
 
     private readonly List<CockpitPicture> _pictures = [];
 
-    public void OnPicture(in CockpitPicture picture) => _pictures.Add(picture);
+    void IPictureSink.OnPicture(in CockpitPicture picture) => _pictures.Add(picture);
 
     private FlightLogReader Replay(string log)
     {

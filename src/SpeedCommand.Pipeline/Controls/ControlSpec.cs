@@ -3,11 +3,6 @@ using SpeedCommand.Flight.Quantities;
 
 namespace SpeedCommand.Pipeline.Controls;
 
-/// <summary>How far one step goes for a pilot who reads a unit.</summary>
-/// <param name="Unit">The unit.</param>
-/// <param name="Size">The step in that unit.</param>
-public readonly record struct ControlStep(string Unit, double Size);
-
 /// <summary>Everything there is to know of a control: validation, help, lists and documents all take it from here.</summary>
 /// <param name="Id">Which control.</param>
 /// <param name="Name">Its name on every input and in logs.</param>
