@@ -1,4 +1,5 @@
 using SpeedCommand.Estimation.Energy;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Health;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Pipeline.Stages;
@@ -15,6 +16,7 @@ public sealed class FlightPipeline
 {
     private readonly IPictureSink _picturesTo;
     private readonly AirDataStage _airData;
+    private readonly PilotStage _pilot;
     private readonly LoadStage _load = new();
     private readonly HydrostaticHeight _height = new();
     private readonly TotalEnergyProbe _probe = new();
@@ -37,10 +39,11 @@ public sealed class FlightPipeline
         ArgumentNullException.ThrowIfNull(settings);
         _energy = energy ?? new AdaptiveEnergyEstimator(new TubeLags(settings.StaticLagS, settings.ImpactLagS, settings.ProbeLagS));
         _picturesTo = sink;
+        _pilot = new PilotStage(settings);
         _airData = new AirDataStage(settings);
         _health = new HealthStage(_airData, _events);
-        _sink = new SinkStage(settings, _load, _energy);
-        _pictures = new PictureStage(settings, _airData, _load, _energy, _events);
+        _sink = new SinkStage(settings, _pilot, _load, _energy);
+        _pictures = new PictureStage(settings, _pilot, _airData, _load, _energy, _events);
     }
 
     /// <summary>The streams added so far, with their counts.</summary>
@@ -49,20 +52,23 @@ public sealed class FlightPipeline
     /// <summary>When each fault came and went.</summary>
     public FaultHistory FaultHistory { get; } = new();
 
+    /// <summary>How the pilot's controls stand at the newest stamp.</summary>
+    public ControlValues Controls => _pilot.Values;
+
     /// <summary>The newest stamp seen, microseconds.</summary>
     public long TimeUs { get; private set; }
 
     /// <summary>Adds a stream of sentences on a line of unknown speed.</summary>
     /// <param name="name">Its name in settings and logs.</param>
     /// <param name="rule">Whether its sentences may lack a checksum.</param>
-    /// <returns>The stream's number for <see cref="Accept"/>.</returns>
+    /// <returns>The stream's number for <see cref="Accept(long, int, ReadOnlySpan{byte})"/>.</returns>
     /// <exception cref="InvalidOperationException">There are <see cref="PipelineBounds.MaxStreams"/> already.</exception>
     public int AddStream(string name, ChecksumRule rule) => AddStream(name, StreamSettings.Sentences(rule));
 
     /// <summary>Adds a stream that lines may come from.</summary>
     /// <param name="name">Its name in settings and logs.</param>
     /// <param name="settings">What its board speaks, and how fast.</param>
-    /// <returns>The stream's number for <see cref="Accept"/>.</returns>
+    /// <returns>The stream's number for <see cref="Accept(long, int, ReadOnlySpan{byte})"/>.</returns>
     /// <exception cref="InvalidOperationException">There are <see cref="PipelineBounds.MaxStreams"/> already.</exception>
     public int AddStream(string name, StreamSettings settings)
     {
@@ -118,6 +124,25 @@ public sealed class FlightPipeline
         }
     }
 
+    /// <summary>Takes a change of a control. Pictures due before it are made first.</summary>
+    /// <param name="timeUs">Its stamp, microseconds since the start; one before <see cref="BeginAt"/> tells how the controls stood when a recording went on in a new file.</param>
+    /// <param name="change">The change.</param>
+    public void Accept(long timeUs, in ControlChange change)
+    {
+        AdvanceTo(timeUs);
+        _pilot.Take(timeUs, change);
+        _pilot.AdvanceTo(TimeUs);
+        switch (change.Control)
+        {
+            case ControlId.Ballast or ControlId.Bugs:
+                _sink.Forget();
+                break;
+            case ControlId.Phase:
+                _pictures.Force(_pilot.Values.ForcedPhase);
+                break;
+        }
+    }
+
     /// <summary>Lets data time pass without a line; every picture due by then is made.</summary>
     /// <param name="timeUs">Microseconds since the start; an earlier one than the newest changes nothing.</param>
     public void AdvanceTo(long timeUs)
@@ -125,11 +150,14 @@ public sealed class FlightPipeline
         TimeUs = Math.Max(TimeUs, timeUs);
         while (_nextPictureUs <= TimeUs)
         {
+            _pilot.AdvanceTo(_nextPictureUs);
             var picture = _pictures.MakeAt(_nextPictureUs);
             FaultHistory.Take(picture.TimeUs, picture.Faults);
             _picturesTo.OnPicture(picture);
             _nextPictureUs += PipelineBounds.PicturePeriodUs;
         }
+
+        _pilot.AdvanceTo(TimeUs);
     }
 
     /// <summary>The age of a number counts from its arrival; what the estimator joins, it joins at the moment of the sample.</summary>

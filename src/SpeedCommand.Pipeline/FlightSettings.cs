@@ -10,6 +10,9 @@ public sealed record FlightSettings(Glider Glider)
     /// <summary>All-up mass with ballast, kg; default the polar's reference mass.</summary>
     public double MassKg { get; init; } = Glider.ReferenceMassKg;
 
+    /// <summary>Water ballast in that mass, kg; default 0. The mass never falls below what it is without.</summary>
+    public double BallastKg { get; init; }
+
     /// <summary>Extra sink of a dirty wing as a fraction of the clean sink, 0 or more; default 0.</summary>
     public double BugsFraction { get; init; }
 

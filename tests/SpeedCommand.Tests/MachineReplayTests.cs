@@ -3,6 +3,7 @@ using System.Text;
 using CsCheck;
 using Microsoft.Extensions.Logging.Abstractions;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Ports;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Pictures;
@@ -35,18 +36,6 @@ public sealed class MachineReplayTests : IDisposable
 
     public void Dispose() => _folder.Delete(recursive: true);
 
-    /// <summary>A clock that stands until it is moved.</summary>
-    private sealed class ManualTime : TimeProvider
-    {
-        public long NowUs { get; set; }
-
-        public override long TimestampFrequency => 1_000_000;
-
-        public override long GetTimestamp() => NowUs;
-
-        public override DateTimeOffset GetUtcNow() => DateTimeOffset.UnixEpoch;
-    }
-
     [Fact]
     public void Live_EqualsReplay_ByteForByte_ForAnyChunking() =>
         Gen.Select(Gen.Int[1, 200].Array[1, 20], Gen.Int[0, 250_000].Array[1, 20], Gen.Int[500, 8_000], Gen.Bool, Gen.Int[1, 40]).Sample(
@@ -68,6 +57,7 @@ public sealed class MachineReplayTests : IDisposable
         var live = new MemoryStream();
         using (var machine = new CockpitMachine(TestSettings.Flight, clock, recorder, [new PictureLines(live)]))
         {
+            machine.Begin(new ControlChange(ControlId.Ballast, 40));
             PortIntake[] ports = [.. new[] { Board, Columns }.Select(port =>
                 new PortIntake(port, new PortState(port.Name), machine, clock, NullLogger<PortIntake>.Instance))];
             byte[][] traffic = [StaticBytes(), PitotBytes()];
@@ -84,6 +74,11 @@ public sealed class MachineReplayTests : IDisposable
                     machine.Tick();
                 }
 
+                if (i % 7 == 3)
+                {
+                    Turn(machine, Knob[i / 7 % Knob.Length]);
+                }
+
                 if (i % drainEvery == 0)
                 {
                     recorder.Drain();
@@ -97,6 +92,16 @@ public sealed class MachineReplayTests : IDisposable
         }
 
         return (Encoding.UTF8.GetString(live.ToArray()), disk.ConvertAll(file => TextOf(file, isPacked)));
+    }
+
+    /// <summary>What a pilot does, in steps and words that depend on how the controls stand.</summary>
+    private static readonly string[] Knob =
+        ["expected-climb +", "ballast dump 2 kg/s", "phase climbing", "bugs +", "ballast stop", "expected-climb auto", "phase auto", "qnh +", "ballast +"];
+
+    private static void Turn(CockpitMachine machine, string text)
+    {
+        Assert.True(ControlText.TryRead(text, out var request, out _));
+        machine.TryChange(request, new ControlRules(100, 0.7, []), out _, out _);
     }
 
     private static MemoryStream AddTo(List<MemoryStream> disk)

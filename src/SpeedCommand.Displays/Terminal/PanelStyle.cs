@@ -9,6 +9,12 @@ namespace SpeedCommand.Displays.Terminal;
 /// <param name="Units">The units shown.</param>
 public sealed record PanelStyle(int Width, int Height, PanelLook Look, DisplayUnits Units)
 {
+    /// <summary>What the panel says for the moment, besides the picture: an answer to the pilot; empty for nothing.</summary>
+    public string Notice { get; init; } = "";
+
+    /// <summary>A page of words that stands over the panel for the moment, such as the keys; empty for none.</summary>
+    public IReadOnlyList<string> Page { get; init; } = [];
+
     /// <summary>The fewest columns that the full panel fits in.</summary>
     public const int FullWidth = 60;
 

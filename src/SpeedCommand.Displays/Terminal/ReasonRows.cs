@@ -58,12 +58,13 @@ internal static class ReasonRows
         var column = new Column(grid, grid.Width / 2, RightLabelWidth, grid.Width);
         if (layout.ReasonRows > 5)
         {
+            // A climb worked out from others is shown whatever its spread: the spread stands beside it.
             var expected = new Gauge(picture.ExpectedClimbMps, double.NaN, 0);
-            column.Row(row++, "expected climb", Readout.Of(expected, units.Vertical, Trust.Vertical), units.Vertical, true);
+            column.Row(row++, picture.Controls.IsExpectedClimbAutomatic ? "expected, auto" : "expected climb", Readout.Of(expected, units.Vertical, Trust.Vertical), units.Vertical, true);
         }
 
-        column.Row(row++, "pressure altitude",
-            Readout.Of(picture.PressureAltitudeM, units.Height, Trust.Height), units.Height, false);
+        column.Row(row++, AltitudeLabel(picture, units),
+            Readout.Of(picture.Controls.IsQnhStandard ? picture.PressureAltitudeM : picture.AltitudeM, units.Height, Trust.Height), units.Height, false);
         column.Row(row++, "density altitude",
             Readout.Of(picture.DensityAltitudeM, units.Height, Trust.Height), units.Height, false);
         var temperature = Readout.Of(picture.TemperatureK, units.Temperature, Trust.Temperature);
@@ -73,6 +74,10 @@ internal static class ReasonRows
         column.Row(row, "distance in hand",
             Readout.Of(picture.RangeM, units.Distance, Trust.ShareOf(picture.RangeM.Value)), units.Distance, false);
     }
+
+    /// <summary>Once the altimeter is set, the altitude it shows takes the place of pressure altitude, and the setting stands there.</summary>
+    private static string AltitudeLabel(in CockpitPicture picture, DisplayUnits units) =>
+        picture.Controls.IsQnhStandard ? "pressure altitude" : $"alt. {ControlWords.Pressure(picture.Controls.QnhPa, units)}";
 
     private static string TemperatureLabel(Readout temperature, TemperatureSource source) =>
         !temperature.IsKnown ? "temperature"

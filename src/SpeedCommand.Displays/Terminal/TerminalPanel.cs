@@ -13,6 +13,9 @@ namespace SpeedCommand.Displays.Terminal;
 /// </summary>
 public static class TerminalPanel
 {
+    /// <summary>The row below the header is empty in every layout.</summary>
+    private const int MomentRow = 1;
+
     /// <summary>Send before the first frame: a page of its own, cleared, without a cursor.</summary>
     public const string Enter = "\u001b[?1049h\u001b[?25l\u001b[2J";
 
@@ -27,9 +30,17 @@ public static class TerminalPanel
     {
         ArgumentNullException.ThrowIfNull(style);
         var grid = new TextGrid(style.Width, style.Height);
+        if (style.Page.Count > 0)
+        {
+            DrawPage(grid, style.Page);
+            return grid.ToText(style.Look);
+        }
+
+        var moment = style.Notice.Length > 0 ? style.Notice : ControlWords.Moment(picture, style.Units);
         if (!style.IsFull)
         {
             DrawCharacterLines(grid, picture, style);
+            grid.Put(CharacterText20x4.Rows, 0, moment, Tone.Strong);
             return grid.ToText(style.Look);
         }
 
@@ -40,7 +51,16 @@ public static class TerminalPanel
         LeaningBar.Draw(grid, layout.BarTop, layout.BarHeight, SpeedCorrection.Of(picture, style.Units), style.Units.Speed);
         ReasonRows.Draw(grid, layout, picture, style.Units);
         DrawHealth(grid, layout.HealthRow, picture.Faults);
+        grid.Put(MomentRow, 1, moment, Tone.Strong);
         return grid.ToText(style.Look);
+    }
+
+    private static void DrawPage(TextGrid grid, IReadOnlyList<string> page)
+    {
+        for (var row = 0; row < page.Count; row++)
+        {
+            grid.Put(row, 1, page[row], Tone.Normal);
+        }
     }
 
     /// <summary>One line of plain text, for output that is not a terminal.</summary>

@@ -26,26 +26,30 @@ public sealed record DisplayUnits
     private static readonly DisplayUnit[] DistanceChoices =
         [new(QuantityKind.Length, "km", 1), new(QuantityKind.Length, "NM", 1)];
 
-    private DisplayUnits(string speed, string vertical, string height, string temperature, string distance)
+    private static readonly DisplayUnit[] PressureChoices =
+        [new(QuantityKind.Pressure, "hPa", 1), new(QuantityKind.Pressure, "inHg", 0.01)];
+
+    private DisplayUnits(string speed, string vertical, string height, string temperature, string distance, string pressure)
     {
         Speed = Pick(SpeedChoices, speed)!;
         Vertical = Pick(VerticalChoices, vertical)!;
         Height = Pick(HeightChoices, height)!;
         Temperature = Pick(TemperatureChoices, temperature)!;
         Distance = Pick(DistanceChoices, distance)!;
+        Pressure = Pick(PressureChoices, pressure)!;
     }
 
-    /// <summary>km/h, m/s, m, °C, km.</summary>
-    public static DisplayUnits Metric { get; } = new("km/h", "m/s", "m", "C", "km");
+    /// <summary>km/h, m/s, m, °C, km, hPa.</summary>
+    public static DisplayUnits Metric { get; } = new("km/h", "m/s", "m", "C", "km", "hPa");
 
-    /// <summary>kt, kt, ft, °C, NM.</summary>
-    public static DisplayUnits Aviation { get; } = new("kt", "kt", "ft", "C", "NM");
+    /// <summary>kt, kt, ft, °C, NM, hPa.</summary>
+    public static DisplayUnits Aviation { get; } = new("kt", "kt", "ft", "C", "NM", "hPa");
 
-    /// <summary>kt, kt, ft, °C, km.</summary>
-    public static DisplayUnits British { get; } = new("kt", "kt", "ft", "C", "km");
+    /// <summary>kt, kt, ft, °C, km, hPa.</summary>
+    public static DisplayUnits British { get; } = new("kt", "kt", "ft", "C", "km", "hPa");
 
-    /// <summary>kt, kt, ft, °F, NM.</summary>
-    public static DisplayUnits American { get; } = new("kt", "kt", "ft", "F", "NM");
+    /// <summary>kt, kt, ft, °F, NM, inHg.</summary>
+    public static DisplayUnits American { get; } = new("kt", "kt", "ft", "F", "NM", "inHg");
 
     /// <summary>Unit of airspeeds: km/h, kt or mph.</summary>
     public DisplayUnit Speed { get; private init; }
@@ -61,6 +65,9 @@ public sealed record DisplayUnits
 
     /// <summary>Unit of distances: km or NM.</summary>
     public DisplayUnit Distance { get; private init; }
+
+    /// <summary>Unit of altimeter settings: hPa or inHg.</summary>
+    public DisplayUnit Pressure { get; private init; }
 
     /// <summary>Finds a named set of units.</summary>
     /// <param name="word">metric, aviation, british or american; lower case.</param>
@@ -83,7 +90,7 @@ public sealed record DisplayUnits
     }
 
     /// <summary>Changes the unit of one quantity.</summary>
-    /// <param name="quantity">speed, vertical, height, temperature or distance.</param>
+    /// <param name="quantity">speed, vertical, height, temperature, distance or pressure.</param>
     /// <param name="symbol">A unit allowed for it, in its usual capitals.</param>
     /// <param name="units">These units with that one changed; these units unchanged when it cannot be done.</param>
     /// <param name="problem">What was expected and what was found, when it cannot be done.</param>
@@ -94,7 +101,7 @@ public sealed record DisplayUnits
         var choices = Choices(quantity);
         if (choices is null)
         {
-            problem = $"expected speed, vertical, height, temperature or distance, found '{quantity}'";
+            problem = $"expected speed, vertical, height, temperature, distance or pressure, found '{quantity}'";
             return false;
         }
 
@@ -110,7 +117,8 @@ public sealed record DisplayUnits
             "vertical" => this with { Vertical = unit },
             "height" => this with { Height = unit },
             "temperature" => this with { Temperature = unit },
-            _ => this with { Distance = unit },
+            "distance" => this with { Distance = unit },
+            _ => this with { Pressure = unit },
         };
         problem = null;
         return true;
@@ -123,6 +131,7 @@ public sealed record DisplayUnits
         "height" => HeightChoices,
         "temperature" => TemperatureChoices,
         "distance" => DistanceChoices,
+        "pressure" => PressureChoices,
         _ => null,
     };
 

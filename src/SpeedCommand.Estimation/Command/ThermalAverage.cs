@@ -11,14 +11,21 @@ public sealed class ThermalAverage(double stepS)
     private long _steps;
     private bool _wasCircling;
 
+    /// <summary>Average of the climb that ended with the last step, m/s, positive up; NaN when none did, or it is not known.</summary>
+    public double EndedMps { get; private set; } = double.NaN;
+
+    /// <summary>How long that climb lasted, s.</summary>
+    public double EndedS { get; private set; }
+
     /// <summary>Takes one step.</summary>
     /// <param name="isCircling">Whether the glider circles.</param>
     /// <param name="energy">The energy heights up to this step; a hole in them blanks the average but does not start it anew.</param>
-    /// <param name="noticedAfterS">How long before it was noticed the circling began, s; counts only where it begins.</param>
+    /// <param name="noticedAfterS">How long before it was noticed the circling began or ended, s; counts only where it does.</param>
     /// <returns>The average, m/s, positive up; NaN while there is none.</returns>
     public double Add(bool isCircling, EnergyHistory energy, double noticedAfterS)
     {
         ArgumentNullException.ThrowIfNull(energy);
+        EndedMps = double.NaN;
         if (isCircling && !_wasCircling)
         {
             _startM = energy.HeightAgoM(noticedAfterS);
@@ -27,6 +34,13 @@ public sealed class ThermalAverage(double stepS)
         else
         {
             _steps++;
+        }
+
+        if (_wasCircling && !isCircling)
+        {
+            // The glide that told of the end is no part of the climb.
+            EndedS = _steps * stepS - noticedAfterS;
+            EndedMps = EndedS >= LeastS ? (energy.HeightAgoM(noticedAfterS) - _startM) / EndedS : double.NaN;
         }
 
         _wasCircling = isCircling;

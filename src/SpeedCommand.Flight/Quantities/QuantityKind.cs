@@ -32,4 +32,10 @@ public enum QuantityKind
 
     /// <summary>Seconds out. Units: s, ms, min, h.</summary>
     Duration,
+
+    /// <summary>Kilograms of water out. Units: kg, l, lb; a litre is a kilogram (within 0.5 % below 30 °C).</summary>
+    Water,
+
+    /// <summary>Kilograms of water a second out. Units: kg/s, kg/min, l/s, l/min.</summary>
+    WaterFlow,
 }

@@ -46,6 +46,10 @@ internal static class QuantityUnits
     private static readonly QuantityUnit[] Duration =
         [new("s", 1), new("ms", 1, 1000), new("min", 60), new("h", 3600)];
 
+    private static readonly QuantityUnit[] Water = [new("kg", 1), new("l", 1), new("lb", 0.45359237)];
+
+    private static readonly QuantityUnit[] WaterFlow = [new("kg/s", 1), new("kg/min", 1, 60), new("l/s", 1), new("l/min", 1, 60)];
+
     public static QuantityUnit[] Of(QuantityKind kind) => kind switch
     {
         QuantityKind.Length => Length,
@@ -58,6 +62,8 @@ internal static class QuantityUnits
         QuantityKind.Area => Area,
         QuantityKind.Fraction => Fraction,
         QuantityKind.Duration => Duration,
+        QuantityKind.Water => Water,
+        QuantityKind.WaterFlow => WaterFlow,
         _ => throw new ArgumentOutOfRangeException(nameof(kind), kind, "no such kind of quantity"),
     };
 }

@@ -1,5 +1,6 @@
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
+using SpeedCommand.Pipeline.Controls;
 
 namespace SpeedCommand.Pipeline.Picture;
 
@@ -16,7 +17,9 @@ public readonly record struct CockpitPicture
     public static CockpitPicture Blank(long timeUs, Faults faults) => new()
     {
         TimeUs = timeUs,
+        Controls = ControlValues.Standard,
         PressureAltitudeM = Gauge.Blank,
+        AltitudeM = Gauge.Blank,
         DensityAltitudeM = Gauge.Blank,
         TemperatureK = Gauge.Blank,
         IndicatedAirspeedMps = Gauge.Blank,
@@ -47,6 +50,9 @@ public readonly record struct CockpitPicture
 
     /// <summary>Pressure altitude, m.</summary>
     public Gauge PressureAltitudeM { get; init; }
+
+    /// <summary>What an altimeter set to <see cref="ControlValues.QnhPa"/> shows, m; limits and the safety height do not follow it.</summary>
+    public Gauge AltitudeM { get; init; }
 
     /// <summary>Density altitude, m.</summary>
     public Gauge DensityAltitudeM { get; init; }
@@ -97,7 +103,14 @@ public readonly record struct CockpitPicture
     public LimitedBy LimitedBy { get; init; }
 
     /// <summary>The climb expected in the next thermal (MacCready setting), m/s.</summary>
-    public double ExpectedClimbMps { get; init; }
+    public double ExpectedClimbMps
+    {
+        get => Controls.ExpectedClimbMps;
+        init => Controls = Controls with { ExpectedClimbMps = value };
+    }
+
+    /// <summary>How every control of the pilot's stands.</summary>
+    public ControlValues Controls { get; init; }
 
     /// <summary>Time to the safety height at minimum sink in still air, s.</summary>
     public Gauge EnduranceS { get; init; }

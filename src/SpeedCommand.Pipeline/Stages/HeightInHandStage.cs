@@ -12,12 +12,11 @@ internal readonly record struct HeightInHandGauges(Gauge EnduranceS, Gauge Range
 }
 
 /// <summary>Air in, height in hand out. Without the wind, range is over the air.</summary>
-internal sealed class HeightInHandStage(FlightSettings settings, SpeedTargets targets)
+internal sealed class HeightInHandStage(FlightSettings settings, PilotStage pilot, SpeedTargets targets)
 {
     public HeightInHandGauges At(in Air air, double ageS)
     {
-        var loading = new Loading(settings.MassKg, 1, settings.BugsFraction);
-        return LiveHeight.TryEstimate(targets, air, loading, settings.SafetyHeightM, headwindMps: 0, out var height)
+        return LiveHeight.TryEstimate(targets, air, pilot.LoadingAt(1), settings.SafetyHeightM, headwindMps: 0, out var height)
             ? new HeightInHandGauges(new Gauge(height.EnduranceS, double.NaN, ageS), new Gauge(height.RangeM, double.NaN, ageS))
             : HeightInHandGauges.Blank;
     }

@@ -15,7 +15,7 @@ internal readonly record struct PhaseEvidence(bool IsLoadMeasured, double Steady
 /// The evidence must last, and the thresholds to enter and to leave lie apart, so that the display does not flicker. A phase
 /// the pilot insists on stays.
 /// </summary>
-internal sealed class PhaseStage(FlightPhase? forced)
+internal sealed class PhaseStage(FlightPhase? forcedAtStart)
 {
     /// <summary>A pull-up or a bend in the track is over sooner than this.</summary>
     public const long LastingUs = 6_000_000;
@@ -34,7 +34,21 @@ internal sealed class PhaseStage(FlightPhase? forced)
     private double _smoothClimbMps;
     private long _contraryUs;
 
-    public FlightPhase Phase { get; private set; } = forced ?? FlightPhase.Gliding;
+    public FlightPhase Phase { get; private set; } = forcedAtStart ?? FlightPhase.Gliding;
+
+    /// <summary>Whether the pilot insists on the phase.</summary>
+    public bool IsForced { get; private set; } = forcedAtStart is not null;
+
+    /// <summary>The pilot insists on a phase, from now on, or no longer on any.</summary>
+    public void Force(FlightPhase? forced)
+    {
+        IsForced = forced is not null;
+        if (forced is { } phase && phase != Phase)
+        {
+            Phase = phase;
+            _contraryUs = 0;
+        }
+    }
 
     /// <summary>Judges once a picture.</summary>
     public FlightPhase Judge(in PhaseEvidence evidence)
@@ -44,7 +58,7 @@ internal sealed class PhaseStage(FlightPhase? forced)
         var speedRatio = evidence.IndicatedMps / evidence.MinSinkMps;
         var contrary = Phase == FlightPhase.Gliding ? LooksLikeClimbing(evidence, speedRatio) : LooksLikeGliding(evidence, speedRatio);
         _contraryUs = contrary ? _contraryUs + PipelineBounds.PicturePeriodUs : 0;
-        if (forced is null && _contraryUs >= LastingUs)
+        if (!IsForced && _contraryUs >= LastingUs)
         {
             Phase = Phase == FlightPhase.Gliding ? FlightPhase.Climbing : FlightPhase.Gliding;
             _contraryUs = 0;

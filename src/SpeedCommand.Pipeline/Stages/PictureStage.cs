@@ -26,29 +26,32 @@ internal sealed class PictureStage
     private readonly ThermalAverage _thermal = new(PipelineBounds.PicturePeriodUs * 1e-6);
     private readonly TargetStage _targets;
     private readonly HeightInHandStage _heightInHand;
-    private readonly FlightSettings _settings;
+    private readonly PilotStage _pilot;
     private readonly AirDataStage _airData;
     private readonly LoadStage _load;
     private readonly IEnergyEstimator _energy;
     private readonly EventFaults _events;
 
-    public PictureStage(FlightSettings settings, AirDataStage airData, LoadStage load, IEnergyEstimator energy, EventFaults events)
+    public PictureStage(FlightSettings settings, PilotStage pilot, AirDataStage airData, LoadStage load, IEnergyEstimator energy, EventFaults events)
     {
-        _settings = settings;
+        _pilot = pilot;
         _airData = airData;
         _load = load;
         _energy = energy;
         _events = events;
         var targets = new SpeedTargets(settings.Glider, settings.StallMargin);
         _phase = new PhaseStage(settings.ForcedPhase);
-        _targets = new TargetStage(settings, targets);
-        _heightInHand = new HeightInHandStage(settings, targets);
+        _targets = new TargetStage(pilot, targets);
+        _heightInHand = new HeightInHandStage(settings, pilot, targets);
     }
+
+    /// <summary>The pilot insists on a phase, or no longer on any.</summary>
+    public void Force(FlightPhase? phase) => _phase.Force(phase);
 
     /// <summary>What is fresh decides what is computed; the rest stays blank.</summary>
     public CockpitPicture MakeAt(long nowUs)
     {
-        var blank = CockpitPicture.Blank(nowUs, Faults.None) with { ExpectedClimbMps = _settings.ExpectedClimbMps };
+        var blank = CockpitPicture.Blank(nowUs, Faults.None) with { Controls = _pilot.Values };
         var picture = _airData.IsStaticFresh(nowUs) ? WithAir(blank, nowUs) : blank;
         var estimate = _energy.EstimateAt(nowUs);
         picture = WithClimb(picture, estimate, nowUs);
@@ -66,7 +69,7 @@ internal sealed class PictureStage
         return picture with
         {
             Phase = phase,
-            ThermalAverageMps = ThermalAverage(phase, picture.ClimbMps.AgeS),
+            ThermalAverageMps = ThermalAverage(phase, picture.ClimbMps.AgeS, nowUs),
             HoldIndicatedMps = phase == FlightPhase.Climbing ? picture.MinSinkIndicatedMps : picture.SpeedToFlyIndicatedMps,
             Faults = FaultsAt(nowUs, picture),
         };
@@ -81,6 +84,7 @@ internal sealed class PictureStage
         return picture with
         {
             PressureAltitudeM = new Gauge(air.PressureAltitudeM, double.NaN, ageS),
+            AltitudeM = new Gauge(_pilot.AltitudeM(air.PressureAltitudeM), double.NaN, ageS),
             DensityAltitudeM = new Gauge(air.DensityAltitudeM, sunK * DensityAltitudeMPerK, ageS),
             TemperatureK = new Gauge(air.TemperatureK, sunK, temperatureAgeS),
             TemperatureSource = air.TemperatureSource,
@@ -184,10 +188,11 @@ internal sealed class PictureStage
     }
 
     /// <summary>The phase is noticed late; the thermal began when its evidence did, unless the pilot said so.</summary>
-    private Gauge ThermalAverage(FlightPhase phase, double ageS)
+    private Gauge ThermalAverage(FlightPhase phase, double ageS, long nowUs)
     {
-        var noticedAfterS = _settings.ForcedPhase is null ? PhaseStage.LastingUs * 1e-6 : 0;
+        var noticedAfterS = _phase.IsForced ? 0 : PhaseStage.LastingUs * 1e-6;
         var average = _thermal.Add(phase == FlightPhase.Climbing, _history, noticedAfterS);
+        _pilot.AddClimb(nowUs, _thermal.EndedMps, _thermal.EndedS);
         return double.IsNaN(average) ? Gauge.Blank : new Gauge(average, double.NaN, ageS);
     }
 

@@ -10,7 +10,7 @@ namespace SpeedCommand.Pipeline.Stages;
 /// Tells the estimator how the glider's own sink changes with speed and load, so that it need not find out from the climb. Changes
 /// only: an error of the polar that stays is left to the measurement.
 /// </summary>
-internal sealed class SinkStage(FlightSettings settings, LoadStage load, IEnergyEstimator energy)
+internal sealed class SinkStage(FlightSettings settings, PilotStage pilot, LoadStage load, IEnergyEstimator energy)
 {
     /// <summary>After a longer time without a sink the difference says nothing of a moment, microseconds.</summary>
     private const long MaxGapUs = 2_000_000;
@@ -20,12 +20,15 @@ internal sealed class SinkStage(FlightSettings settings, LoadStage load, IEnergy
     private bool _isMeasured;
     private long _timeUs = long.MinValue / 2;
 
+    /// <summary>What the pilot says of mass or bugs changes what is known of the sink, not the sink.</summary>
+    public void Forget() => _timeUs = long.MinValue / 2;
+
     /// <summary>Looks anew after a reading of airspeed or load.</summary>
     public void Follow(long nowUs, in Air air)
     {
         var airspeed = new TrueAirspeed(energy.EstimateAt(nowUs).TrueAirspeedMps);
         var factor = load.Present(nowUs, FlightPhase.Gliding).Factor;
-        if (!_targets.TrySink(airspeed, air, new Loading(settings.MassKg, Math.Max(0, factor), settings.BugsFraction), out var sinkMps))
+        if (!_targets.TrySink(airspeed, air, pilot.LoadingAt(Math.Max(0, factor)), out var sinkMps))
         {
             return;
         }

@@ -24,7 +24,7 @@ internal readonly record struct TargetInputs(Air Air, double SteadyLoad, Gauge N
 internal readonly record struct Targets(Gauge MinSink, Gauge BestGlide, Gauge SpeedToFly, LimitedBy LimitedBy, double CirclingSinkMps);
 
 /// <summary>Air, load and netto in, speeds to fly out.</summary>
-internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
+internal sealed class TargetStage(PilotStage pilot, SpeedTargets targets)
 {
     private readonly SmoothNetto _smoothNetto = new();
 
@@ -33,10 +33,8 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
 
     private long _settledUs = long.MaxValue;
 
-    public Loading LoadingAt(double loadFactor) => new(settings.MassKg, loadFactor, settings.BugsFraction);
-
     public bool TrySink(TrueAirspeed airspeed, in Air air, double loadFactor, out double sinkMps) =>
-        targets.TrySink(airspeed, air, LoadingAt(loadFactor), out sinkMps);
+        targets.TrySink(airspeed, air, pilot.LoadingAt(loadFactor), out sinkMps);
 
     /// <summary>Forgets the air flown through, as after a silence.</summary>
     public void Reset()
@@ -52,14 +50,14 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
     /// <summary>Computes once a picture.</summary>
     public Targets At(in TargetInputs inputs)
     {
-        var straight = LoadingAt(1);
-        var minSink = targets.MinSink(inputs.Air, LoadingAt(inputs.SteadyLoad));
+        var straight = pilot.LoadingAt(1);
+        var minSink = targets.MinSink(inputs.Air, pilot.LoadingAt(inputs.SteadyLoad));
         var bestGlide = targets.BestGlide(inputs.Air, straight, headwindMps: 0, airMps: 0);
         _settledUs = Math.Min(_settledUs, inputs.TimeUs + PipelineBounds.SettlingUs);
         var netto = inputs.IsOutsidePolar ? 0 : Smooth(inputs.TimeUs, inputs.Netto);
         var speedToFly = double.IsNaN(netto) || !(inputs.Netto.IsKnown || inputs.IsOutsidePolar)
             ? default
-            : targets.SpeedToFly(inputs.Air, straight, settings.ExpectedClimbMps, netto);
+            : targets.SpeedToFly(inputs.Air, straight, pilot.ExpectedClimbMps, netto);
         var sigma = inputs.IsOutsidePolar ? double.NaN : DoubtOf(speedToFly, inputs.Air, netto);
         if (speedToFly.Speed.IsKnown && minSink.IsKnown && speedToFly.Speed.IndicatedAirspeedMps < minSink.IndicatedAirspeedMps)
         {
@@ -67,7 +65,7 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
             speedToFly = speedToFly with { Speed = minSink };
         }
 
-        var circle = targets.MinSink(inputs.Air, LoadingAt(LoadStage.ThermallingLoad));
+        var circle = targets.MinSink(inputs.Air, pilot.LoadingAt(LoadStage.ThermallingLoad));
         return new Targets(
             Show(minSink, 0, inputs.AgeS),
             Show(bestGlide.Speed, 0, inputs.AgeS),
@@ -100,7 +98,7 @@ internal sealed class TargetStage(FlightSettings settings, SpeedTargets targets)
     }
 
     private double Apart(in SpeedToFlyTarget speedToFly, in Air air, double netto) => Math.Abs(
-        targets.SpeedToFly(air, LoadingAt(1), settings.ExpectedClimbMps, netto).Speed.IndicatedAirspeedMps - speedToFly.Speed.IndicatedAirspeedMps);
+        targets.SpeedToFly(air, pilot.LoadingAt(1), pilot.ExpectedClimbMps, netto).Speed.IndicatedAirspeedMps - speedToFly.Speed.IndicatedAirspeedMps);
 
     private static Gauge Show(in TargetSpeed speed, double sigma, double ageS) =>
         speed.IsKnown ? new Gauge(speed.IndicatedAirspeedMps, sigma, ageS) : Gauge.Blank;

@@ -38,6 +38,12 @@ internal static class FlightLogFormat
 
     public static ReadOnlySpan<byte> GliderLine => "#glider-line "u8;
 
+    /// <summary>
+    /// A change of a control: in a header, and as a record in a stream's place. No stream's name begins so, and older programs, which
+    /// know none of this, report such a record and replay the rest.
+    /// </summary>
+    public static ReadOnlySpan<byte> Control => "#control "u8;
+
     public static ReadOnlySpan<byte> End => "#end "u8;
 
     public static ReadOnlySpan<byte> Truth => "truth"u8;

@@ -14,6 +14,9 @@ public sealed record FlightLogHeader(DateTimeOffset StartUtc, string GliderFile,
     /// <summary>Microseconds since the start at which this log begins; more than 0 when others came before it.</summary>
     public long FromUs { get; init; }
 
+    /// <summary>How the controls stood that somebody had changed by then, one entry a control.</summary>
+    public IReadOnlyList<StampedControl> Controls { get; init; } = [];
+
     /// <summary>The settings and the glider that were flown with.</summary>
     public FlownSettings Flown { get; init; } = FlownSettings.None;
 }

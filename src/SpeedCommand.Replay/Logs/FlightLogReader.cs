@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using SpeedCommand.Pipeline.Controls;
 
 namespace SpeedCommand.Replay.Logs;
 
@@ -136,6 +137,11 @@ public sealed class FlightLogReader : IDisposable
             return false;
         }
 
+        if (line[(stampEnd + 1)..].StartsWith(FlightLogFormat.Control))
+        {
+            return TryReadControl(timeUs, line[(stampEnd + 1 + FlightLogFormat.Control.Length)..], out record);
+        }
+
         var name = line.Slice(stampEnd + 1, nameLength);
         var content = line[(stampEnd + nameLength + 2)..];
         if (name.SequenceEqual(FlightLogFormat.Truth))
@@ -163,6 +169,19 @@ public sealed class FlightLogReader : IDisposable
         }
 
         record = new LogRecord(LogRecordKind.Line, timeUs, name, _content.AsSpan(0, length));
+        return true;
+    }
+
+    private bool TryReadControl(long timeUs, ReadOnlySpan<byte> text, out LogRecord record)
+    {
+        record = default;
+        if (!ControlText.TryReadChange(Encoding.UTF8.GetString(text), out var change, out var problem))
+        {
+            Report(problem);
+            return false;
+        }
+
+        record = new LogRecord(timeUs, change);
         return true;
     }
 

@@ -1,4 +1,6 @@
 using System.Buffers.Text;
+using System.Text;
+using SpeedCommand.Pipeline.Controls;
 
 namespace SpeedCommand.Replay.Logs;
 
@@ -44,6 +46,21 @@ public sealed class FlightLogWriter : IDisposable
             at = Escape(value, at);
         }
 
+        _record[at++] = (byte)'\n';
+        Write(_record.AsSpan(0, at));
+    }
+
+    /// <summary>Writes a change of a control.</summary>
+    /// <param name="timeUs">Its stamp, microseconds since the start; not before the record ahead of it.</param>
+    /// <param name="change">The change.</param>
+    /// <exception cref="IOException">The stream cannot be written.</exception>
+    public void WriteControl(long timeUs, in ControlChange change)
+    {
+        var at = WriteStamp(timeUs);
+        _record[at++] = (byte)' ';
+        FlightLogFormat.Control.CopyTo(_record.AsSpan(at));
+        at += FlightLogFormat.Control.Length;
+        at += Encoding.ASCII.GetBytes(ControlText.Write(change), _record.AsSpan(at));
         _record[at++] = (byte)'\n';
         Write(_record.AsSpan(0, at));
     }

@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Replay.Settings;
 
 namespace SpeedCommand.Replay.Logs;
@@ -8,6 +9,7 @@ namespace SpeedCommand.Replay.Logs;
 internal sealed class LogHeaderLines
 {
     private readonly List<KeyValuePair<string, string>> _values = [];
+    private readonly List<StampedControl> _controls = [];
     private readonly StringBuilder _gliderText = new();
     private FlightLogHeader _header = new(default, "", []);
 
@@ -34,6 +36,10 @@ internal sealed class LogHeaderLines
         {
             problem = TakeFrom(line[FlightLogFormat.From.Length..]);
         }
+        else if (line.StartsWith(FlightLogFormat.Control))
+        {
+            problem = TakeControl(line[FlightLogFormat.Control.Length..]);
+        }
         else if (TextAfter(FlightLogFormat.Setting, line) is { } setting)
         {
             problem = TakeSetting(setting);
@@ -52,7 +58,7 @@ internal sealed class LogHeaderLines
 
     /// <summary>The header, with the notes found in the log.</summary>
     public FlightLogHeader With(IReadOnlyList<string> notes) =>
-        _header with { Notes = notes, Flown = new FlownSettings(_values, _gliderText.ToString()) };
+        _header with { Notes = notes, Controls = _controls, Flown = new FlownSettings(_values, _gliderText.ToString()) };
 
     private static string? TextAfter(ReadOnlySpan<byte> mark, ReadOnlySpan<byte> line) =>
         line.StartsWith(mark) ? Encoding.UTF8.GetString(line[mark.Length..]) : null;
@@ -76,6 +82,23 @@ internal sealed class LogHeaderLines
         }
 
         _header = _header with { FromUs = fromUs };
+        return null;
+    }
+
+    private string? TakeControl(ReadOnlySpan<byte> text)
+    {
+        var stampEnd = text.IndexOf((byte)' ');
+        if (stampEnd < 0 || !LogStamp.TryParse(text[..stampEnd], out var timeUs))
+        {
+            return $"expected '#control SECONDS NAME VALUE', found '#control {FlightLogFormat.Show(text)}'";
+        }
+
+        if (!ControlText.TryReadChange(Encoding.UTF8.GetString(text[(stampEnd + 1)..]), out var change, out var problem))
+        {
+            return problem;
+        }
+
+        _controls.Add(new StampedControl(timeUs, change));
         return null;
     }
 

@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text;
+using SpeedCommand.Pipeline.Controls;
 
 namespace SpeedCommand.Replay.Logs;
 
@@ -38,6 +39,11 @@ internal static class LogHeaderText
             {
                 text.Append("#glider-line ").Append(line).Append('\n');
             }
+        }
+
+        foreach (var (timeUs, change) in header.Controls)
+        {
+            text.Append(CultureInfo.InvariantCulture, $"#control {timeUs / 1_000_000}.{timeUs % 1_000_000:D6} {ControlText.Write(change)}\n");
         }
 
         return Encoding.UTF8.GetBytes(text.ToString());

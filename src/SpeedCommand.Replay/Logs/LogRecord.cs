@@ -1,3 +1,5 @@
+using SpeedCommand.Pipeline.Controls;
+
 namespace SpeedCommand.Replay.Logs;
 
 /// <summary>One record of a flight log; valid until the next one is read.</summary>
@@ -11,16 +13,26 @@ public readonly ref struct LogRecord
         Content = content;
     }
 
-    /// <summary>Line, truth or end.</summary>
+    internal LogRecord(long timeUs, ControlChange change)
+    {
+        Kind = LogRecordKind.Control;
+        TimeUs = timeUs;
+        Change = change;
+    }
+
+    /// <summary>Line, control, truth or end.</summary>
     public LogRecordKind Kind { get; }
 
     /// <summary>Microseconds since the start of the log.</summary>
     public long TimeUs { get; }
 
-    /// <summary>Name of the stream; empty for the end record.</summary>
+    /// <summary>The change of a control, when that is what the record is.</summary>
+    public ControlChange Change { get; }
+
+    /// <summary>Name of the stream; empty but for lines and truth.</summary>
     public ReadOnlySpan<byte> StreamName { get; }
 
-    /// <summary>The line as it was received, or the truth's JSON; empty for the end record.</summary>
+    /// <summary>The line as it was received, or the truth's JSON; empty but for those.</summary>
     public ReadOnlySpan<byte> Content { get; }
 }
 
@@ -29,6 +41,9 @@ public enum LogRecordKind
 {
     /// <summary>A line that came in on a stream.</summary>
     Line,
+
+    /// <summary>The pilot changed a control.</summary>
+    Control,
 
     /// <summary>The simulator's truth; never shown to a pipeline.</summary>
     Truth,

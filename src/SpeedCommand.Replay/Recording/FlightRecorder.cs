@@ -1,3 +1,4 @@
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 
@@ -67,19 +68,38 @@ public sealed class FlightRecorder : IPictureSink, IDisposable
     {
         lock (_gate)
         {
-            if (!_isOpen && !TryBegin(timeUs))
+            if (IsReady(timeUs))
             {
-                return;
+                _pending.Writer.WriteLine(timeUs, streamName, line);
+                _pending.LastUs = _lastUs = timeUs;
+            }
+        }
+    }
+
+    /// <summary>Records a change of a control, and keeps it for the headers of the files to come.</summary>
+    /// <param name="timeUs">The stamp the pipeline got.</param>
+    /// <param name="change">The change.</param>
+    public void RecordControl(long timeUs, in ControlChange change)
+    {
+        lock (_gate)
+        {
+            if (IsReady(timeUs))
+            {
+                _pending.Writer.WriteControl(timeUs, change);
+                _pending.LastUs = _lastUs = timeUs;
             }
 
-            if (_pending.Free < MinFreeBytes)
-            {
-                Stop("the disk did not keep up");
-                return;
-            }
+            KeepControl(timeUs, change);
+        }
+    }
 
-            _pending.Writer.WriteLine(timeUs, streamName, line);
-            _pending.LastUs = _lastUs = timeUs;
+    /// <summary>Tells how a control stands before the flight: for the headers only.</summary>
+    /// <param name="change">The control.</param>
+    public void BeginControl(in ControlChange change)
+    {
+        lock (_gate)
+        {
+            KeepControl(0, change);
         }
     }
 
@@ -114,6 +134,7 @@ public sealed class FlightRecorder : IPictureSink, IDisposable
         lock (_gate)
         {
             (_pending, _draining) = (_draining, _pending);
+            _pending.Controls = _draining.Controls;
         }
 
         var isBegun = _draining.Marks.Any(mark => mark.IsBegin);
@@ -156,6 +177,26 @@ public sealed class FlightRecorder : IPictureSink, IDisposable
             return fault.Message;
         }
     }
+
+    private bool IsReady(long timeUs)
+    {
+        if (!_isOpen && !TryBegin(timeUs))
+        {
+            return false;
+        }
+
+        if (_pending.Free < MinFreeBytes)
+        {
+            Stop("the disk did not keep up");
+            return false;
+        }
+
+        return true;
+    }
+
+    /// <summary>The list is new each time: files that begin earlier keep the one of their time.</summary>
+    private void KeepControl(long timeUs, ControlChange change) => _pending.Controls =
+        [.. _pending.Controls.Where(one => one.Change.Control != change.Control), new StampedControl(timeUs, change)];
 
     /// <summary>The very first file begins with the pipeline's own time, so that its replay gives all the pictures there were.</summary>
     private bool TryBegin(long timeUs)

@@ -16,7 +16,7 @@ internal sealed class PendingRecords : Stream
     }
 
     /// <summary>A file begins or ends before the byte at <paramref name="At"/>.</summary>
-    public readonly record struct FileMark(int At, bool IsBegin, long TimeUs);
+    public readonly record struct FileMark(int At, bool IsBegin, long TimeUs, IReadOnlyList<StampedControl> Controls);
 
     /// <summary>Writes records here.</summary>
     public FlightLogWriter Writer { get; }
@@ -25,6 +25,9 @@ internal sealed class PendingRecords : Stream
 
     /// <summary>Stamp of the newest record.</summary>
     public long LastUs { get; set; }
+
+    /// <summary>How the controls stand after the newest record.</summary>
+    public IReadOnlyList<StampedControl> Controls { get; set; } = [];
 
     public ReadOnlySpan<byte> Bytes => _bytes.AsSpan(0, _length);
 
@@ -44,7 +47,7 @@ internal sealed class PendingRecords : Stream
         set => throw new NotSupportedException();
     }
 
-    public void Mark(bool isBegin, long timeUs) => _marks.Add(new FileMark(_length, isBegin, timeUs));
+    public void Mark(bool isBegin, long timeUs) => _marks.Add(new FileMark(_length, isBegin, timeUs, Controls));
 
     public void Clear()
     {

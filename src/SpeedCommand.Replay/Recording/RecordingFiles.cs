@@ -28,7 +28,7 @@ internal sealed class RecordingFiles(RecorderOptions options, FlightLogHeader he
             if (mark.IsBegin)
             {
                 _number = 0;
-                Open(mark.TimeUs);
+                Open(mark.TimeUs, mark.Controls);
             }
         }
 
@@ -43,7 +43,7 @@ internal sealed class RecordingFiles(RecorderOptions options, FlightLogHeader he
         folder.MakeRoom(_part.Length, _part.Path);
         if (_part.Length > options.MaxFileBytes)
         {
-            GoOnInNewFile(records.LastUs);
+            GoOnInNewFile(records.LastUs, records.Controls);
         }
     }
 
@@ -57,14 +57,14 @@ internal sealed class RecordingFiles(RecorderOptions options, FlightLogHeader he
     public void Dispose() => Abandon();
 
     /// <summary>One file ends with the last record it holds, the next begins there: no picture is made by both.</summary>
-    private void GoOnInNewFile(long timeUs)
+    private void GoOnInNewFile(long timeUs, IReadOnlyList<StampedControl> controls)
     {
         _part!.WriteEnd(timeUs);
         Close();
-        Open(timeUs);
+        Open(timeUs, controls);
     }
 
-    private void Open(long fromUs)
+    private void Open(long fromUs, IReadOnlyList<StampedControl> controls)
     {
         var disk = folder.Create(header.StartUtc + TimeSpan.FromMicroseconds(fromUs), out var path);
         _part = new LogPart(disk, path, options.IsPacked);
@@ -76,7 +76,7 @@ internal sealed class RecordingFiles(RecorderOptions options, FlightLogHeader he
         }
 
         string[] note = _number > 1 ? [$"part {_number} of the flight that begins in {_firstName}"] : [];
-        _part.WriteHeader(header with { FromUs = fromUs, Notes = [.. header.Notes, .. note] });
+        _part.WriteHeader(header with { FromUs = fromUs, Controls = controls, Notes = [.. header.Notes, .. note] });
     }
 
     private void Close()

@@ -27,6 +27,10 @@ public sealed class FlightReplay : IReplay
         _pipeline = pipeline;
         _streams = streams;
         pipeline.BeginAt(log.Header.FromUs);
+        foreach (var (timeUs, change) in log.Header.Controls)
+        {
+            pipeline.Accept(Math.Min(timeUs, log.Header.FromUs), change);
+        }
     }
 
     /// <inheritdoc/>
@@ -49,6 +53,9 @@ public sealed class FlightReplay : IReplay
             case LogRecordKind.Line when StreamOf(record.StreamName) is var stream and >= 0:
                 LineCount++;
                 _pipeline.Accept(record.TimeUs, stream, record.Content);
+                break;
+            case LogRecordKind.Control:
+                _pipeline.Accept(record.TimeUs, record.Change);
                 break;
             case LogRecordKind.Line or LogRecordKind.End:
                 _pipeline.AdvanceTo(record.TimeUs);

@@ -46,6 +46,7 @@ public static class FlightSettingsReader
         return glider is null ? null : new FlightSettings(glider)
         {
             MassKg = massKg + ballastKg,
+            BallastKg = ballastKg,
             BugsFraction = bugs,
             ExpectedClimbMps = expectedClimb,
             StallMargin = stallMargin,

@@ -15,7 +15,7 @@ public sealed record FlownSettings(IReadOnlyList<KeyValuePair<string, string>> V
     public const int MaxLineLength = 2048;
 
     /// <summary>What only displays, the recorder and the service itself depend on.</summary>
-    private static readonly string[] OtherParts = ["displays", "units", "serial", "recorder", "logFile", "glider"];
+    private static readonly string[] OtherParts = ["displays", "units", "serial", "recorder", "logFile", "glider", "controls"];
 
     /// <summary>How a port is reached; what is said on it matters to the pipeline.</summary>
     private static readonly string[] OtherPortParts = ["name", "device", "framing"];

@@ -18,6 +18,8 @@ internal static class QuantityWords
             QuantityKind.Angle => "deg",
             QuantityKind.Area => "m2",
             QuantityKind.Fraction => "%",
+            QuantityKind.Water => "kg",
+            QuantityKind.WaterFlow => "kg/s",
             _ => "s",
         };
         return string.Create(CultureInfo.InvariantCulture, $"{Quantity.FromSi(si, kind, unit):G6} {unit}");

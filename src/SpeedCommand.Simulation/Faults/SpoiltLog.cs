@@ -41,6 +41,10 @@ public static class SpoiltLog
                 case LogRecordKind.Line:
                     spoiler.OnLine(record.TimeUs, record.StreamName, record.Content);
                     break;
+                case LogRecordKind.Control:
+                    spoiler.AdvanceTo(record.TimeUs);
+                    output.WriteControl(Held(spoiler.StampOf(record.TimeUs)), record.Change);
+                    break;
                 case LogRecordKind.Truth:
                     spoiler.AdvanceTo(record.TimeUs);
                     output.WriteTruth(Held(spoiler.StampOf(record.TimeUs)), record.Content);

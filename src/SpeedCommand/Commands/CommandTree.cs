@@ -9,6 +9,7 @@ internal static class CommandTree
     {
         RunCommand.Create(),
         CheckCommand.Create(),
+        SetCommand.Create(),
         ReplayCommand.Create(),
         TargetsCommand.Create(),
         DescentCommand.Create(),

@@ -61,7 +61,7 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time, ILo
             else if (shownAt is not null)
             {
                 // The pipeline makes pictures even when every port is silent; if it does not, nothing on the display is true.
-                shown = CockpitPicture.Blank(shown.TimeUs, Silence);
+                shown = CockpitPicture.Blank(shown.TimeUs, Silence) with { Controls = shown.Controls };
                 await ShowAsync(shown, stop).ConfigureAwait(false);
             }
         }

@@ -1,6 +1,8 @@
+using System.Diagnostics.CodeAnalysis;
 using System.Text;
 using SpeedCommand.Displaying;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Recording;
 
@@ -31,6 +33,18 @@ internal sealed class CockpitMachine : IDisposable
     /// <summary>When each fault of the pipeline came and went; exact once the readers have stopped.</summary>
     public IEnumerable<FaultSpan> FaultSpans => _pipeline.FaultHistory.Spans;
 
+    /// <summary>How the pilot's controls stand now.</summary>
+    public ControlValues Controls
+    {
+        get
+        {
+            lock (_gate)
+            {
+                return _pipeline.Controls;
+            }
+        }
+    }
+
     public FlightRecorder? Recorder => _recorder;
 
     public int AddStream(string name, StreamSettings settings)
@@ -50,6 +64,35 @@ internal sealed class CockpitMachine : IDisposable
             var stampUs = Math.Max(arrivalUs, _pipeline.TimeUs);
             _recorder?.Record(stampUs, _streamNames[stream], line);
             _pipeline.Accept(stampUs, stream, line);
+        }
+    }
+
+    /// <summary>Tells how a control stands before the flight; call before the first line.</summary>
+    public void Begin(in ControlChange change)
+    {
+        lock (_gate)
+        {
+            _recorder?.BeginControl(change);
+            _pipeline.Accept(0, change);
+        }
+    }
+
+    /// <summary>Changes a control from how it stands at this moment. Stamped, recorded and taken as a line is, in one order with them.</summary>
+    /// <returns>False with what was expected and what was found, when this cockpit cannot do it.</returns>
+    public bool TryChange(in ControlRequest request, ControlRules rules, out ControlChange change, [NotNullWhen(false)] out string? problem)
+    {
+        lock (_gate)
+        {
+            // What a step or the end of a dump comes to depends on the moment: first the moment, then the step.
+            _pipeline.AdvanceTo(_clock.NowUs);
+            if (!ControlResolver.TryResolve(request, _pipeline.Controls, rules, out change, out problem))
+            {
+                return false;
+            }
+
+            _recorder?.RecordControl(_pipeline.TimeUs, change);
+            _pipeline.Accept(_pipeline.TimeUs, change);
+            return true;
         }
     }
 

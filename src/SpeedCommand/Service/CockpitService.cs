@@ -4,6 +4,7 @@ using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
 using NLog.Extensions.Logging;
 using SpeedCommand.Bench;
+using SpeedCommand.Controls;
 using SpeedCommand.Displaying;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports;
@@ -66,7 +67,7 @@ internal static class CockpitService
         var clock = new CockpitClock(TimeProvider.System, pace);
         var ports = (flight is null ? settings.Ports : PortsOf(flight, settings)).ToArray();
         var sensors = flight is null ? settings.IioDevices : [];
-        PortState[] states = [.. ports.Select(port => new PortState(port.Name)), .. sensors.Select(sensor => new PortState(sensor.Name))];
+        PortState[] states = [.. ports.Select(port => new PortState(port.Name)), .. sensors.Select(sensor => new PortState(sensor.Name)), .. ControlService.States(settings, flight)];
         var latest = new LatestPicture(states);
         builder.Services
             .AddSingleton(TimeProvider.System)
@@ -74,6 +75,7 @@ internal static class CockpitService
             .AddSingleton(clock)
             .AddSingleton(latest)
             .AddSingleton(_ => new CockpitMachine(settings.Flight, clock, MakeRecorder(settings, flight, clock), [latest, .. extraSinks]));
+        ControlService.Add(builder.Services, settings, flight, states);
         AddPorts(builder.Services, settings, ports, sensors, states);
         builder.Services.AddHostedService<PictureTicker>();
         builder.Services.AddHostedService<RecordingService>();

@@ -29,6 +29,9 @@ internal sealed record CockpitSettings(
     /// <summary>How serial lines are found and read.</summary>
     public SerialSettings Serial { get; init; } = SerialSettings.Standard;
 
+    /// <summary>How the pilot's controls are reached; default not at all.</summary>
+    public ControlSettings Controls { get; init; } = ControlSettings.None;
+
     /// <summary>Sensors that the kernel reads; default none.</summary>
     public IReadOnlyList<IioSettings> IioDevices { get; init; } = [];
 

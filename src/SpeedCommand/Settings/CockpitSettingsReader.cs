@@ -11,7 +11,7 @@ internal static class CockpitSettingsReader
 {
     private static readonly string[] OnOff = ["on", "off"];
     private static readonly string[] ReaderWords = ["portable", "poll"];
-    private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance"];
+    private static readonly string[] UnitQuantities = ["speed", "vertical", "height", "temperature", "distance", "pressure"];
 
     /// <summary>Reads everything; null when a fault makes the service impossible.</summary>
     public static CockpitSettings? Read(SettingsSource source, string? gliderOption, string? gliderFallback, bool needsPorts)
@@ -24,6 +24,8 @@ internal static class CockpitSettingsReader
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
         var serialText = ReadSerialText(source, ports);
         var serial = ReadSerial(source);
+        var controls = ControlSettingsReader.Read(source, ReadFraming(source, "controls.framing"), device =>
+            ports.FirstOrDefault(port => port.Device == device) is { } port ? $"port '{port.Name}'" : serialText?.Device == device ? "the character display" : null);
         var recorder = RecorderSettingsReader.Read(source);
         var logFile = source.Text("logFile")?.Text ?? "";
         var flownStreams = FlownStreams.Read(source);
@@ -38,6 +40,7 @@ internal static class CockpitSettingsReader
         return new CockpitSettings(flight, Path.GetFileName(glider), ports, units, terminal, serialText, recorder, logFile)
         {
             Serial = serial,
+            Controls = controls,
             IioDevices = iioDevices,
             Flown = FlownSettings.Of(source, named is null && source.Recorded.GliderText.Length > 0 ? "" : glider),
             FlownStreams = flownStreams,

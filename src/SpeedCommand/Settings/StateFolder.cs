@@ -9,6 +9,12 @@ internal static class StateFolder
     /// <summary>The service's own log, when the terminal is taken by the panel.</summary>
     public static string LogFile => Path.Combine(Root, "speedcommand.log");
 
+    /// <summary>The controls, kept over a restart.</summary>
+    public static string Controls => Path.Combine(Root, "controls.state");
+
+    /// <summary>The socket that "speedcommand set" speaks to.</summary>
+    public static string Socket => Path.Combine(Root, "control.sock");
+
     /// <summary>Where a settings file is looked for when none is named, in order.</summary>
     public static IReadOnlyList<string> SettingsFiles =>
         [Path.Combine(BaseFolder("XDG_CONFIG_HOME", ".config"), "speedcommand", "settings.json"), "/etc/speedcommand/settings.json"];

@@ -21,6 +21,8 @@ public class DisplayUnitsTests
         [("temperature", "F")] = k => Temperature.FromKelvins(k).DegreesFahrenheit,
         [("distance", "km")] = m => Length.FromMeters(m).Kilometers,
         [("distance", "NM")] = m => Length.FromMeters(m).NauticalMiles,
+        [("pressure", "hPa")] = pa => Pressure.FromPascals(pa).Hectopascals,
+        [("pressure", "inHg")] = pa => pa / 3386.389, // conventional (ISO 80000-4); UnitsNet's has a few digits more
     };
 
     public static TheoryData<string, string> Choices
@@ -63,17 +65,17 @@ public class DisplayUnitsTests
     }
 
     [Theory]
-    [InlineData("metric", "km/h m/s m C km")]
-    [InlineData("aviation", "kt kt ft C NM")]
-    [InlineData("british", "kt kt ft C km")]
-    [InlineData("american", "kt kt ft F NM")]
+    [InlineData("metric", "km/h m/s m C km hPa")]
+    [InlineData("aviation", "kt kt ft C NM hPa")]
+    [InlineData("british", "kt kt ft C km hPa")]
+    [InlineData("american", "kt kt ft F NM inHg")]
     public void TryFromSet_NamedSet_HasTheUnitsDocumented(string word, string symbols)
     {
         Assert.True(DisplayUnits.TryFromSet(word, out var units, out var problem));
 
         Assert.Null(problem);
         Assert.Equal(symbols, $"{units.Speed.Symbol} {units.Vertical.Symbol} {units.Height.Symbol} "
-            + $"{units.Temperature.Symbol} {units.Distance.Symbol}");
+            + $"{units.Temperature.Symbol} {units.Distance.Symbol} {units.Pressure.Symbol}");
     }
 
     [Theory]
@@ -94,7 +96,8 @@ public class DisplayUnitsTests
     [InlineData("height", "FT", "expected m or ft, found 'FT'")]
     [InlineData("temperature", "K", "expected C or F, found 'K'")]
     [InlineData("distance", "", "expected km or NM, found ''")]
-    [InlineData("mass", "kg", "expected speed, vertical, height, temperature or distance, found 'mass'")]
+    [InlineData("pressure", "mbar", "expected hPa or inHg, found 'mbar'")]
+    [InlineData("mass", "kg", "expected speed, vertical, height, temperature, distance or pressure, found 'mass'")]
     public void TryWith_WrongWord_ChangesNothingAndSaysWhatWasExpected(string quantity, string symbol, string expected)
     {
         Assert.False(DisplayUnits.Metric.TryWith(quantity, symbol, out var units, out var problem));
@@ -108,8 +111,8 @@ public class DisplayUnitsTests
     {
         Assert.True(DisplayUnits.Metric.TryWith("height", "ft", out var units, out _));
 
-        Assert.Equal("km/h m/s ft C km", $"{units.Speed.Symbol} {units.Vertical.Symbol} {units.Height.Symbol} "
-            + $"{units.Temperature.Symbol} {units.Distance.Symbol}");
+        Assert.Equal("km/h m/s ft C km hPa", $"{units.Speed.Symbol} {units.Vertical.Symbol} {units.Height.Symbol} "
+            + $"{units.Temperature.Symbol} {units.Distance.Symbol} {units.Pressure.Symbol}");
     }
 
     private static DisplayUnit Unit(string quantity, string symbol)
@@ -121,7 +124,8 @@ public class DisplayUnitsTests
             "vertical" => units.Vertical,
             "height" => units.Height,
             "temperature" => units.Temperature,
-            _ => units.Distance,
+            "distance" => units.Distance,
+            _ => units.Pressure,
         };
     }
 }

@@ -48,6 +48,13 @@ public sealed class QuantityTests
         (QuantityKind.Duration, "ms", v => Duration.From(v, DurationUnit.Millisecond).Seconds),
         (QuantityKind.Duration, "min", v => Duration.From(v, DurationUnit.Minute).Seconds),
         (QuantityKind.Duration, "h", v => Duration.From(v, DurationUnit.Hour).Seconds),
+        (QuantityKind.Water, "kg", v => Mass.From(v, MassUnit.Kilogram).Kilograms),
+        (QuantityKind.Water, "l", v => Volume.From(v, VolumeUnit.Liter).CubicDecimeters),
+        (QuantityKind.Water, "lb", v => Mass.From(v, MassUnit.Pound).Kilograms),
+        (QuantityKind.WaterFlow, "kg/s", v => MassFlow.From(v, MassFlowUnit.KilogramPerSecond).KilogramsPerSecond),
+        (QuantityKind.WaterFlow, "kg/min", v => MassFlow.From(v, MassFlowUnit.KilogramPerMinute).KilogramsPerSecond),
+        (QuantityKind.WaterFlow, "l/s", v => VolumeFlow.From(v, VolumeFlowUnit.LiterPerSecond).LitersPerSecond),
+        (QuantityKind.WaterFlow, "l/min", v => VolumeFlow.From(v, VolumeFlowUnit.LiterPerMinute).LitersPerSecond),
     ];
 
     [Fact] // outside reference: UnitsNet 5.75.1; its foot of mercury has a few digits more, hence 1e-6

@@ -1,6 +1,7 @@
 using System.Text;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Hosting;
+using SpeedCommand.Controls;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Sentences;
@@ -21,7 +22,8 @@ internal sealed class LiveCockpit : IAsyncDisposable
     private readonly Thread _feeder;
     private bool _isStopped;
 
-    public LiveCockpit(string reader, SerialTextSettings? display = null, string? staticDevice = null)
+    public LiveCockpit(string reader, SerialTextSettings? display = null, string? staticDevice = null, Func<string, ControlSettings>? controls = null,
+        params IPictureSink[] sinks)
     {
         Static = new LiveBoard("static", _folder.FullName, i => TestFlightLog.Sentence($"P,{90_000 + i % 3:F1},P,STATIC"));
         Pitot = new LiveBoard("pitot", _folder.FullName, i => TestFlightLog.Sentence($"P,{600 + i % 2:F1},P,IMPACT"));
@@ -29,10 +31,18 @@ internal sealed class LiveCockpit : IAsyncDisposable
             new PortSettings("static", staticDevice ?? Static.Path, 115_200, ChecksumRule.Required),
             new PortSettings("pitot", Pitot.Path, 115_200, ChecksumRule.Required));
         settings = settings with { Serial = new SerialSettings(Enum.Parse<PortReaderKind>(reader), _folder.FullName) };
-        _host = CockpitService.Build(settings, null, 1, Pictures);
+        Settings = settings = settings with { Controls = controls?.Invoke(_folder.FullName) ?? ControlSettings.None };
+        _host = CockpitService.Build(settings, null, 1, [Pictures, .. sinks]);
         _feeder = new Thread(Feed);
         Pictures.Latest = _host.Services.GetRequiredService<LatestPicture>();
     }
+
+    public CockpitSettings Settings { get; }
+
+    public ControlDesk Desk => _host.Services.GetRequiredService<ControlDesk>();
+
+    /// <summary>The one recording.</summary>
+    public string Recording => Directory.GetFiles(_folder.FullName, "*Z-*.log").Single();
 
     public LiveBoard Static { get; }
 
@@ -100,7 +110,7 @@ internal sealed class LiveCockpit : IAsyncDisposable
     /// <summary>The stamps of a board's lines as recorded: the very stamps the pipeline got.</summary>
     public double[] StampsS(LiveBoard board)
     {
-        using var log = FlightLogFile.Open(Directory.GetFiles(_folder.FullName, "*Z-*.log").Single());
+        using var log = FlightLogFile.Open(Recording);
         var stamps = new List<double>();
         while (log.TryRead(out var record))
         {
