@@ -16,7 +16,7 @@ public sealed class PixelPanel(DisplayUnits units)
     private const int DigitTop = 10;
     private const int DigitPitch = 24;
     private const int CaptionLeft = 99;
-    private const int BarTop = 42;
+    private const int BarTop = 41;
     private const int BarHeight = 14;
     private const int LastBand = PixelPage.Bands - 1;
     private const int LineCharacters = 21;

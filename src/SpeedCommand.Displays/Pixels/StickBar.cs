@@ -54,7 +54,7 @@ internal static class StickBar
             {
                 // The lean is half the height; a head runs out at its middle row instead.
                 var lean = isHead ? height / 2 - Math.Abs(height / 2 - row) : (height - 1 - row) / 2;
-                var away = 2 + i * StrokePitch + lean;
+                var away = 3 + i * StrokePitch + lean;
                 page.Fill(side > 0 ? Post + away : Post - away - StrokeWidth, top + row, StrokeWidth, 1);
             }
         }

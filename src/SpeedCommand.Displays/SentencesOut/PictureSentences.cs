@@ -18,6 +18,9 @@ public static class PictureSentences
 
     private const double IcePointK = 273.15;
 
+    // An array: going through a list by its interface would allocate.
+    private static readonly KeyValuePair<Faults, string>[] Names = [.. FaultNames.All];
+
     /// <summary>Writes the sentences of one picture.</summary>
     /// <param name="picture">What to tell.</param>
     /// <param name="destination">Where to write; at least <see cref="MaxLength"/> bytes.</param>
@@ -62,7 +65,7 @@ public static class PictureSentences
 
     private static string FaultName(Faults fault)
     {
-        foreach (var (one, name) in FaultNames.All)
+        foreach (var (one, name) in Names)
         {
             if (one == fault)
             {

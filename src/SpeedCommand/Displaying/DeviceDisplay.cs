@@ -8,7 +8,6 @@ namespace SpeedCommand.Displaying;
 /// A display at the end of a wire, which may be unplugged, stuck or wrongly named: what is wrong is told once, and it is tried again, less
 /// and less often. Pictures that come meanwhile are passed over; it then shows the newest.
 /// </summary>
-/// <param name="name">What the log calls it.</param>
 internal abstract class DeviceDisplay(string name, LatestPicture latest, TimeProvider time, ILogger log) : DisplayLoop(latest, time, log)
 {
     private static readonly TimeSpan ShortestPause = TimeSpan.FromMilliseconds(250), LongestPause = TimeSpan.FromSeconds(2);

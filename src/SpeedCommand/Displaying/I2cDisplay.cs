@@ -7,7 +7,6 @@ using SpeedCommand.Settings;
 namespace SpeedCommand.Displaying;
 
 /// <summary>A display on an I2C bus: its driver, opened when something is to be shown and again after it failed, on a thread of its own.</summary>
-/// <param name="open">Opens the line to the chip.</param>
 internal abstract class I2cDisplay<TDriver>(
     string name, I2cPlace place, Func<I2cPlace, I2cDevice> open, LatestPicture latest, TimeProvider time, ILogger log)
     : DeviceDisplay(name, latest, time, log)

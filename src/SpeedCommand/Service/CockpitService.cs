@@ -120,9 +120,7 @@ internal static class CockpitService
         AddDisplay<SentenceOutService>(services, settings.Displays.Sentences);
     }
 
-    /// <summary>Adds a display that the settings name.</summary>
-    /// <param name="own">Its own settings; null when it is not there.</param>
-    /// <param name="openBus">The way to its bus, for one on a bus.</param>
+    /// <summary>Adds a display by its own settings, which are null when it is not there; one on a bus needs the way to it.</summary>
     private static void AddDisplay<[DynamicallyAccessedMembers(DynamicallyAccessedMemberTypes.PublicConstructors)] TDisplay>(
         IServiceCollection services, object? own, Func<I2cPlace, I2cDevice>? openBus = null)
         where TDisplay : DisplayLoop

@@ -74,7 +74,7 @@ public class CharacterTextTests
         var down = Text(Pictures.ClimbingTooFast, rows, columns).Split("\r\n")[1];
 
         Assert.True(up.IndexOf('>') > up.IndexOf(faster, StringComparison.Ordinal) && up.Contains(faster, StringComparison.Ordinal));
-        Assert.True(down.IndexOf('<') >= 0 && down.IndexOf('<') < down.IndexOf(slower, StringComparison.Ordinal));
+        Assert.True(down.Contains('<', StringComparison.Ordinal) && down.IndexOf('<') < down.IndexOf(slower, StringComparison.Ordinal));
         Assert.DoesNotContain('<', up);
         Assert.DoesNotContain('>', down);
     }

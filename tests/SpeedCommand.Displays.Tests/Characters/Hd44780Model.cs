@@ -19,6 +19,7 @@ internal sealed class Hd44780Model(int rows, int columns) : FakeI2cDevice
     private int _upper = -1;
     private int _address;
     private int _startsSeen;
+    private int _function = 0x30;
     private bool _isEightBit = true;
 
     public bool IsLit => (_lines & 0x08) != 0;
@@ -87,7 +88,8 @@ internal sealed class Hd44780Model(int rows, int columns) : FakeI2cDevice
         _readyUs = _nowUs + (value is 1 or 2 or 3 && !isData ? ClearUs : ExecutionUs);
         if (isData)
         {
-            Assert.False(_isEightBit);
+            // Four lines, two rows, small dots.
+            Assert.Equal(0x28, _function);
             Assert.True(_address is < 0x28 or >= 0x40 and < 0x68);
             _memory[_address] = (byte)value;
             Written.Add(_address++);
@@ -121,13 +123,11 @@ internal sealed class Hd44780Model(int rows, int columns) : FakeI2cDevice
         _startsSeen = _isEightBit ? _startsSeen + 1 : _startsSeen;
         if (_isEightBit)
         {
-            // After the first of the three 4.1 ms, after the second 0.1 ms.
-            _readyUs = _nowUs + (_startsSeen % 3) switch { 1 => 4_100, 2 => 100, _ => ExecutionUs };
+            // After power-up the first one takes 4.1 ms, the second 0.1 ms.
+            _readyUs = _nowUs + _startsSeen switch { 1 => 4_100, 2 => 100, _ => ExecutionUs };
             _upper = -1;
         }
-        else if ((value & 0x0F) != 0)
-        {
-            Assert.Equal(0x28, value);
-        }
+
+        _function = value;
     }
 }

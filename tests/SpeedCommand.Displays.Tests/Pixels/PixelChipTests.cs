@@ -78,13 +78,13 @@ public class PixelChipTests
     public void Show_OneDigitChanged_SendsItsColumnsOfItsBandsOnly(string name)
     {
         var (driver, chip) = Make(name);
-        var from = Pictures.AtRoughAirLimit;
-        driver.Show(PixelArt.Page(from));
+        var before = Pictures.AtRoughAirLimit;
+        driver.Show(PixelArt.Page(before));
         var sent = chip.Bytes;
         chip.Watch();
 
         // 180 becomes 181; on speed as before.
-        driver.Show(PixelArt.Page(from with { HoldIndicatedMps = new Gauge(181 / 3.6, 0.25, 0) }));
+        driver.Show(PixelArt.Page(before with { HoldIndicatedMps = new Gauge(181 / 3.6, 0.25, 0) }));
 
         Assert.Equal([1, 2, 3, 4], chip.Touched.Select(place => place.Band).Distinct().Order());
         Assert.All(chip.Touched, place => Assert.InRange(place.Column, 71, 91));
