@@ -28,6 +28,12 @@ public class PictureSentencesTests
         Assert.Equal("", text);
     }
 
+    /// <summary>Whoever programs the other instrument reads the document.</summary>
+    [Fact]
+    public void Document_HoldsTheSentences() => Assert.Contains(
+        "```\n" + string.Join('\n', Lines(Pictures.GlidingTooSlow)) + "\n```",
+        File.ReadAllText(Path.Combine(AppContext.BaseDirectory, "sentences.md")));
+
     [Fact]
     public void Render_ClimbAtALimitWithFaults_SaysThem()
     {
