@@ -12,6 +12,9 @@ namespace SpeedCommand.Desk.Commands;
 /// <summary>screens --out DIR: every display in every state, as pictures, from recorded flights.</summary>
 internal static class ScreensCommand
 {
+    /// <summary>An expected climb with which the speed to fly hardly depends on the moment's air, m/s.</summary>
+    private const double BriskMps = 2;
+
     /// <summary>An expected climb that asks for more than any limit allows, m/s.</summary>
     private const double HurriedMps = 10;
 
@@ -66,23 +69,30 @@ internal static class ScreensCommand
     /// <summary>What the flight itself does not have may come when it is flown heavier, and in more of a hurry.</summary>
     private static IEnumerable<ScreenMoment> Phases(string log, DisplayUnits units)
     {
-        var found = new List<ScreenMoment>();
+        var found = new List<(ScreenMoment Moment, bool IsDoubtful)>();
         foreach (var change in Changes)
         {
             var moments = new PhaseMoments(units);
             Replay(log, moments, change);
-            found.AddRange(moments.Found.Where(moment => !found.Exists(one => one.Name == moment.Name)));
+            found.AddRange(moments.Found.Select(moment => (moment, moments.IsDoubtful(moment))));
         }
 
-        return PhaseMoments.Names.SelectMany(name => found.Where(moment => moment.Name == name));
+        // The first of each name, one that is not doubtful before one that is.
+        return PhaseMoments.Names.SelectMany(name =>
+            found.Where(one => one.Moment.Name == name).OrderBy(one => one.IsDoubtful).Select(one => one.Moment).Take(1));
     }
 
     private static Func<FlightSettings, FlightSettings>[] Changes =>
     [
         settings => settings,
-        settings => settings with { MassKg = double.IsNaN(settings.Glider.MaxMassKg) ? settings.MassKg : settings.Glider.MaxMassKg },
+        settings => settings with { MassKg = Heavier(settings, 1) },
+        settings => settings with { MassKg = Heavier(settings, 0.5) },
+        settings => settings with { ExpectedClimbMps = BriskMps },
         settings => settings with { ExpectedClimbMps = HurriedMps },
     ];
+
+    private static double Heavier(FlightSettings settings, double share) =>
+        double.IsNaN(settings.Glider.MaxMassKg) ? settings.MassKg : settings.MassKg + share * (settings.Glider.MaxMassKg - settings.MassKg);
 
     private static IEnumerable<ScreenMoment> Faults(string folder, DisplayUnits units)
     {

@@ -11,7 +11,12 @@ namespace SpeedCommand.Desk.Screens;
 /// <param name="moments">The states; the caution comes before them.</param>
 internal sealed class ContactSheet(Screen screen, int scale, int perRow, IReadOnlyList<ScreenMoment> moments)
 {
-    private const int Gap = 16, Caption = 20;
+    private const int Gap = 16;
+
+    /// <summary>A large screen is shown smaller, and its name with it.</summary>
+    private int FontSize => Math.Max(13, screen.Width * scale / 45);
+
+    private int Caption => FontSize + 7;
 
     private int CellWidth => screen.Width * scale + Gap;
 
@@ -34,9 +39,9 @@ internal sealed class ContactSheet(Screen screen, int scale, int perRow, IReadOn
     private void DrawOne(SKCanvas canvas, int index, string name, CockpitPicture? picture)
     {
         var (left, top) = (Gap + index % perRow * CellWidth, Gap + index / perRow * CellHeight);
-        using var font = PictureFonts.Of(13);
+        using var font = PictureFonts.Of(FontSize);
         using var ink = new SKPaint { Color = PictureColors.Ink, IsAntialias = true };
-        canvas.DrawText(name.Replace('-', ' '), left, top + 13, font, ink);
+        canvas.DrawText(name.Replace('-', ' '), left, top + FontSize, font, ink);
         canvas.Save();
         canvas.Translate(left, top + Caption);
         canvas.Scale(scale);

@@ -16,15 +16,15 @@ internal sealed class PhaseMoments(DisplayUnits units) : IPictureSink
 
     private static readonly (string Name, Func<CockpitPicture, SpeedCorrection, double, bool> IsSo)[] States =
     [
-        ("gliding-too-slow", (picture, correction, off) => IsPlain(picture, FlightPhase.Gliding) && off > PlainlyOffMps),
+        ("gliding-too-slow", (picture, _, off) => IsPlain(picture, FlightPhase.Gliding) && off > PlainlyOffMps),
         ("gliding-on-speed", (picture, correction, _) => IsPlain(picture, FlightPhase.Gliding) && correction.Direction == CorrectionDirection.OnSpeed),
-        ("gliding-too-fast", (picture, correction, off) => IsPlain(picture, FlightPhase.Gliding) && off < -PlainlyOffMps),
-        ("climbing-too-slow", (picture, correction, off) => IsPlain(picture, FlightPhase.Climbing) && correction.Direction == CorrectionDirection.SpeedUp),
+        ("gliding-too-fast", (picture, _, off) => IsPlain(picture, FlightPhase.Gliding) && off < -PlainlyOffMps),
+        ("climbing-too-slow", (picture, _, off) => IsPlain(picture, FlightPhase.Climbing) && off > 0),
         ("climbing-on-speed", (picture, correction, _) => IsPlain(picture, FlightPhase.Climbing) && correction.Direction == CorrectionDirection.OnSpeed),
-        ("climbing-too-fast", (picture, correction, off) => IsPlain(picture, FlightPhase.Climbing) && off < 0 && correction.Direction == CorrectionDirection.SlowDown),
+        ("climbing-too-fast", (picture, _, off) => IsPlain(picture, FlightPhase.Climbing) && off < 0),
         ("at-a-limit", (picture, _, _) => picture.LimitedBy is LimitedBy.RoughAir or LimitedBy.NeverExceed && picture.Faults == Faults.None),
         ("doubtful", (_, correction, _) => correction.IsDoubtful),
-        ("nothing-known", (picture, correction, _) => !picture.HoldIndicatedMps.IsKnown && correction.Direction == CorrectionDirection.Unknown),
+        ("no-speed-known", (picture, correction, _) => !picture.HoldIndicatedMps.IsKnown && correction.Direction == CorrectionDirection.Unknown),
     ];
 
     private readonly SpeedSteadier _steadier = new(units.Speed);
@@ -37,17 +37,21 @@ internal sealed class PhaseMoments(DisplayUnits units) : IPictureSink
     /// <summary>What was found, in the order of <see cref="Names"/>.</summary>
     public IEnumerable<ScreenMoment> Found => _found.OfType<ScreenMoment>();
 
+    /// <summary>Whether the speeds of a moment are doubtful: another moment shows the state better.</summary>
+    public bool IsDoubtful(ScreenMoment moment) => SpeedCorrection.Of(moment.Picture, units).IsDoubtful;
+
     public void OnPicture(in CockpitPicture picture)
     {
         var steady = _steadier.Next(picture);
         var correction = SpeedCorrection.Of(steady, units);
-        var off = units.Speed.DifferenceToSi(correction.Amount) * (correction.Direction == CorrectionDirection.SlowDown ? -1 : 1);
+        var side = correction.Direction switch { CorrectionDirection.SpeedUp => 1, CorrectionDirection.SlowDown => -1, _ => 0 };
+        var off = side * units.Speed.DifferenceToSi(correction.Amount);
         for (var i = 0; i < States.Length; i++)
         {
             _lasted[i] = States[i].IsSo(steady, correction, off) ? _lasted[i] + 1 : 0;
-            if (_lasted[i] == PicturesToLast)
+            if (_lasted[i] == PicturesToLast && (_found[i] is not { } found || (IsDoubtful(found) && !correction.IsDoubtful)))
             {
-                _found[i] ??= new ScreenMoment(States[i].Name, false, steady);
+                _found[i] = new ScreenMoment(States[i].Name, false, steady);
             }
         }
     }

@@ -11,9 +11,8 @@ internal static class StickBar
 {
     private const int Post = PixelPage.Width / 2;
     private const int StrokeWidth = 3;
-    private const int StrokePitch = 5;
-    private const int UprightPitch = 6;
-    private const int MostStrokes = 4;
+    private const int StrokePitch = 6;
+    private const int MostStrokes = 3;
 
     // One stroke for each of these (about 5 km/h, as on character displays); beyond all of them the outermost turns into an arrow head.
     private const double StrokeMps = 1.5;
@@ -34,7 +33,7 @@ internal static class StickBar
             case CorrectionDirection.OnSpeed:
                 for (var i = -2; i <= 2; i++)
                 {
-                    page.Fill(Post - 1 + i * UprightPitch, top, i == 0 ? 2 : StrokeWidth - 1, height);
+                    page.Fill(Post - 1 + i * StrokePitch, top, i == 0 ? 2 : StrokeWidth - 1, height);
                 }
 
                 break;
@@ -60,7 +59,7 @@ internal static class StickBar
         }
     }
 
-    /// <summary>Signed, so that the number alone tells the direction too; led by the mark when doubtful.</summary>
+    /// <summary>Signed, so that the number alone tells the direction too; when doubtful the mark takes the sign's place.</summary>
     private static void DrawAmount(PixelPage page, int top, int side, SpeedCorrection correction)
     {
         if (correction.Amount > LargestAmount)
@@ -69,14 +68,10 @@ internal static class StickBar
         }
 
         Span<char> text = stackalloc char[8];
-        text[0] = side > 0 ? '+' : '-';
+        text[0] = correction.IsDoubtful ? '~' : side > 0 ? '+' : '-';
         _ = correction.Amount.TryFormat(text[1..], out var digits, "0", System.Globalization.CultureInfo.InvariantCulture);
         var width = SmallFont.WidthOf(digits + 1, 2);
         // A number of one digit keeps to the edge of its side.
         SmallFont.Draw(page, side > 0 ? PixelPage.Width - width : 0, top, text[..(digits + 1)], 2);
-        if (correction.IsDoubtful)
-        {
-            SmallFont.Draw(page, side > 0 ? PixelPage.Width - width - SmallFont.Pitch : width + 1, top + 4, "~");
-        }
     }
 }

@@ -1,4 +1,8 @@
+using System.Text;
+using Microsoft.Extensions.DependencyInjection;
+using Microsoft.Extensions.Hosting;
 using Microsoft.Extensions.Logging;
+using SpeedCommand.Bench;
 using SpeedCommand.Displaying;
 using SpeedCommand.Displays.Characters;
 using SpeedCommand.Pipeline.Picture;
@@ -107,6 +111,45 @@ public sealed class BusDisplayTests
         await UntilAsync(() => _log.Lines.Count > 0);
         await display.StopAsync(CancellationToken.None);
         Assert.Equal("character display: I2C bus 211, address 0x27: no such bus, /dev/i2c-211 is missing; is I2C switched on?", Assert.Single(_log.Lines));
+    }
+
+    [LinuxFact]
+    public async Task SentencesOut_ReachTheOtherInstrument_AndEndEmpty()
+    {
+        using var instrument = new PseudoTerminal();
+        var sentences = new SentenceOutSettings(new SerialTextSettings(instrument.DevicePath, 38_400), 10);
+        using var display = new SentenceOutService(sentences, _latest, TestSettings.For(null), new HastyTime(), _log.For<SentenceOutService>());
+        var received = new StringBuilder();
+        var buffer = new byte[4096];
+        bool Has(string text)
+        {
+            received.Append(Encoding.ASCII.GetString(buffer, 0, instrument.Read(buffer)));
+            return received.ToString().Contains(text, StringComparison.Ordinal);
+        }
+
+        await display.StartAsync(CancellationToken.None);
+        await UntilAsync(() => Has(".00,,HOLD,G,,,FLY,"));
+        await display.StopAsync(CancellationToken.None);
+        await UntilAsync(() => Has("$YXXDR,G,,,HOLD,") && Has("TXT,01,01,01,static-silent*"));
+        Assert.StartsWith("$YXTXT,01,01,01,advisory only", received.ToString(), StringComparison.Ordinal);
+        Assert.Empty(_log.Lines);
+    }
+
+    [Fact]
+    public void Service_HasEveryDisplayThatIsSet()
+    {
+        var settings = TestSettings.For(null, new SerialTextSettings("/dev/none-a", 9600)) with
+        {
+            Displays = new DisplaySettings
+            {
+                Pixels = new PixelSettings(new I2cPlace(211, 0x3C), PixelChipKind.Sh1106, 100),
+                I2cText = new I2cTextSettings(new I2cPlace(211, 0x27), CharacterFrame.Of20x4),
+                Sentences = new SentenceOutSettings(new SerialTextSettings("/dev/none-b", 38_400), 5),
+            },
+        };
+        using var host = CockpitService.Build(settings, null, 1);
+        var displays = host.Services.GetServices<IHostedService>().OfType<DisplayLoop>().Select(display => display.GetType().Name);
+        Assert.Equal(["SerialTextService", "PixelDisplayService", "I2cTextService", "SentenceOutService"], displays);
     }
 
     /// <summary>Delays that last a hundredth: the caution and the pauses between attempts are not what is tested.</summary>
