@@ -11,7 +11,7 @@ namespace SpeedCommand.Benchmarks;
 /// <summary>One frame of each display.</summary>
 public class DisplayBenchmarks
 {
-    private readonly byte[] _frame = new byte[CharacterText20x4.Length];
+    private readonly byte[] _frame = new byte[CharacterFrame.Of20x4.Length];
     private readonly CharacterText20x4 _characters = new(DisplayUnits.Metric);
     private readonly PanelStyle _style = new(80, 24, PanelLook.Colour, DisplayUnits.Metric);
     private CockpitPicture _picture;

@@ -10,6 +10,8 @@ public class DisplayDocumentTests
     [InlineData("panel-climbing-too-fast-80x24-metric")]
     [InlineData("characters-gliding-too-slow-metric")]
     [InlineData("characters-climbing-too-fast-metric")]
+    [InlineData("characters-16x2-gliding-too-slow-metric")]
+    [InlineData("characters-16x2-climbing-too-fast-metric")]
     [InlineData("caution-80x24")]
     public void Document_HoldsTheApprovedPage(string name)
     {

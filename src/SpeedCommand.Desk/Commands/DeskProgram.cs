@@ -21,6 +21,7 @@ internal static class DeskProgram
             CompareCommand.Create(),
             ExportCommand.Create(),
             ReportCommand.Create(),
+            ScreensCommand.Create(),
             FitCommand.Create(),
             FitTrialsCommand.Create(),
         };

@@ -149,11 +149,12 @@ public static class TerminalPanel
 
     private static void DrawCharacterLines(TextGrid grid, in CockpitPicture picture, PanelStyle style)
     {
-        Span<byte> text = stackalloc byte[CharacterText20x4.Length];
-        new CharacterText20x4(style.Units).Render(picture, text);
-        for (var row = 0; row < CharacterText20x4.Rows; row++)
+        var characters = new CharacterText20x4(style.Units);
+        Span<byte> text = stackalloc byte[characters.Frame.Length];
+        characters.Render(picture, text);
+        for (var row = 0; row < characters.Frame.Rows; row++)
         {
-            grid.Put(row, 0, Encoding.ASCII.GetString(CharacterText20x4.Line(text, row)), Tone.Normal);
+            grid.Put(row, 0, Encoding.ASCII.GetString(characters.Frame.Line(text, row)), Tone.Normal);
         }
     }
 }

@@ -22,6 +22,10 @@ internal abstract class DisplayLoop(LatestPicture latest, TimeProvider time, ILo
 
     private const Faults Silence = Faults.StaticSilent | Faults.AirspeedSilent | Faults.TemperatureSilent;
 
+    protected TimeProvider Time => time;
+
+    protected ILogger Log => log;
+
     /// <summary>Time between two frames; a frame is sent when its picture is made.</summary>
     protected abstract TimeSpan FramePeriod { get; }
 

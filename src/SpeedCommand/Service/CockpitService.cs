@@ -1,3 +1,5 @@
+using System.Device.I2c;
+using System.Diagnostics.CodeAnalysis;
 using System.Runtime.InteropServices;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Hosting;
@@ -114,9 +116,21 @@ internal static class CockpitService
                 : ActivatorUtilities.CreateInstance<StatusLineService>(provider));
         }
 
-        if (settings.SerialText is { } serialText)
+        AddDisplay<SerialTextService>(services, settings.SerialText);
+        AddDisplay<PixelDisplayService>(services, settings.Displays.Pixels, I2cLine.Open);
+        AddDisplay<I2cTextService>(services, settings.Displays.I2cText, I2cLine.Open);
+        AddDisplay<SentenceOutService>(services, settings.Displays.Sentences);
+    }
+
+    /// <summary>Adds a display by its own settings, which are null when it is not there; one on a bus needs the way to it.</summary>
+    private static void AddDisplay<[DynamicallyAccessedMembers(DynamicallyAccessedMemberTypes.PublicConstructors)] TDisplay>(
+        IServiceCollection services, object? own, Func<I2cPlace, I2cDevice>? openBus = null)
+        where TDisplay : DisplayLoop
+    {
+        if (own is not null)
         {
-            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<SerialTextService>(provider, serialText));
+            object[] parameters = openBus is null ? [own] : [own, openBus];
+            services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<TDisplay>(provider, parameters));
         }
     }
 

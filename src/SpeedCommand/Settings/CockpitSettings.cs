@@ -13,7 +13,7 @@ namespace SpeedCommand.Settings;
 /// <param name="Ports">The sensors' ports.</param>
 /// <param name="Units">What the pilot reads numbers in.</param>
 /// <param name="IsTerminalOn">Whether the terminal shows the panel.</param>
-/// <param name="SerialText">Port of a 20 x 4 character display; null for none.</param>
+/// <param name="SerialText">Port of a character display; null for none.</param>
 /// <param name="Recorder">Where flights are recorded; null for not at all.</param>
 /// <param name="LogFile">Where the service's own log goes; empty for standard error.</param>
 internal sealed record CockpitSettings(
@@ -32,6 +32,9 @@ internal sealed record CockpitSettings(
     /// <summary>How the pilot's controls are reached; default not at all.</summary>
     public ControlSettings Controls { get; init; } = ControlSettings.None;
 
+    /// <summary>Displays beyond the terminal and the character display on a serial line; default none.</summary>
+    public DisplaySettings Displays { get; init; } = DisplaySettings.None;
+
     /// <summary>Sensors that the kernel reads; default none.</summary>
     public IReadOnlyList<IioSettings> IioDevices { get; init; } = [];
 
@@ -48,13 +51,4 @@ internal sealed record CockpitSettings(
         Ports.FirstOrDefault(port => port.Name == name)?.Stream
         ?? (IioDevices.Any(device => device.Name == name) ? IioReader.Stream : FlownStreams.GetValueOrDefault(name))
         ?? StreamSettings.Sentences(ChecksumRule.Required);
-}
-
-/// <summary>Port of a character display.</summary>
-/// <param name="Device">Path of the device, or "usb:" with its serial number.</param>
-/// <param name="Baud">Bits a second.</param>
-internal sealed record SerialTextSettings(string Device, int Baud)
-{
-    /// <summary>Data bits, parity, stop bits, flow control.</summary>
-    public LineFraming Framing { get; init; } = LineFraming.Standard;
 }

@@ -22,10 +22,11 @@ internal static class CockpitSettingsReader
         RequirePorts(source, needsPorts && ports.Count + iioDevices.Count == 0);
         var units = ReadUnits(source);
         var terminal = source.Word("displays.terminal", OnOff, "on") == "on";
-        var serialText = ReadSerialText(source, ports);
+        var displays = new DisplaySettingsReader(source, ports);
+        var serialText = displays.ReadSerialText();
+        var otherDisplays = displays.Read();
         var serial = ReadSerial(source);
-        var controls = ControlSettingsReader.Read(source, ReadFraming(source, "controls.framing"), device =>
-            ports.FirstOrDefault(port => port.Device == device) is { } port ? $"port '{port.Name}'" : serialText?.Device == device ? "the character display" : null);
+        var controls = ControlSettingsReader.Read(source, ReadFraming(source, "controls.framing"), displays.OwnerOf);
         var recorder = RecorderSettingsReader.Read(source);
         var logFile = source.Text("logFile")?.Text ?? "";
         var flownStreams = FlownStreams.Read(source);
@@ -41,6 +42,7 @@ internal static class CockpitSettingsReader
         {
             Serial = serial,
             Controls = controls,
+            Displays = otherDisplays,
             IioDevices = iioDevices,
             Flown = FlownSettings.Of(source, named is null && source.Recorded.GliderText.Length > 0 ? "" : glider),
             FlownStreams = flownStreams,
@@ -121,20 +123,7 @@ internal static class CockpitSettingsReader
         return units;
     }
 
-    private static SerialTextSettings? ReadSerialText(SettingsSource source, List<PortSettings> ports)
-    {
-        var device = source.Text("displays.serialText.device");
-        var baud = source.Integer("displays.serialText.baud", 9_600, 1_200, 4_000_000);
-        if (device is not null && ports.FirstOrDefault(port => port.Device == device.Text) is { } taken)
-        {
-            source.Report(device, $"expected a device of its own, found that of port '{taken.Name}'");
-        }
-
-        var framing = ReadFraming(source, "displays.serialText.framing");
-        return device is null ? null : new SerialTextSettings(device.Text, baud) { Framing = framing };
-    }
-
-    private static LineFraming ReadFraming(SettingsSource source, string path)
+    internal static LineFraming ReadFraming(SettingsSource source, string path)
     {
         var framing = LineFraming.Standard;
         if (source.Find(path) is { } text && !LineFraming.TryParse(text.Text, out framing, out var problem))

@@ -24,7 +24,7 @@ public class ProjectDirectionTests
         ["SpeedCommand.Pipeline"] = (BelowPipeline, []),
         ["SpeedCommand.Replay"] = (Pipeline, []),
         ["SpeedCommand.Simulation"] = (Replay, []),
-        ["SpeedCommand.Displays"] = (Pipeline, []),
+        ["SpeedCommand.Displays"] = (Pipeline, ["System.Device.Gpio"]),
         ["SpeedCommand"] = ([.. Replay, "SpeedCommand.Displays"], CockpitPackages),
         ["SpeedCommand.Desk"] = ([.. Replay, "SpeedCommand.Displays", "SpeedCommand.Simulation"], null),
     };
