@@ -40,7 +40,7 @@ public static class TerminalPanel
         if (!style.IsFull)
         {
             DrawCharacterLines(grid, picture, style);
-            grid.Put(CharacterText20x4.Rows, 0, moment, Tone.Strong);
+            grid.Put(CharacterFrame.Of20x4.Rows, 0, moment, Tone.Strong);
             return grid.ToText(style.Look);
         }
 
