@@ -5,11 +5,13 @@ using Microsoft.Extensions.Logging;
 using NLog.Extensions.Logging;
 using SpeedCommand.Bench;
 using SpeedCommand.Displaying;
+using SpeedCommand.Displays.Sound;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Recording;
 using SpeedCommand.Settings;
+using SpeedCommand.Sounding;
 
 namespace SpeedCommand.Service;
 
@@ -73,6 +75,7 @@ internal static class CockpitService
             .AddSingleton(settings)
             .AddSingleton(clock)
             .AddSingleton(latest)
+            .AddSingleton(new SoundLevel(settings.Sound.Volume))
             .AddSingleton(_ => new CockpitMachine(settings.Flight, clock, MakeRecorder(settings, flight, clock), [latest, .. extraSinks]));
         AddPorts(builder.Services, settings, ports, sensors, states);
         builder.Services.AddHostedService<PictureTicker>();
@@ -115,6 +118,11 @@ internal static class CockpitService
         if (settings.SerialText is { } serialText)
         {
             services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<SerialTextService>(provider, serialText));
+        }
+
+        if (settings.Sound.IsOn)
+        {
+            services.AddHostedService<SoundService>();
         }
     }
 

@@ -32,6 +32,9 @@ internal sealed record CockpitSettings(
     /// <summary>Sensors that the kernel reads; default none.</summary>
     public IReadOnlyList<IioSettings> IioDevices { get; init; } = [];
 
+    /// <summary>What is heard.</summary>
+    public SoundSettings Sound { get; init; } = SoundSettings.Standard;
+
     /// <summary>What the pipeline's numbers depend on, for the header of what is recorded.</summary>
     public FlownSettings Flown { get; init; } = FlownSettings.None;
 
