@@ -12,6 +12,7 @@ using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Recording;
 using SpeedCommand.Settings;
 using SpeedCommand.Sounding;
+using SpeedCommand.Web;
 
 namespace SpeedCommand.Service;
 
@@ -123,6 +124,11 @@ internal static class CockpitService
         if (settings.Sound.IsOn)
         {
             services.AddHostedService<SoundService>();
+        }
+
+        if (settings.Web.IsOn)
+        {
+            services.AddHostedService<WebPageService>();
         }
     }
 

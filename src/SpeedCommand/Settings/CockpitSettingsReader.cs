@@ -25,6 +25,7 @@ internal static class CockpitSettingsReader
         var serialText = ReadSerialText(source, ports);
         var serial = ReadSerial(source);
         var recorder = RecorderSettingsReader.Read(source);
+        var web = WebSettingsReader.Read(source);
         var sound = SoundSettingsReader.Read(source);
         var logFile = source.Text("logFile")?.Text ?? "";
         var flownStreams = FlownStreams.Read(source);
@@ -41,6 +42,7 @@ internal static class CockpitSettingsReader
             Serial = serial,
             IioDevices = iioDevices,
             Sound = sound,
+            Web = web,
             Flown = FlownSettings.Of(source, named is null && source.Recorded.GliderText.Length > 0 ? "" : glider),
             FlownStreams = flownStreams,
         };
