@@ -17,6 +17,8 @@ public static class PageFrame
     /// <summary>Leaning strokes on each side of the correction bar.</summary>
     public const int MaxStrokes = 8;
 
+    private const int MaxFaults = 4;
+
     private const int UsualBytes = 2048;
 
     // What is not ASCII may stand as it is: the page takes it as text, never as markup.
@@ -94,12 +96,20 @@ public static class PageFrame
         json.WriteEndObject();
     }
 
+    /// <summary>The gravest faults, and how many more there are: two lines on a phone.</summary>
     private static void WriteFaults(Utf8JsonWriter json, Faults faults)
     {
         json.WriteStartArray("faults");
-        for (; faults != Faults.None; faults &= ~FaultWords.Gravest(faults))
+        for (var count = 0; faults != Faults.None && count < MaxFaults; count++)
         {
-            json.WriteStringValue(FaultWords.Of(FaultWords.Gravest(faults)));
+            var fault = FaultWords.Gravest(faults);
+            json.WriteStringValue(FaultWords.Of(fault));
+            faults &= ~fault;
+        }
+
+        if (faults != Faults.None)
+        {
+            json.WriteStringValue($"+{FaultWords.Count(faults)} more");
         }
 
         json.WriteEndArray();

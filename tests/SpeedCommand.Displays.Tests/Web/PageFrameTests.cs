@@ -49,8 +49,8 @@ public class PageFrameTests
     }, iter: 200, threads: 1);
 
     [Fact]
-    public void Faults_AreAllNamed_TheGravestFirst() => Assert.Equal(
-        FaultNames.All.Select(pair => FaultWords.Of(pair.Key)),
+    public void Faults_AreNamed_TheGravestFirst_AndNoneGoesUnsaid() => Assert.Equal(
+        [.. FaultNames.All.Take(4).Select(pair => FaultWords.Of(pair.Key)), $"+{FaultNames.All.Count - 4} more"],
         Frame(Pictures.Nothing).GetProperty("faults").EnumerateArray().Select(fault => fault.GetString()));
 
     [Theory]
