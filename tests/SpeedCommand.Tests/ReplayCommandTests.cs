@@ -86,6 +86,22 @@ public sealed class ReplayCommandTests : IDisposable
         return named;
     }
 
+    [Fact]
+    public async Task Sound_IsTheSameOnEachRun_AsLongAsTheFlight_AndInNobodysWay()
+    {
+        var flight = TestFlightLog.Write(_folder, 12);
+        string[] sounds = [Path.Combine(_folder, "one.wav"), Path.Combine(_folder, "two.wav")];
+        var runs = await Task.WhenAll(sounds.Select(sound => RunAsync("replay", flight, "--sound", sound, "--glider", "marram-15.json")));
+        Assert.All(runs, run => Assert.Equal((0, ""), (run.Status, run.Output)));
+        var bytes = File.ReadAllBytes(sounds[0]);
+        Assert.Equal(bytes, File.ReadAllBytes(sounds[1]));
+        // 119 pictures of 0.1 s, 24,000 samples of 2 bytes a second, after a header of 44 bytes; and something is to be heard.
+        Assert.Equal(44 + 119 * 4800, bytes.Length);
+        Assert.Contains(bytes.Skip(44), one => one != 0);
+        var (status, _, errors) = await RunAsync("replay", flight, "--sound", flight, "--glider", "marram-15.json");
+        Assert.Equal((2, $"--sound: expected a file of its own, found '{flight}'\n"), (status, errors));
+    }
+
     private static async Task<(int Status, string Output, string Errors)> RunAsync(params string[] args)
     {
         using var process = Process.Start(new ProcessStartInfo("dotnet", [Path.Combine(AppContext.BaseDirectory, "speedcommand.dll"), .. args])

@@ -10,7 +10,7 @@ namespace SpeedCommand.Displays.Terminal;
 internal static class LeaningBar
 {
     // The bar is full at this difference; beyond it the outer end turns into an arrow head and the words give the number.
-    private const double FullMps = 10;
+    public const double FullMps = 10;
 
     // Two columns a stroke give it weight; one stays free between strokes.
     private const int StrokePitch = 3;

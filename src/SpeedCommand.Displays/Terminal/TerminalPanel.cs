@@ -110,7 +110,7 @@ public static class TerminalPanel
         }
     }
 
-    private static string LimitWords(LimitedBy limit) => limit switch
+    internal static string LimitWords(LimitedBy limit) => limit switch
     {
         LimitedBy.Stall => "not slower: stall margin",
         LimitedBy.RoughAir => "not faster: rough-air limit",

@@ -22,7 +22,8 @@ internal static class ReplayCommand
         var jobs = new Option<int>("--jobs") { Description = "Flights at a time with --out-dir; standard is one a processor.", HelpName = "N", DefaultValueFactory = _ => Environment.ProcessorCount };
         var display = new Option<string>("--display") { Description = "Show the panel while replaying.", DefaultValueFactory = _ => "none" };
         display.AcceptOnlyFromAmong("terminal", "none");
-        var command = new Command("replay", "Replay recorded flights.") { recordings, settings, with, glider, pace, output, folder, format, jobs, display };
+        var sound = new Option<string?>("--sound") { Description = "A WAV file for what would have been heard; --with sound.follow=climb and the like shape it.", HelpName = "FILE" };
+        var command = new Command("replay", "Replay recorded flights.") { recordings, settings, with, glider, pace, output, folder, format, jobs, display, sound };
         // On a thread of its own: the library listens to signals only once the action has given its thread back.
         command.SetAction((parsed, cancel) => Task.Run(() =>
         {
@@ -33,7 +34,10 @@ internal static class ReplayCommand
             }
 
             return Run(new ReplayRequest(parsed.GetValue(recordings)!, parsed.GetValue(settings), parsed.GetValue(with), parsed.GetValue(glider),
-                times, parsed.GetValue(output), parsed.GetValue(folder), parsed.GetValue(format), parsed.GetValue(jobs), isShown), cancel);
+                times, parsed.GetValue(output), parsed.GetValue(folder), parsed.GetValue(format), parsed.GetValue(jobs), isShown)
+            {
+                Sound = parsed.GetValue(sound),
+            }, cancel);
         }, CancellationToken.None));
         return command;
     }
@@ -78,6 +82,11 @@ internal static class ReplayCommand
         if (request.HasFolder && (request.Out is not null || request.IsShown))
         {
             return "--out-dir: expected without --out and without --display terminal";
+        }
+
+        if (request.Sound is not null && (request.HasFolder || request.Recordings.Length > 1))
+        {
+            return request.HasFolder ? "--sound: expected without --out-dir" : $"--sound: expected one log, found {request.Recordings.Length}";
         }
 
         if (request.Recordings.Length > 1 && request.Out is not null and not ReplayRequest.StandardOutput)

@@ -1,5 +1,6 @@
 using SpeedCommand.Commands;
 using SpeedCommand.Displaying;
+using SpeedCommand.Displays.Sound;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Pictures;
@@ -58,6 +59,7 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
         };
         using var buffered = stream is null ? null : new BufferedStream(stream, BufferBytes);
         using var panel = request.IsShown ? new ReplayPanel(settings.Units, request.Pace) : null;
+        using var sound = SoundOf(settings.Sound);
         var totals = new FlightTotals();
         List<IPictureSink> sinks = [totals];
         if (buffered is not null)
@@ -68,6 +70,11 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
         if (panel is not null)
         {
             sinks.Add(panel);
+        }
+
+        if (sound is not null)
+        {
+            sinks.Add(sound);
         }
 
         foreach (var remark in recording.Remarks)
@@ -82,6 +89,11 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
         }
 
         TellProblems(path, recording);
+        if (sound is { IsFull: true })
+        {
+            errors.WriteLine($"{request.Sound}: warning: a WAV file ends after {WavFile.MaxSamples / Synthesizer.SampleRateHz / 3600} hours; the rest of the flight is not in it");
+        }
+
         if (recording is IgcRecording { Climbs: { } climbs } igc && !igc.Survey.HasAirspeed)
         {
             errors.Write(ClimbTable.Of(path, climbs));
@@ -90,6 +102,11 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
         var badLines = recording.ProblemCount + replay.Pipeline.Streams.Sum(one => one.BadLines);
         return new FlightResult(path, recording.ProblemCount > 0 ? ExitStatus.BadData : ExitStatus.Done, totals, replay.LineCount, badLines);
     }
+
+    private SoundTrack? SoundOf(SoundSettings settings) => request.Sound is null
+        ? null
+        : new SoundTrack(settings.Style, SoundLevel.GainOf(settings.Volume),
+            new FileStream(request.Sound, FileMode.Create, FileAccess.Write, FileShare.Read, BufferBytes));
 
     /// <summary>What could not be used is told with its line; the rest was replayed all the same.</summary>
     private void TellProblems(string path, IRecording recording)

@@ -4,6 +4,9 @@ namespace SpeedCommand.Replaying;
 internal sealed record ReplayRequest(
     string[] Recordings, FileInfo? Settings, string[]? With, string? Glider, double Pace, string? Out, string? Folder, string? Format, int Jobs, bool IsShown)
 {
+    /// <summary>Where the sound of the flight goes as a WAV file; null for nowhere.</summary>
+    public string? Sound { get; init; }
+
     public const string StandardOutput = "-";
 
     private const string Csv = "csv", JsonLines = "jsonl";

@@ -8,11 +8,14 @@ using NLog.Extensions.Logging;
 using SpeedCommand.Bench;
 using SpeedCommand.Controls;
 using SpeedCommand.Displaying;
+using SpeedCommand.Displays.Sound;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Recording;
 using SpeedCommand.Settings;
+using SpeedCommand.Sounding;
+using SpeedCommand.Web;
 
 namespace SpeedCommand.Service;
 
@@ -76,6 +79,7 @@ internal static class CockpitService
             .AddSingleton(settings)
             .AddSingleton(clock)
             .AddSingleton(latest)
+            .AddSingleton(new SoundLevel(settings.Sound.Volume))
             .AddSingleton(_ => new CockpitMachine(settings.Flight, clock, MakeRecorder(settings, flight, clock), [latest, .. extraSinks]));
         ControlService.Add(builder.Services, settings, flight, states);
         AddPorts(builder.Services, settings, ports, sensors, states);
@@ -131,6 +135,16 @@ internal static class CockpitService
         {
             object[] parameters = openBus is null ? [own] : [own, openBus];
             services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<TDisplay>(provider, parameters));
+        }
+
+        if (settings.Sound.IsOn)
+        {
+            services.AddHostedService<SoundService>();
+        }
+
+        if (settings.Web.IsOn)
+        {
+            services.AddHostedService<WebPageService>();
         }
     }
 

@@ -38,6 +38,12 @@ internal sealed record CockpitSettings(
     /// <summary>Sensors that the kernel reads; default none.</summary>
     public IReadOnlyList<IioSettings> IioDevices { get; init; } = [];
 
+    /// <summary>What is heard.</summary>
+    public SoundSettings Sound { get; init; } = SoundSettings.Standard;
+
+    /// <summary>Where the web page is served.</summary>
+    public WebSettings Web { get; init; } = WebSettings.Standard;
+
     /// <summary>What the pipeline's numbers depend on, for the header of what is recorded.</summary>
     public FlownSettings Flown { get; init; } = FlownSettings.None;
 

@@ -28,6 +28,8 @@ internal static class CockpitSettingsReader
         var serial = ReadSerial(source);
         var controls = ControlSettingsReader.Read(source, ReadFraming(source, "controls.framing"), displays.OwnerOf);
         var recorder = RecorderSettingsReader.Read(source);
+        var web = WebSettingsReader.Read(source);
+        var sound = SoundSettingsReader.Read(source);
         var logFile = source.Text("logFile")?.Text ?? "";
         var flownStreams = FlownStreams.Read(source);
         source.ReportUnknown();
@@ -44,6 +46,8 @@ internal static class CockpitSettingsReader
             Controls = controls,
             Displays = otherDisplays,
             IioDevices = iioDevices,
+            Sound = sound,
+            Web = web,
             Flown = FlownSettings.Of(source, named is null && source.Recorded.GliderText.Length > 0 ? "" : glider),
             FlownStreams = flownStreams,
         };

@@ -21,7 +21,13 @@ internal static partial class SystemCalls
     public const int ReadWrite = 2, NoControllingTerminal = 0x100, NonBlocking = 0x800, CloseOnExec = 0x80000;
 
     /// <summary>Events of poll(2); Broken is any of POLLERR, POLLHUP and POLLNVAL.</summary>
-    public const short Readable = 1, Broken = 8 | 16 | 32;
+    public const short Readable = 1, Writable = 4, Broken = 8 | 16 | 32;
+
+    /// <summary>Requests of fcntl(2): flags of an open file; how much a pipe holds, in bytes.</summary>
+    public const int SetFlags = 4, SetPipeSize = 1031;
+
+    /// <summary>Errors that are none: EINTR, EAGAIN.</summary>
+    public const int Interrupted = 4, TryAgain = 11;
 
     /// <summary>Exclusive, and not waiting for it: flock(2).</summary>
     public const int LockExclusive = 2, LockWithoutWaiting = 4;
@@ -55,6 +61,9 @@ internal static partial class SystemCalls
 
     [LibraryImport("libc", EntryPoint = "ioctl", SetLastError = true)]
     public static partial int Control(int file, nuint request, Span<byte> argument);
+
+    [LibraryImport("libc", EntryPoint = "fcntl", SetLastError = true)]
+    public static partial int FileControl(int file, int request, int argument);
 
     [LibraryImport("libc", EntryPoint = "tcgetattr", SetLastError = true)]
     public static partial int GetSettings(int file, Span<byte> settings);
