@@ -23,7 +23,11 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
         WriteHold(new AsciiLine(Frame.Line(frame, 0)), picture);
         var line = new AsciiLine(Frame.Line(frame, 1));
         var correction = SpeedCorrection.Of(picture, Units);
-        if (picture.Faults != Faults.None
+        if (ControlWords.ShortMoment(picture, Units) is { Length: > 0 } moment)
+        {
+            line.Add(moment);
+        }
+        else if (picture.Faults != Faults.None
             && (correction.Direction == CorrectionDirection.Unknown || picture.TimeUs % FaultCycleUs < FaultTurnUs))
         {
             line.Add("!");

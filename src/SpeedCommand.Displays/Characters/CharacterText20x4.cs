@@ -22,7 +22,15 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
     {
         WriteHold(new AsciiLine(Frame.Line(frame, 0)), picture);
         WriteCorrection(new AsciiLine(Frame.Line(frame, 1)), SpeedCorrection.Of(picture, Units));
-        WriteAir(new AsciiLine(Frame.Line(frame, 2)), picture);
+        if (ControlWords.ShortMoment(picture, Units) is { Length: > 0 } moment)
+        {
+            new AsciiLine(Frame.Line(frame, 2)).Add(moment);
+        }
+        else
+        {
+            WriteAir(new AsciiLine(Frame.Line(frame, 2)), picture);
+        }
+
         if (picture.Faults == Faults.None)
         {
             WriteDensity(new AsciiLine(Frame.Line(frame, 3)), picture);

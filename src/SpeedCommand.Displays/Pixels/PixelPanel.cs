@@ -72,9 +72,17 @@ public sealed class PixelPanel(DisplayUnits units)
     private void DrawHeader(PixelPage page, in CockpitPicture picture, bool isClimbing)
     {
         var line = new PixelLine(stackalloc char[LineCharacters]);
-        line.Add(isClimbing ? "CLIMB" : "GLIDE");
-        line.AddRight(isClimbing ? "avg" : "air", Readout.Of(isClimbing ? picture.AverageClimbMps : picture.NettoMps, units.Vertical, Trust.Vertical), true,
-            units.Vertical.Symbol);
+        if (ControlWords.ShortMoment(picture, units) is { Length: > 0 } moment)
+        {
+            line.Add(moment);
+        }
+        else
+        {
+            line.Add(isClimbing ? "CLIMB" : "GLIDE");
+            line.AddRight(isClimbing ? "avg" : "air", Readout.Of(isClimbing ? picture.AverageClimbMps : picture.NettoMps, units.Vertical, Trust.Vertical), true,
+                units.Vertical.Symbol);
+        }
+
         SmallFont.Draw(page, 1, 0, line.Text);
         if (isClimbing)
         {

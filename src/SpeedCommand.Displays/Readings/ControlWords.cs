@@ -20,6 +20,28 @@ public static class ControlWords
             ? Of(control, picture.Controls, units)
             : "";
 
+    /// <summary>The same in at most sixteen characters of ASCII, for small displays.</summary>
+    /// <param name="picture">The picture.</param>
+    /// <param name="units">The units shown.</param>
+    /// <returns>For example "next 1.5 m/s"; empty when nothing changed for a while.</returns>
+    public static string ShortMoment(in CockpitPicture picture, DisplayUnits units)
+    {
+        ArgumentNullException.ThrowIfNull(units);
+        if (picture.Controls.LastChanged is not { } control || picture.TimeUs - picture.Controls.LastChangedUs >= MomentUs)
+        {
+            return "";
+        }
+
+        var values = picture.Controls;
+        return control switch
+        {
+            ControlId.ExpectedClimb => (values.IsExpectedClimbAutomatic ? "auto " : "next ") + Number(units.Vertical.Convert(values.ExpectedClimbMps), units.Vertical),
+            ControlId.Ballast => Text($"water {values.BallastKg:F0} kg") + (values.DumpKgPerS > 0 ? " out" : ""),
+            ControlId.Phase => values.ForcedPhase is { } phase ? phase == FlightPhase.Climbing ? "held: climbing" : "held: gliding" : "phase auto",
+            _ => Of(control, values, units),
+        };
+    }
+
     /// <summary>One control as it stands.</summary>
     /// <param name="control">Which.</param>
     /// <param name="values">How the controls stand.</param>

@@ -59,6 +59,15 @@ internal sealed class ControlDesk(CockpitMachine machine, ControlRules rules, Ti
         return space < 0 ? TryChange(line, "", source, out message) : TryChange(line[..space], line[(space + 1)..], source, out message);
     }
 
+    /// <summary>Sets a control to what the settings say; call before the first line.</summary>
+    public void Begin(in ControlChange change)
+    {
+        if (change != ControlText.Round(Values.ChangeOf(change.Control)))
+        {
+            machine.Begin(ControlText.Round(change));
+        }
+    }
+
     /// <summary>Brings controls to where they stood before the service started; call before the first line. What this glider cannot have is left out.</summary>
     public void Restore(IEnumerable<ControlChange> changes)
     {

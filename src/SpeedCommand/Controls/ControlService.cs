@@ -57,6 +57,7 @@ internal static class ControlService
         var log = provider.GetRequiredService<ILogger<ControlDesk>>();
         var desk = new ControlDesk(provider.GetRequiredService<CockpitMachine>(),
             RulesOf(settings.Flight, settings.Units, settings.Controls.DumpKgPerS), provider.GetRequiredService<TimeProvider>(), log);
+        desk.Begin(new ControlChange(ControlId.Volume, settings.Sound.Volume));
         if (stateFile is not null)
         {
             if (ControlStateFile.Load(stateFile, out var changes) is { } problem)

@@ -17,8 +17,7 @@ internal sealed class PixelDisplayService(
     private readonly SpeedSteadier _steadier = new(settings.Units.Speed);
     private readonly PixelPage _page = new();
 
-    /// <summary>Brightness from the next picture on, 0 to 100.</summary>
-    public int BrightnessPercent { get; set; } = pixels.BrightnessPercent;
+    private int _brightnessPercent = pixels.BrightnessPercent;
 
     protected override PixelChip Drive(I2cDevice device) => pixels.Chip == PixelChipKind.Ssd1306 ? new Ssd1306(device) : new Sh1106(device);
 
@@ -26,11 +25,15 @@ internal sealed class PixelDisplayService(
 
     protected override void RenderCaution() => PixelPanel.RenderCaution(_page);
 
-    protected override void Render(in CockpitPicture picture) => _panel.Render(_steadier.Next(picture), _page);
+    protected override void Render(in CockpitPicture picture)
+    {
+        _brightnessPercent = (int)Math.Round(pixels.BrightnessPercent * picture.Controls.Brightness);
+        _panel.Render(_steadier.Next(picture), _page);
+    }
 
     protected override void Send(PixelChip driver)
     {
-        driver.BrightnessPercent = BrightnessPercent;
+        driver.BrightnessPercent = _brightnessPercent;
         driver.Show(_page);
     }
 

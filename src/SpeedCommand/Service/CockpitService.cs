@@ -124,6 +124,15 @@ internal static class CockpitService
         AddDisplay<PixelDisplayService>(services, settings.Displays.Pixels, I2cLine.Open);
         AddDisplay<I2cTextService>(services, settings.Displays.I2cText, I2cLine.Open);
         AddDisplay<SentenceOutService>(services, settings.Displays.Sentences);
+        if (settings.Sound.IsOn)
+        {
+            services.AddHostedService<SoundService>();
+        }
+
+        if (settings.Web.IsOn)
+        {
+            services.AddHostedService<WebPageService>();
+        }
     }
 
     /// <summary>Adds a display by its own settings, which are null when it is not there; one on a bus needs the way to it.</summary>
@@ -135,16 +144,6 @@ internal static class CockpitService
         {
             object[] parameters = openBus is null ? [own] : [own, openBus];
             services.AddSingleton<IHostedService>(provider => ActivatorUtilities.CreateInstance<TDisplay>(provider, parameters));
-        }
-
-        if (settings.Sound.IsOn)
-        {
-            services.AddHostedService<SoundService>();
-        }
-
-        if (settings.Web.IsOn)
-        {
-            services.AddHostedService<WebPageService>();
         }
     }
 

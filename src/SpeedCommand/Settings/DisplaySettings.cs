@@ -56,7 +56,7 @@ internal enum PixelChipKind
 /// <summary>A display of 128 x 64 pixels.</summary>
 /// <param name="Place">Where it is.</param>
 /// <param name="Chip">Its chip.</param>
-/// <param name="BrightnessPercent">0 to 100.</param>
+/// <param name="BrightnessPercent">At full brightness of the control, 0 to 100.</param>
 internal sealed record PixelSettings(I2cPlace Place, PixelChipKind Chip, int BrightnessPercent);
 
 /// <summary>A character display behind a port expander.</summary>

@@ -25,6 +25,8 @@ internal sealed class SoundService(
 
     protected override ValueTask ShowAsync(CockpitPicture picture, CancellationToken stop)
     {
+        level.Volume = picture.Controls.Volume;
+        level.IsMuted = picture.Controls.IsMuted;
         _player.Play(_guide.Next(picture));
         return ValueTask.CompletedTask;
     }
