@@ -1,5 +1,6 @@
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Displays.Tests;
@@ -30,6 +31,12 @@ internal static class Pictures
         ExpectedClimbMps = 2,
         EnduranceS = new Gauge(22 * 60, 30, 0.05),
         RangeM = new Gauge(34_000, 400, 0.05),
+    };
+
+    /// <summary>The pilot has just set the expected climb.</summary>
+    public static CockpitPicture Changed(CockpitPicture picture) => picture with
+    {
+        Controls = picture.Controls with { ExpectedClimbMps = 1.5, LastChanged = ControlId.ExpectedClimb, LastChangedUs = picture.TimeUs },
     };
 
     /// <summary>Working a thermal, 8 km/h too fast.</summary>

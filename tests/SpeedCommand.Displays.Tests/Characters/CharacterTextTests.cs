@@ -94,6 +94,19 @@ public class CharacterTextTests
         Assert.Contains(expected.Replace("! ", "!"), lines[1]);
     }
 
+    [Theory]
+    [InlineData(4, 20, 2, 0, "next 1.5 m/s")]
+    [InlineData(4, 20, 2, 2.4, "next 1.5 m/s")]
+    [InlineData(4, 20, 2, 2.5, "air")]
+    [InlineData(2, 16, 1, 2.4, "next 1.5 m/s")]
+    [InlineData(2, 16, 1, 2.5, "+12")]
+    public void Render_AControlJustChanged_IsShownForAMoment(int rows, int columns, int row, double sinceS, string expected)
+    {
+        var changed = Pictures.Changed(Pictures.GlidingTooSlow);
+        var picture = changed with { TimeUs = changed.Controls.LastChangedUs + (long)(sinceS * 1e6) };
+        Assert.Contains(expected, Text(picture, rows, columns).Split("\r\n")[row]);
+    }
+
     [Fact]
     public void Render_TwoLinesAndNoCorrection_AlwaysSaysWhy() =>
         Assert.Contains("!no airspeed", Text(Pictures.NoAirspeed with { TimeUs = 5_000_000 }, 2, 16));

@@ -14,6 +14,10 @@ public class ApprovedPixelTests
         ApprovedText.Matches($"pixels-{state}", PixelArt.Text(PixelArt.Page(PixelStates.Named(state)).IsLit));
 
     [Fact]
+    public void Render_AControlJustChanged_IsThePageApproved() =>
+        ApprovedText.Matches("pixels-control-changed", PixelArt.Text(PixelArt.Page(Pictures.Changed(Pictures.GlidingTooSlow)).IsLit));
+
+    [Fact]
     public void RenderCaution_IsThePageApproved()
     {
         var page = new PixelPage();

@@ -45,6 +45,34 @@ public class ControlWordsTests
         Assert.Equal("sound off", Of(ControlId.Mute));
     }
 
+    [Fact]
+    public void ShortMoment_EveryControlAtItsMost_FitsTheSmallestDisplay()
+    {
+        var most = Values with
+        {
+            ExpectedClimbMps = 15,
+            BallastKg = 600,
+            DumpKgPerS = 10,
+            BugsFraction = 0.999,
+            QnhPa = 109_000,
+            Volume = 1,
+            ForcedPhase = FlightPhase.Climbing,
+            IsMuted = true,
+        };
+        foreach (var control in Enum.GetValues<ControlId>())
+        {
+            foreach (var values in new[] { most, most with { IsExpectedClimbAutomatic = true, ExpectedClimbSigmaMps = 1.5, ForcedPhase = null } })
+            {
+                var picture = CockpitPicture.Blank(10_000_000, Faults.None) with { Controls = values with { LastChanged = control } };
+                Assert.All(NamedUnits.Varied.Select(units => ControlWords.ShortMoment(picture, units)), text =>
+                {
+                    Assert.InRange(text.Length, 1, 16);
+                    Assert.All(text, letter => Assert.InRange(letter, ' ', '}'));
+                });
+            }
+        }
+    }
+
     [Theory]
     [InlineData(10.0, "expected climb 1.5 m/s")]
     [InlineData(12.4, "expected climb 1.5 m/s")]
