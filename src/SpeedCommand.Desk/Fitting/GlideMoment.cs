@@ -2,7 +2,6 @@ using SpeedCommand.Desk.Reports;
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Polars;
 using SpeedCommand.Flight.Targets;
-using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Desk.Fitting;
@@ -18,11 +17,10 @@ internal readonly record struct GlideMoment(
 
     /// <summary>Reads a picture; false where climb, airspeed or air are not known, or doubtful.</summary>
     /// <param name="picture">The picture.</param>
-    /// <param name="settings">Glider and mass it was made with.</param>
     /// <param name="targets">Targets of that glider.</param>
     /// <param name="handbook">The polar known before.</param>
     /// <param name="moment">What it tells.</param>
-    public static bool TryRead(in CockpitPicture picture, FlightSettings settings, SpeedTargets targets, DragPolar handbook, out GlideMoment moment)
+    public static bool TryRead(in CockpitPicture picture, SpeedTargets targets, DragPolar handbook, out GlideMoment moment)
     {
         moment = default;
         if ((picture.Faults & Doubtful) != 0 || !picture.ClimbMps.IsKnown || !picture.SmoothIndicatedAirspeedMps.IsKnown || !picture.MinSinkIndicatedMps.IsKnown
@@ -34,9 +32,9 @@ internal readonly record struct GlideMoment(
         // The gusts of the indicator are in the true airspeed too.
         var smooth = picture.SmoothIndicatedAirspeedMps.Value;
         var trueMps = picture.TrueAirspeedMps.Value * smooth / picture.IndicatedAirspeedMps.Value;
-        var load = PictureAir.LoadFactorOf(picture, air, settings, targets);
-        var terms = DragTerms.At(trueMps, air.DensityKgPerM3, settings.MassKg / handbook.WingAreaM2, 1);
-        var reference = trueMps * Math.Sqrt(air.DensityKgPerM3 / StandardAtmosphere.SeaLevelDensityKgPerM3 * handbook.ReferenceMassKg / settings.MassKg);
+        var load = PictureAir.LoadFactorOf(picture, air, targets);
+        var terms = DragTerms.At(trueMps, air.DensityKgPerM3, picture.Controls.MassKg / handbook.WingAreaM2, 1);
+        var reference = trueMps * Math.Sqrt(air.DensityKgPerM3 / StandardAtmosphere.SeaLevelDensityKgPerM3 * handbook.ReferenceMassKg / picture.Controls.MassKg);
         moment = new(picture.TimeS, trueMps, smooth, picture.ClimbMps.Value, load, reference,
             terms.SinkMps(handbook.Cd0, handbook.K1, handbook.K2), terms);
         return double.IsFinite(trueMps + load) && trueMps > 0;

@@ -50,7 +50,7 @@ internal sealed class GlideSegments(int flight, FlightSettings settings, DragPol
     public void OnPicture(in CockpitPicture picture)
     {
         _lastS = picture.TimeS;
-        var isKnown = GlideMoment.TryRead(picture, settings, _targets, handbook, out var moment);
+        var isKnown = GlideMoment.TryRead(picture, _targets, handbook, out var moment);
         var reason = isKnown ? ReasonAgainst(picture.Phase, moment) : SegmentVerdict.NotKnown;
         if (reason == SegmentVerdict.Used && moment.TimeS - _unusableUntilS >= SettlingS)
         {

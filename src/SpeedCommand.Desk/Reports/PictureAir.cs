@@ -1,6 +1,5 @@
 using SpeedCommand.Flight.Atmosphere;
 using SpeedCommand.Flight.Targets;
-using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Desk.Reports;
@@ -17,9 +16,9 @@ internal static class PictureAir
     }
 
     /// <summary>The load factor: a picture has none of its own, but its least-sink speed grows with the root of the load. NaN when not known.</summary>
-    public static double LoadFactorOf(in CockpitPicture picture, in Air air, FlightSettings settings, SpeedTargets targets)
+    public static double LoadFactorOf(in CockpitPicture picture, in Air air, SpeedTargets targets)
     {
-        if (targets.MinSink(air, new Loading(settings.MassKg, 1, 0)) is not { IsKnown: true } straight)
+        if (targets.MinSink(air, new Loading(picture.Controls.MassKg, 1, 0)) is not { IsKnown: true } straight)
         {
             return double.NaN;
         }

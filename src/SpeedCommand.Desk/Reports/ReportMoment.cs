@@ -1,7 +1,9 @@
 using SpeedCommand.Flight.Airspeeds;
 using SpeedCommand.Flight.Atmosphere;
+using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Desk.Reports;
@@ -49,20 +51,20 @@ internal readonly record struct ReportMoment
             HoldMps = picture.HoldIndicatedMps.Value,
             ClimbMps = picture.ClimbMps,
             NettoMps = picture.NettoMps,
-            LoadFactor = hasAir ? PictureAir.LoadFactorOf(picture, air, settings, targets) : double.NaN,
-            OffSpeedMps = hasAir ? OffSpeed(trueMps, picture.SpeedToFlyIndicatedMps.Value, air, settings) : double.NaN,
+            LoadFactor = hasAir ? PictureAir.LoadFactorOf(picture, air, targets) : double.NaN,
+            OffSpeedMps = hasAir ? OffSpeed(trueMps, picture.SpeedToFlyIndicatedMps.Value, air, settings.Glider, picture.Controls) : double.NaN,
         };
     }
 
-    private static double OffSpeed(double trueMps, double toFlyMps, in Air air, FlightSettings settings)
+    private static double OffSpeed(double trueMps, double toFlyMps, in Air air, Glider glider, in ControlValues controls)
     {
         if (!(toFlyMps > 0 && trueMps > 0)
-            || !AirspeedConversion.TryEquivalent(settings.Glider.AirspeedCorrection.ToCalibrated(new IndicatedAirspeed(toFlyMps)), air, out var toFly))
+            || !AirspeedConversion.TryEquivalent(glider.AirspeedCorrection.ToCalibrated(new IndicatedAirspeed(toFlyMps)), air, out var toFly))
         {
             return double.NaN;
         }
 
         var flown = AirspeedConversion.ToEquivalent(new TrueAirspeed(trueMps), air).Mps;
-        return OffSpeedCost.Mps(settings.Glider.Polar, flown, toFly.Mps, settings.MassKg, air.DensityKgPerM3, settings.BugsFraction);
+        return OffSpeedCost.Mps(glider.Polar, flown, toFly.Mps, controls.MassKg, air.DensityKgPerM3, controls.BugsFraction);
     }
 }

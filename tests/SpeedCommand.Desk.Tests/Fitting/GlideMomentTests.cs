@@ -3,6 +3,7 @@ using SpeedCommand.Desk.Fitting;
 using SpeedCommand.Flight.Polars;
 using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Desk.Tests.Fitting;
@@ -22,10 +23,11 @@ public sealed class GlideMomentTests
         SmoothIndicatedAirspeedMps = Known(28),
         TrueAirspeedMps = Known(29.7),
         MinSinkIndicatedMps = Known(20),
+        Controls = ControlValues.Standard with { MassKg = Settings.MassKg },
     };
 
     private static bool IsRead(in CockpitPicture picture) =>
-        GlideMoment.TryRead(picture, Settings, new SpeedTargets(Settings.Glider), (DragPolar)Settings.Glider.Polar, out _);
+        GlideMoment.TryRead(picture, new SpeedTargets(Settings.Glider), (DragPolar)Settings.Glider.Polar, out _);
 
     [Theory]
     [InlineData(Faults.None, true)]
@@ -36,4 +38,16 @@ public sealed class GlideMomentTests
 
     [Fact]
     public void TryRead_BlankClimb_IsNotKnown() => Assert.False(IsRead(Glide(Faults.None) with { ClimbMps = Gauge.Blank }));
+
+    /// <summary>Induced drag goes with the mass, so a glide with the water dumped says more about it than one with it aboard.</summary>
+    [Fact]
+    public void TryRead_AfterADump_CountsTheMassThatIsLeft()
+    {
+        var picture = Glide(Faults.None);
+        var light = picture with { Controls = picture.Controls with { MassKg = Settings.MassKg - 80 } };
+        GlideMoment.TryRead(picture, new SpeedTargets(Settings.Glider), (DragPolar)Settings.Glider.Polar, out var before);
+        GlideMoment.TryRead(light, new SpeedTargets(Settings.Glider), (DragPolar)Settings.Glider.Polar, out var after);
+        // The same true airspeed is a faster one at reference mass, by the root of the masses.
+        Assert.Equal(before.ReferenceMps * Math.Sqrt(Settings.MassKg / (Settings.MassKg - 80)), after.ReferenceMps, 1e-9);
+    }
 }
