@@ -5,14 +5,31 @@ namespace SpeedCommand.Sentences.Tests;
 /// <summary>What docs/sentences.md shows to the builder of a board is what the reader takes.</summary>
 public sealed partial class DocumentedSentencesTests
 {
+    private static int Out => s_document.IndexOf("\n## Sentences out", StringComparison.Ordinal);
+
+    private static int AfterOut => s_document.IndexOf("\n## To add a measurement", StringComparison.Ordinal);
+
     private static readonly string s_document = File.ReadAllText(Path.Combine(RepositoryRoot(), "docs", "sentences.md"));
 
     [Fact]
     public void EverySentenceShown_IsSoundAndGivesReadingsOnly()
     {
-        var lines = WholeSentence().Matches(s_document).Select(match => match.Value).ToList();
+        var lines = WholeSentence().Matches(s_document[..Out]).Concat(WholeSentence().Matches(s_document[AfterOut..])).Select(match => match.Value).ToList();
         Assert.True(lines.Count >= 5);
         Assert.All(lines, AssertUnderstood);
+    }
+
+    /// <summary>What goes out to another instrument must never be taken for a sensor's word, should it come back on a wire.</summary>
+    [Fact]
+    public void EverySentenceSentOut_IsSoundAndGivesNoReading()
+    {
+        var lines = WholeSentence().Matches(s_document[Out..AfterOut]).Select(match => match.Value).ToList();
+        Assert.True(lines.Count >= 5);
+        Assert.All(lines, line =>
+        {
+            Assert.Equal(SentenceFault.None, SentenceReader.TryRead(WireText.Bytes(line), ChecksumRule.Required, out var sentence));
+            Assert.Equal(0, new XdrReadings(sentence).Count);
+        });
     }
 
     [Fact]

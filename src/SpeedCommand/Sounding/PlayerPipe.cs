@@ -22,6 +22,9 @@ internal sealed class PlayerPipe : IDisposable
     /// <summary>A player that takes nothing for so long hangs.</summary>
     private const int WriteLimitMs = 1000, EndLimitMs = 500;
 
+    /// <summary>A player that ended has said all it will; on a busy machine it takes a while to be read.</summary>
+    private const int LastWordsLimitMs = 5000;
+
     private readonly Process _process;
     private readonly SafeHandle _pipe;
     private readonly string _program;
@@ -77,7 +80,7 @@ internal sealed class PlayerPipe : IDisposable
             var sent = SystemCalls.Write(entry.File, block, block.Length);
             if (sent < 0 && Marshal.GetLastPInvokeError() is not (SystemCalls.TryAgain or SystemCalls.Interrupted))
             {
-                Trouble = $"{_program} ended: {(_lastWords.Wait(EndLimitMs) ? _lastWords.Result : "it gave no reason")}";
+                Trouble = $"{_program} ended: {(_lastWords.Wait(LastWordsLimitMs) ? _lastWords.Result : "it gave no reason")}";
                 return false;
             }
 

@@ -42,7 +42,7 @@ public sealed class ControlSettingsTests
 
     [LinuxTheory]
     [InlineData("""  "controls": { "device": "/dev/a" } """, "controls.device: expected a device of its own, found that of port 'a'")]
-    [InlineData("""  "displays": { "serialText": { "device": "/dev/b" } }, "controls": { "device": "/dev/b" } """, "controls.device: expected a device of its own, found that of the character display")]
+    [InlineData("""  "displays": { "serialText": { "device": "/dev/b" } }, "controls": { "device": "/dev/b" } """, "controls.device: expected a device of its own, found that of displays.serialText")]
     [InlineData("""  "controls": { "dumpRate": "11 kg/s" } """, "controls.dumpRate: expected 0.01 kg/s to 10 kg/s, found '11 kg/s'")]
     [InlineData("""  "controls": { "keys": "some" } """, "controls.keys: expected one of on, off, found 'some'")]
     [InlineData("""  "controls": { "socket": "/a-folder-whose-name-goes-on-and-on-and-on/and-on-and-on-and-on/until-no-socket-of-this-system-can-have-such-a-path" } """, "controls.socket: expected a path of at most 107 bytes")]
