@@ -28,6 +28,9 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
     private const string LeastKey =
         "Math.min(1000, ...[...document.querySelectorAll('#set, .control button')].filter(e => e.checkVisibility()).flatMap(e => [e.offsetWidth, e.offsetHeight]))";
 
+    private const string DoKeysFit =
+        "Math.max(0, ...buttons.map(e => e.getBoundingClientRect().bottom)) <= document.getElementById('foot').getBoundingClientRect().top";
+
     private readonly List<string> _offences = [];
     private int _views;
 
@@ -161,6 +164,11 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
                 if (least < 48)
                 {
                     _offences.Add($"{name}, {screen}, {look}: a button of {least} px");
+                }
+
+                if (!(await browser.EvaluateAsync(DoKeysFit)).GetBoolean())
+                {
+                    _offences.Add($"{name}, {screen}, {look}: a button reaches into the last row");
                 }
 
                 var texts = (await browser.EvaluateAsync(TextsOnThePage)).EnumerateArray().ToList();
