@@ -19,7 +19,7 @@ public static class PageFrame
 
     private const int MaxFaults = 4;
 
-    private const int UsualBytes = 2048;
+    private const int UsualBytes = 3072;
 
     // What is not ASCII may stand as it is: the page takes it as text, never as markup.
     private static readonly JsonWriterOptions Plain = new() { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
@@ -28,8 +28,9 @@ public static class PageFrame
     /// <param name="picture">What to show.</param>
     /// <param name="units">The units to show it in.</param>
     /// <param name="sentMs">When it is sent, ms on any clock that runs on steadily: the page tells by it what was under way for long.</param>
+    /// <param name="maySet">Whether the page may change the pilot's controls.</param>
     /// <returns>The event in UTF-8, its end included.</returns>
-    public static byte[] Event(in CockpitPicture picture, DisplayUnits units, long sentMs)
+    public static byte[] Event(in CockpitPicture picture, DisplayUnits units, long sentMs, bool maySet = false)
     {
         ArgumentNullException.ThrowIfNull(units);
         var bytes = new ArrayBufferWriter<byte>(UsualBytes);
@@ -46,6 +47,7 @@ public static class PageFrame
             new PageReasons(json, units).Write(picture);
             json.WriteEndArray();
             WriteFaults(json, picture.Faults);
+            PageControls.Write(json, picture, units, maySet);
             json.WriteEndObject();
         }
 

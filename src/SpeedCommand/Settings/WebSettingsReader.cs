@@ -18,7 +18,8 @@ internal static class WebSettingsReader
             source.Report(text, $"expected an IP address, such as 127.0.0.1, or 0.0.0.0 for every network, found '{text.Text}'");
         }
 
-        return new WebSettings(isOn, address, source.Integer("web.port", standard.Port, 1, 65_535));
+        return new WebSettings(isOn, address, source.Integer("web.port", standard.Port, 1, 65_535),
+            source.Word("web.controls", OnOff, "off") == "on");
     }
 
     /// <summary>An address as people write it: "1" and "0x7f.1", which the library takes too, are slips of the pen.</summary>

@@ -5,10 +5,12 @@ using Microsoft.AspNetCore.Http.Features;
 namespace SpeedCommand.Web;
 
 /// <summary>
-/// Answers requests: three files and a stream of events, all by GET, and nothing else. Nothing that a browser sends is read but the
-/// request's first line and the headers that say it brings a body.
+/// Answers requests: three files and a stream of events by GET, changes of controls by POST where they are allowed, and nothing else. Of
+/// a GET nothing is read but the first line and the headers that say it brings a body.
 /// </summary>
-internal sealed class PageApplication(PageHub hub) : IHttpApplication<HttpContext>
+/// <param name="hub">Who watches.</param>
+/// <param name="sets">Who takes changes of controls; null when the page may not change any.</param>
+internal sealed class PageApplication(PageHub hub, SetRequests? sets) : IHttpApplication<HttpContext>
 {
     public const string EventsPath = "/events";
 
@@ -43,6 +45,11 @@ internal sealed class PageApplication(PageHub hub) : IHttpApplication<HttpContex
         }
 
         var path = context.Request.Path.Value ?? "";
+        if (sets is not null && path == SetRequests.Path)
+        {
+            return HttpMethods.IsPost(context.Request.Method) ? sets.AnswerAsync(context) : RefuseMethodAsync(context, HttpMethods.Post);
+        }
+
         var isEvents = path == EventsPath;
         if (!isEvents && !_files.ContainsKey(path))
         {
@@ -51,8 +58,7 @@ internal sealed class PageApplication(PageHub hub) : IHttpApplication<HttpContex
 
         if (!HttpMethods.IsGet(context.Request.Method))
         {
-            context.Response.Headers.Allow = HttpMethods.Get;
-            return RefuseAsync(context, StatusCodes.Status405MethodNotAllowed);
+            return RefuseMethodAsync(context, HttpMethods.Get);
         }
 
         if (context.Request.ContentLength > 0 || context.Request.Headers.TransferEncoding.Count > 0)
@@ -61,6 +67,12 @@ internal sealed class PageApplication(PageHub hub) : IHttpApplication<HttpContex
         }
 
         return isEvents ? SendEventsAsync(context) : SendFileAsync(context, _files[path]);
+    }
+
+    private static Task RefuseMethodAsync(HttpContext context, string allowed)
+    {
+        context.Response.Headers.Allow = allowed;
+        return RefuseAsync(context, StatusCodes.Status405MethodNotAllowed);
     }
 
     /// <summary>The connection ends with a refusal, so that no body is waited for.</summary>

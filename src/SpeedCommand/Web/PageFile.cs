@@ -10,6 +10,7 @@ internal sealed record PageFile(string ContentType, byte[] Bytes)
     {
         ["/"] = Read("index.html", "text/html; charset=utf-8"),
         ["/page.css"] = Read("page.css", "text/css; charset=utf-8"),
+        ["/set.js"] = Read("set.js", "text/javascript; charset=utf-8"),
         ["/page.js"] = Read("page.js", "text/javascript; charset=utf-8"),
     };
 

@@ -1,4 +1,5 @@
 using Microsoft.Extensions.Logging;
+using SpeedCommand.Controls;
 using SpeedCommand.Displaying;
 using SpeedCommand.Displays.Readings;
 using SpeedCommand.Displays.Web;
@@ -10,7 +11,7 @@ namespace SpeedCommand.Web;
 
 /// <summary>The web page as a display: each frame goes to all browsers. The page itself shows the caution to each that comes.</summary>
 internal sealed class WebPageService(
-    LatestPicture latest, CockpitSettings settings, TimeProvider time, ILoggerFactory logs, ILogger<WebPageService> log)
+    LatestPicture latest, CockpitSettings settings, ControlDesk desk, TimeProvider time, ILoggerFactory logs, ILogger<WebPageService> log)
     : DisplayLoop(latest, time, log)
 {
     /// <summary>An address may come up later than the service, a port may get free.</summary>
@@ -37,7 +38,7 @@ internal sealed class WebPageService(
             var server = new PageServer(settings.Web.Address, settings.Web.Port, logs);
             try
             {
-                await server.StartAsync(new PageApplication(Hub), stop).ConfigureAwait(false);
+                await server.StartAsync(new PageApplication(Hub, settings.Web.MaySet ? new SetRequests(desk) : null), stop).ConfigureAwait(false);
                 (_server, Address) = (server, server.Address);
                 log.LogInformation("web page: {Address}", Address);
             }
@@ -64,7 +65,7 @@ internal sealed class WebPageService(
         var steady = _steadier.Next(picture);
         if (Hub.ClientCount > 0)
         {
-            Hub.Publish(PageFrame.Event(steady, settings.Units, Environment.TickCount64));
+            Hub.Publish(PageFrame.Event(steady, settings.Units, Environment.TickCount64, settings.Web.MaySet));
         }
 
         return ValueTask.CompletedTask;

@@ -6,6 +6,7 @@ using SpeedCommand.Displays.Readings;
 using SpeedCommand.Displays.Terminal;
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Displays.Web;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Displays.Tests.Web;
@@ -52,6 +53,24 @@ public class PageFrameTests
     public void Faults_AreNamed_TheGravestFirst_AndNoneGoesUnsaid() => Assert.Equal(
         [.. FaultNames.All.Take(4).Select(pair => FaultWords.Of(pair.Key)), $"+{FaultNames.All.Count - 4} more"],
         Frame(Pictures.Nothing).GetProperty("faults").EnumerateArray().Select(fault => fault.GetString()));
+
+    [Fact] // expected words: docs/controls.md and the terminal panel's tests
+    public void Controls_StandInTheWordsOfTheOtherDisplays_AndAChangeIsSaidForAMoment()
+    {
+        var picture = Pictures.GlidingTooSlow with
+        {
+            Controls = ControlValues.Standard with { BallastKg = 80, DumpKgPerS = 0.7, LastChanged = ControlId.Ballast, LastChangedUs = Pictures.GlidingTooSlow.TimeUs },
+        };
+        var controls = Frame(picture).GetProperty("controls");
+        Assert.False(controls.GetProperty("open").GetBoolean());
+        Assert.Equal("ballast 80 kg, dumping 0.7 kg/s", Text(controls, "moment"));
+        Assert.Equal(
+            ["expected-climb: expected climb 0.0 kt, ", "ballast: ballast 80 kg, dumping 0.7 kg/s, dump", "bugs: bugs 0 %, ", "phase: phase auto, auto",
+                "qnh: QNH 1013 hPa, ", "brightness: brightness 100 %, ", "volume: volume 50 %, ", "mute: sound on, off"],
+            controls.GetProperty("stand").EnumerateArray().Select(one => $"{Text(one, "name")}: {Text(one, "text")}, {Text(one, "word")}"));
+        var later = Frame(picture with { TimeUs = picture.TimeUs + ControlWords.MomentUs });
+        Assert.Equal("", Text(later.GetProperty("controls"), "moment"));
+    }
 
     [Theory]
     [InlineData(108, "faster", 3, false)]

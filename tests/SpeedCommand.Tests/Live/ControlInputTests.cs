@@ -1,4 +1,5 @@
 using System.Buffers.Binary;
+using System.Net;
 using System.Net.Sockets;
 using System.Text;
 using Microsoft.Extensions.DependencyInjection;
@@ -15,10 +16,11 @@ using SpeedCommand.Replay.Replaying;
 using SpeedCommand.Sentences;
 using SpeedCommand.Service;
 using SpeedCommand.Settings;
+using SpeedCommand.Web;
 
 namespace SpeedCommand.Tests.Live;
 
-/// <summary>The real service with boards, a knob, a keyboard and the socket; what was recorded gives the same bytes, and a restart the same controls.</summary>
+/// <summary>The real service with boards, a knob, a keyboard, the socket and the web page; what was recorded gives the same bytes, and a restart the same controls.</summary>
 [Collection(LiveTests.Name)]
 public sealed class ControlInputTests
 {
@@ -31,7 +33,8 @@ public sealed class ControlInputTests
     {
         using var knob = new PseudoTerminal();
         using var live = new MemoryStream();
-        await using var cockpit = new LiveCockpit("Poll", controls: folder => Controls(folder, knob), sinks: new PictureLines(live));
+        await using var cockpit = new LiveCockpit("Poll", controls: folder => Controls(folder, knob),
+            web: new WebSettings(true, IPAddress.Loopback, 0, MaySet: true), sinks: new PictureLines(live));
         var socketPath = cockpit.Settings.Controls.Socket!;
         // Left over from a service that was killed: a socket that nobody answers at.
         using (var dead = new Socket(AddressFamily.Unix, SocketType.Stream, ProtocolType.Unspecified))
@@ -48,7 +51,8 @@ public sealed class ControlInputTests
             await AskKnobAsync(knob, "expected-climb 1.5 m/s\r\nballast 80 l\n\u0007noise\nballast dump\nbugs 101 %\n", 4));
         AskSocket(socketPath);
         TypeKeys(cockpit.Desk);
-        var picture = await cockpit.Pictures.WaitForAsync(picture => picture.Controls is { IsMuted: true, BallastKg: < 80 });
+        await AskPageAsync(cockpit);
+        var picture = await cockpit.Pictures.WaitForAsync(picture => picture.Controls is { IsMuted: true, BallastKg: < 80, Brightness: 0.4 });
         Assert.Equal((1.5, 0.1, FlightPhase.Climbing), (picture.ExpectedClimbMps, picture.Controls.BugsFraction, picture.Phase));
         await Task.Delay(200);
         await cockpit.StopAsync();
@@ -109,6 +113,15 @@ public sealed class ControlInputTests
         return socket;
     }
 
+    private static async Task AskPageAsync(LiveCockpit cockpit)
+    {
+        await Eventually.HoldsAsync(() => cockpit.PageAddress is not null, "the page is served");
+        using var http = new HttpClient { BaseAddress = new Uri(cockpit.PageAddress!) };
+        http.DefaultRequestHeaders.Add(SetRequests.OwnHeader, SetRequests.OwnValue);
+        using var answer = await http.PostAsync(SetRequests.Path, new StringContent("brightness 40 %"));
+        Assert.Equal("brightness 40 %\n", await answer.Content.ReadAsStringAsync());
+    }
+
     /// <summary>A keyboard as a shell leaves it: whole lines, echoed. Keys come at once, and it is left as it was.</summary>
     private static void TypeKeys(ControlDesk desk)
     {
@@ -155,7 +168,7 @@ public sealed class ControlInputTests
         {
             var desk = again.Services.GetRequiredService<ControlDesk>();
             Assert.Equal(before, desk.ToKeep());
-            Assert.Equal([ControlId.ExpectedClimb, ControlId.Ballast, ControlId.Bugs, ControlId.Phase, ControlId.Qnh, ControlId.Volume, ControlId.Mute], desk.Kept);
+            Assert.Equal([ControlId.ExpectedClimb, ControlId.Ballast, ControlId.Bugs, ControlId.Phase, ControlId.Qnh, ControlId.Brightness, ControlId.Volume, ControlId.Mute], desk.Kept);
             Assert.InRange(desk.Values.BallastKg, 70, 79.9);
         }
 

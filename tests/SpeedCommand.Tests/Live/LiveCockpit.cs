@@ -7,6 +7,7 @@ using SpeedCommand.Replay.Logs;
 using SpeedCommand.Sentences;
 using SpeedCommand.Service;
 using SpeedCommand.Settings;
+using SpeedCommand.Web;
 
 namespace SpeedCommand.Tests.Live;
 
@@ -23,7 +24,7 @@ internal sealed class LiveCockpit : IAsyncDisposable
     private bool _isStopped;
 
     public LiveCockpit(string reader, SerialTextSettings? display = null, string? staticDevice = null, Func<string, ControlSettings>? controls = null,
-        params IPictureSink[] sinks)
+        WebSettings? web = null, params IPictureSink[] sinks)
     {
         Static = new LiveBoard("static", _folder.FullName, i => TestFlightLog.Sentence($"P,{90_000 + i % 3:F1},P,STATIC"));
         Pitot = new LiveBoard("pitot", _folder.FullName, i => TestFlightLog.Sentence($"P,{600 + i % 2:F1},P,IMPACT"));
@@ -31,7 +32,7 @@ internal sealed class LiveCockpit : IAsyncDisposable
             new PortSettings("static", staticDevice ?? Static.Path, 115_200, ChecksumRule.Required),
             new PortSettings("pitot", Pitot.Path, 115_200, ChecksumRule.Required));
         settings = settings with { Serial = new SerialSettings(Enum.Parse<PortReaderKind>(reader), _folder.FullName) };
-        Settings = settings = settings with { Controls = controls?.Invoke(_folder.FullName) ?? ControlSettings.None };
+        Settings = settings = settings with { Controls = controls?.Invoke(_folder.FullName) ?? ControlSettings.None, Web = web ?? WebSettings.Standard };
         _host = CockpitService.Build(settings, null, 1, [Pictures, .. sinks]);
         _feeder = new Thread(Feed);
         Pictures.Latest = _host.Services.GetRequiredService<LatestPicture>();
@@ -40,6 +41,9 @@ internal sealed class LiveCockpit : IAsyncDisposable
     public CockpitSettings Settings { get; }
 
     public ControlDesk Desk => _host.Services.GetRequiredService<ControlDesk>();
+
+    /// <summary>Where the web page is, once it is served.</summary>
+    public string? PageAddress => _host.Services.GetServices<IHostedService>().OfType<WebPageService>().Single().Address;
 
     /// <summary>The one recording.</summary>
     public string Recording => Directory.GetFiles(_folder.FullName, "*Z-*.log").Single();

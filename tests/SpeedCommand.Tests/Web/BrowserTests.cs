@@ -1,5 +1,6 @@
 using System.Text.Json;
 using SpeedCommand.Displays.Tests;
+using SpeedCommand.Pipeline.Controls;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Tests.Web;
@@ -24,6 +25,12 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
         })
         """;
 
+    private const string LeastKey =
+        "Math.min(1000, ...[...document.querySelectorAll('#set, .control button')].filter(e => e.checkVisibility()).flatMap(e => [e.offsetWidth, e.offsetHeight]))";
+
+    private const string DoKeysFit =
+        "Math.max(0, ...buttons.map(e => e.getBoundingClientRect().bottom)) <= document.getElementById('foot').getBoundingClientRect().top";
+
     private readonly List<string> _offences = [];
     private int _views;
 
@@ -33,7 +40,7 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
     [ToolFact(Browser.Program)]
     public async Task Page_ShowsEveryState_OnEveryScreen_InBothLooks_ThenBlanksByItself()
     {
-        await using var page = await ServedPage.StartAsync();
+        await using var page = await ServedPage.StartAsync(maySet: true);
         page.Shown = Pictures.GlidingTooSlow;
         await browser.SetScreenAsync(360, 640, isBright: false);
         await browser.OpenAsync(page.Address);
@@ -50,6 +57,7 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
             await LookAsync(name);
         }
 
+        await SetAsync(page);
         page.Shown = Pictures.ClimbingTooFast;
         await browser.WaitForAsync("document.getElementById('speed').textContent === '88'");
         // What was under way for two seconds is not true any more.
@@ -80,6 +88,49 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
         await browser.EvaluateAsync("localStorage.clear()");
     }
 
+    /// <summary>The controls, opened, touched, refused, and left alone until they go.</summary>
+    private async Task SetAsync(ServedPage page)
+    {
+        const string IsOpen = "getComputedStyle(document.getElementById('controls')).display === 'grid'";
+        await browser.EvaluateAsync("document.getElementById('set').click()");
+        // A machine in a hurry must not lose the view while it is looked at.
+        await browser.EvaluateAsync("window.hand = setInterval(touch, 200)");
+        await ClickAsync("expected-climb", "+");
+        await ClickAsync("bugs", "-");
+        await browser.WaitForAsync("document.getElementById('answer').textContent === \"! bugs: expected 0 to 100 %, found '-' at 0 %\"");
+        Assert.Equal(0.5, page.Controls.ExpectedClimbMps);
+        // The longest that a control can say, and the last change not long ago.
+        page.Shown = Pictures.Doubtful with
+        {
+            Controls = ControlValues.Standard with
+            {
+                ExpectedClimbMps = 2.5,
+                ExpectedClimbSigmaMps = 0.6,
+                IsExpectedClimbAutomatic = true,
+                BallastKg = 120,
+                DumpKgPerS = 0.75,
+                IsMuted = true,
+                ForcedPhase = FlightPhase.Climbing,
+                LastChanged = ControlId.ExpectedClimb,
+                LastChangedUs = long.MaxValue / 2,
+            },
+        };
+        await browser.WaitForAsync("document.getElementById('speed').textContent === '~125'");
+        await LookAsync("set");
+        await browser.WaitForAsync("document.getElementById('answer').textContent === 'expected climb auto 2.5 m/s ±0.6'");
+        Assert.Equal(
+            ["expected-climb auto", "ballast dump", "phase climbing", "mute on"],
+            (await browser.EvaluateAsync("buttons.filter(one => one.ariaPressed === 'true').map(one => `${nameOf(one)} ${one.dataset.value}`)"))
+            .EnumerateArray().Select(one => one.GetString()));
+        await browser.EvaluateAsync($"clearInterval(hand), touchedAt -= SET_MS");
+        await browser.WaitForAsync($"!({IsOpen})");
+        await LookAsync("changed");
+        Assert.Equal("expected climb auto 2.5 m/s ±0.6", await browser.TextAsync("moment"));
+    }
+
+    private Task<JsonElement> ClickAsync(string control, string value) =>
+        browser.EvaluateAsync($"buttons.find(one => nameOf(one) === '{control}' && one.dataset.value === '{value}').click()");
+
     private static string Faults(CockpitPicture picture)
     {
         var words = FaultNames.All.Where(pair => (picture.Faults & pair.Key) != 0).Select(pair => Displays.Readings.FaultWords.Of(pair.Key)).ToList();
@@ -108,6 +159,18 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
             {
                 await browser.SetScreenAsync(width, height, isBright: look == "day");
                 await browser.WaitForAsync($"document.documentElement.dataset.look === '{look}' && innerWidth === {width}");
+                // What a glove must meet, px.
+                var least = (await browser.EvaluateAsync(LeastKey)).GetDouble();
+                if (least < 48)
+                {
+                    _offences.Add($"{name}, {screen}, {look}: a button of {least} px");
+                }
+
+                if (!(await browser.EvaluateAsync(DoKeysFit)).GetBoolean())
+                {
+                    _offences.Add($"{name}, {screen}, {look}: a button reaches into the last row");
+                }
+
                 var texts = (await browser.EvaluateAsync(TextsOnThePage)).EnumerateArray().ToList();
                 if (PictureFolder is not null)
                 {

@@ -39,6 +39,7 @@ public sealed class PageRequestTests : IAsyncLifetime, IDisposable
     [InlineData("/", "text/html")]
     [InlineData("/page.css", "text/css")]
     [InlineData("/page.js", "text/javascript")]
+    [InlineData("/set.js", "text/javascript")]
     public async Task OwnFiles_AreServed_WithHeadersThatForbidTheOutside(string path, string type)
     {
         using var answer = await _http.GetAsync(path);
@@ -59,6 +60,7 @@ public sealed class PageRequestTests : IAsyncLifetime, IDisposable
     [InlineData("POST / HTTP/1.1\r\nHost: x\r\nContent-Length: 1000000000\r\n\r\n", 405)]
     [InlineData("POST /events HTTP/1.1\r\nHost: x\r\nTransfer-Encoding: chunked\r\n\r\n", 405)]
     [InlineData("GET / HTTP/1.1\r\nHost: x\r\nContent-Length: 5\r\n\r\n", 413)]
+    [InlineData("POST /set HTTP/1.1\r\nHost: localhost\r\nX-SpeedCommand: set\r\nContent-Length: 9\r\n\r\nbugs 10 %", 404)]
     [InlineData("nonsense\r\n\r\n", 400)]
     public async Task AnythingElse_IsRefused_WithoutWaitingForABody(string request, int status) =>
         Assert.StartsWith($"HTTP/1.1 {status} ", await AskRawAsync(request), StringComparison.Ordinal);
@@ -129,6 +131,7 @@ public sealed class PageRequestTests : IAsyncLifetime, IDisposable
     {
         Assert.False(WebSettings.Standard.IsOn);
         Assert.True(IPAddress.IsLoopback(WebSettings.Standard.Address));
+        Assert.False(WebSettings.Standard.MaySet);
     }
 
     private async Task<StreamReader> OpenEventsAsync()

@@ -74,6 +74,7 @@ function show(frame) {
   showReasons(frame.reasons);
   $("faults").classList.toggle("wrong", frame.faults.length > 0);
   put("faults", frame.faults.length > 0 ? "! " + frame.faults.join(", ") : "no faults");
+  showControls(frame.controls);
 }
 
 function blank(words) {
@@ -91,6 +92,7 @@ function blank(words) {
       row.children[3].textContent = "";
     }
     $("faults").classList.add("wrong");
+    hideControls();
   }
   put("faults", words);
 }
