@@ -44,6 +44,11 @@ internal sealed class PageApplication(PageHub hub, SetRequests? sets) : IHttpApp
             context.Response.Headers[name] = value;
         }
 
+        if (!PageHost.IsOurs(context.Request.Host.Host))
+        {
+            return RefuseAsync(context, StatusCodes.Status403Forbidden);
+        }
+
         var path = context.Request.Path.Value ?? "";
         if (sets is not null && path == SetRequests.Path)
         {

@@ -1,4 +1,3 @@
-using System.Net;
 using System.Text;
 using Microsoft.AspNetCore.Http;
 using Microsoft.AspNetCore.Http.Features;
@@ -8,7 +7,8 @@ namespace SpeedCommand.Web;
 
 /// <summary>
 /// Changes of controls from the page: one line in, one line back. A page of another site that the same browser shows must not get here:
-/// it cannot send our header without asking first, which nobody answers, and it cannot hide its name or have us under a name of its own.
+/// it cannot send our header without asking first, which nobody answers, it cannot hide its name, and <see cref="PageHost"/> keeps it from
+/// having us under a name of its own.
 /// </summary>
 internal sealed class SetRequests(ControlDesk desk)
 {
@@ -63,13 +63,6 @@ internal sealed class SetRequests(ControlDesk desk)
         if (request.Headers[OwnHeader] != OwnValue)
         {
             return $"expected the header {OwnHeader}: {OwnValue}, found none";
-        }
-
-        // A name may be another site's, led to this address after its page was loaded (DNS rebinding); an address is nobody's but ours.
-        var host = request.Host.Host;
-        if (!IPAddress.TryParse(host, out _) && !host.Equals("localhost", StringComparison.OrdinalIgnoreCase))
-        {
-            return "expected a page opened by IP address or localhost, found a name";
         }
 
         var origin = request.Headers.Origin;

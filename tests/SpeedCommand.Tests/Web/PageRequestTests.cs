@@ -55,6 +55,8 @@ public sealed class PageRequestTests : IAsyncLifetime, IDisposable
     [InlineData("GET /favicon.ico HTTP/1.1\r\nHost: x\r\n\r\n", 404)]
     [InlineData("GET /../page.css/ HTTP/1.1\r\nHost: x\r\n\r\n", 404)]
     [InlineData("GET /Page.css HTTP/1.1\r\nHost: x\r\n\r\n", 404)]
+    [InlineData("GET / HTTP/1.1\r\nHost: evil.example\r\n\r\n", 403)]
+    [InlineData("GET /events HTTP/1.1\r\nHost: 127.0.0.1.evil.example:8080\r\n\r\n", 403)]
     [InlineData("HEAD / HTTP/1.1\r\nHost: x\r\n\r\n", 405)]
     [InlineData("PUT /nothing HTTP/1.1\r\nHost: x\r\nContent-Length: 9\r\n\r\n", 404)]
     [InlineData("POST / HTTP/1.1\r\nHost: x\r\nContent-Length: 1000000000\r\n\r\n", 405)]

@@ -82,6 +82,8 @@ public sealed class SetRequestTests : IAsyncLifetime, IDisposable
     [InlineData("evil.example", null, 403)]
     [InlineData("localhost.evil.example", null, 403)]
     [InlineData("127.0.0.1.evil.example", null, 403)]
+    [InlineData("cockpit.local", "http://cockpit.local", 200)]
+    [InlineData("cockpit.local.evil.example", null, 403)]
     public async Task PageOfAnotherSite_ChangesNothing(string host, string? origin, int status)
     {
         var answer = await SetAsync("bugs 10 %", request =>
