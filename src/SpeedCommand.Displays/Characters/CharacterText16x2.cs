@@ -43,9 +43,8 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
     {
         var isClimbing = picture.Phase == FlightPhase.Climbing;
         var hold = Readout.Of(picture.HoldIndicatedMps, Units.Speed, Trust.Airspeed);
-        line.Add(isClimbing ? "CLIMB^" : hold.IsKnown && picture.LimitedBy != LimitedBy.None ? "LIMIT " : "GLIDE ");
+        line.Add(isClimbing ? "CLIMB^ " : hold.IsKnown && picture.LimitedBy != LimitedBy.None ? "LIMIT  " : "GLIDE  ");
         line.Add(hold, 3, false);
-        line.Add(" ");
         line.Add(Units.Speed.Symbol);
         if (picture.Faults != Faults.None)
         {
@@ -60,10 +59,10 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
         switch (correction.Direction)
         {
             case CorrectionDirection.SpeedUp:
-                var length = Words(words, correction.IsDoubtful ? "?+" : "+", correction.Amount);
+                var length = Words(words, "+", correction.Amount);
                 line.MoveTo(Frame.Columns - MostStrokes - 1 - length);
                 line.Add(words[..length]);
-                line.Add(" ");
+                line.Add(correction.IsDoubtful ? Readout.PlainDoubtMark : " ");
                 line.AddRun('>', Strokes(correction, MostStrokes));
                 break;
             case CorrectionDirection.SlowDown:
@@ -71,7 +70,8 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
                 line.MoveTo(MostStrokes - strokes);
                 line.AddRun('<', strokes);
                 line.Add(" ");
-                line.Add(words[..Words(words, correction.IsDoubtful ? "?-" : "-", correction.Amount)]);
+                line.Add(words[..Words(words, "-", correction.Amount)]);
+                line.Add(correction.IsDoubtful ? Readout.PlainDoubtMark : "");
                 break;
             case CorrectionDirection.OnSpeed:
                 line.Add("==  on speed  ==");

@@ -47,9 +47,8 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
         var hold = Readout.Of(picture.HoldIndicatedMps, Units.Speed, Trust.Airspeed);
         var isLimited = !isClimbing && hold.IsKnown && picture.LimitedBy != LimitedBy.None;
         line.Add(isClimbing ? "CLIMB^" : "GLIDE ");
-        line.Add(isLimited ? "limit" : " hold");
+        line.Add(isLimited ? "limit " : " hold ");
         line.Add(hold, 3, false);
-        line.Add(" ");
         line.Add(Units.Speed.Symbol);
     }
 
@@ -86,32 +85,33 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
         var climb = Readout.Of(picture.ClimbMps, Units.Vertical, Trust.Vertical);
         if (picture.Phase == FlightPhase.Climbing)
         {
-            line.Add("up");
+            line.Add("up ");
             line.Add(climb, 4, true);
-            line.Add(" avg");
+            line.Add("avg ");
             line.Add(Readout.Of(picture.AverageClimbMps, Units.Vertical, Trust.Vertical), 4, true);
         }
         else
         {
-            line.Add("air");
+            line.Add("air ");
             line.Add(Readout.Of(picture.NettoMps, Units.Vertical, Trust.Vertical), 4, true);
-            line.Add(" up");
+            line.Add("up ");
             line.Add(climb, 4, true);
         }
 
-        line.Add(" ");
         line.Add(Units.Vertical.Symbol);
     }
 
     private void WriteDensity(AsciiLine line, in CockpitPicture picture)
     {
-        line.Add("DA");
+        line.Add("DA ");
         line.Add(Readout.Of(picture.DensityAltitudeM, Units.Height, Trust.Height), 5, false);
-        line.Add(" ");
         line.Add(Units.Height.Symbol);
-        line.MoveTo(11);
         var temperature = Readout.Of(picture.TemperatureK, Units.Temperature, Trust.Temperature);
-        line.Add(temperature, 3, false);
+        // No space before the unit, but room for the mark, and for "std" behind.
+        line.MoveTo(temperature.IsDoubtful ? 11 : 12);
+        Span<char> text = stackalloc char[16];
+        line.Add(text[..temperature.Write(text, false)], 3);
+        line.Add(temperature.IsDoubtful ? Readout.PlainDoubtMark : "");
         line.Add(Units.Temperature.Symbol);
         if (temperature.IsKnown && picture.TemperatureSource == TemperatureSource.Standard)
         {

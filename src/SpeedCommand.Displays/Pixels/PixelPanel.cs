@@ -114,7 +114,7 @@ public sealed class PixelPanel(DisplayUnits units)
         SmallFont.Draw(page, CaptionLeft, DigitTop, units.Speed.Symbol);
         if (hold.IsDoubtful)
         {
-            SmallFont.Draw(page, CaptionLeft + 8, DigitTop + 8, "~", 2);
+            SmallFont.Draw(page, CaptionLeft + 8, DigitTop + 8, Readout.DoubtMark, 2);
         }
 
         if (!isClimbing && hold.IsKnown && picture.LimitedBy != LimitedBy.None)

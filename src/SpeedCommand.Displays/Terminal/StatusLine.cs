@@ -48,7 +48,7 @@ internal static class StatusLine
 
         void Add(string words, Readout readout, DisplayUnit unit, bool isSigned)
         {
-            text.Append(words).Append(' ').Append(readout.IsDoubtful ? "~" : string.Empty).Append(readout.Text(isSigned));
+            text.Append(words).Append(' ').Append(readout.MarkedText(isSigned));
             if (readout.IsKnown)
             {
                 text.Append(' ').Append(unit.Label);

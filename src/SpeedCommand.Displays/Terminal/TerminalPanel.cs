@@ -102,7 +102,7 @@ public static class TerminalPanel
         }
 
         var now = Readout.Of(picture.IndicatedAirspeedMps, unit, Trust.Airspeed);
-        grid.Put(top + height - 1, left, $"flying {now.Text()} {unit.Label}", now.IsKnown ? Tone.Normal : Tone.Faint);
+        grid.Put(top + height - 1, left, $"flying {now.MarkedText()} {unit.Label}", now.IsKnown && !now.IsDoubtful ? Tone.Normal : Tone.Faint);
         for (var row = top; isClimbing && row < top + height; row++)
         {
             grid.Put(row, 1, '^', Tone.Climb);

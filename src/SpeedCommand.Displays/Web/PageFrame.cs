@@ -56,7 +56,7 @@ public static class PageFrame
     /// <summary>A number's text with its mark, its unit, and whether it is doubtful or blank.</summary>
     internal static void WriteNumber(Utf8JsonWriter json, Readout readout, DisplayUnit unit, bool isSigned)
     {
-        json.WriteString("text", (readout.IsDoubtful ? "~" : "") + readout.Text(isSigned));
+        json.WriteString("text", readout.MarkedText(isSigned));
         json.WriteString("unit", unit.Label);
         json.WriteBoolean("doubtful", readout.IsDoubtful);
         json.WriteBoolean("known", readout.IsKnown);
