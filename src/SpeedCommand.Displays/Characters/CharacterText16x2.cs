@@ -35,7 +35,7 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
         }
         else
         {
-            WriteCorrection(line, correction);
+            WriteCorrection(line, correction, HoldWords.IsTooUncertain(picture));
         }
     }
 
@@ -53,7 +53,7 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
     }
 
     /// <summary>Faster is to the right and slower to the left, so that the place tells the direction before it is read.</summary>
-    private void WriteCorrection(AsciiLine line, SpeedCorrection correction)
+    private void WriteCorrection(AsciiLine line, SpeedCorrection correction, bool isTooUncertain)
     {
         Span<char> words = stackalloc char[16];
         switch (correction.Direction)
@@ -77,7 +77,7 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
                 line.Add("==  on speed  ==");
                 break;
             default:
-                line.Add("       --");
+                line.Add(isTooUncertain ? " " + HoldWords.TooUncertain : "       --");
                 break;
         }
     }

@@ -21,7 +21,7 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
     protected override void WriteLines(in CockpitPicture picture, Span<byte> frame)
     {
         WriteHold(new AsciiLine(Frame.Line(frame, 0)), picture);
-        WriteCorrection(new AsciiLine(Frame.Line(frame, 1)), SpeedCorrection.Of(picture, Units));
+        WriteCorrection(new AsciiLine(Frame.Line(frame, 1)), SpeedCorrection.Of(picture, Units), HoldWords.IsTooUncertain(picture));
         if (ControlWords.ShortMoment(picture, Units) is { Length: > 0 } moment)
         {
             new AsciiLine(Frame.Line(frame, 2)).Add(moment);
@@ -53,7 +53,7 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
     }
 
     /// <summary>Faster is to the right and slower to the left, so that the place tells the direction before it is read.</summary>
-    private void WriteCorrection(AsciiLine line, SpeedCorrection correction)
+    private void WriteCorrection(AsciiLine line, SpeedCorrection correction, bool isTooUncertain)
     {
         Span<char> words = stackalloc char[16];
         switch (correction.Direction)
@@ -75,7 +75,7 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
                 line.Add("====  on speed  ====");
                 break;
             default:
-                line.Add("         --");
+                line.Add(isTooUncertain ? "   " + HoldWords.TooUncertain : "         --");
                 break;
         }
     }

@@ -15,6 +15,7 @@ internal static class StatusLine
         var text = new StringBuilder(200);
         text.Append(TimeText(picture.TimeUs)).Append(picture.Phase == FlightPhase.Climbing ? " climbing" : " gliding");
         Add(", hold", Readout.Of(picture.HoldIndicatedMps, units.Speed, Trust.Airspeed), units.Speed, false);
+        text.Append(HoldWords.IsTooUncertain(picture) ? $" ({HoldWords.TooUncertain})" : string.Empty);
         Add(", flying", Readout.Of(picture.IndicatedAirspeedMps, units.Speed, Trust.Airspeed), units.Speed, false);
         var correction = SpeedCorrection.Of(picture, units);
         if (correction.Direction != CorrectionDirection.Unknown)

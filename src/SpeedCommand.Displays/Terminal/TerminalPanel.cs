@@ -94,7 +94,7 @@ public static class TerminalPanel
         BlockDigits.Draw(grid, top, layout.DigitLeft, height, (number.Length > 3 ? Readout.BlankText : number).PadLeft(3), tone);
 
         grid.Put(top, left, $"{unit.Label} to hold", Tone.Strong);
-        grid.Put(top + 1, left, isClimbing ? "minimum sink" : "speed to fly", Tone.Normal);
+        grid.Put(top + 1, left, HoldWords.Source(picture), Tone.Normal);
         grid.Put(top + 2, left, hold.IsDoubtful ? $"roughly, {hold.SigmaText()}" : hold.SigmaText(), Tone.Faint);
         if (!isClimbing && hold.IsKnown)
         {

@@ -68,7 +68,7 @@ public static class PageFrame
         var hold = Readout.Of(picture.HoldIndicatedMps, unit, Trust.Airspeed);
         json.WriteStartObject("hold");
         WriteNumber(json, hold, unit, false);
-        json.WriteString("source", isClimbing ? "minimum sink" : "speed to fly");
+        json.WriteString("source", HoldWords.Source(picture));
         json.WriteString("sigma", hold.IsDoubtful ? $"roughly, {hold.SigmaText()}" : hold.SigmaText());
         json.WriteString("limit", !isClimbing && hold.IsKnown ? TerminalPanel.LimitWords(picture.LimitedBy) : "");
         json.WriteEndObject();
