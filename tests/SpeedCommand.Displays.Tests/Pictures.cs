@@ -110,11 +110,10 @@ internal static class Pictures
         "climbing-too-fast" => ClimbingTooFast,
         "rough-air-limit" => AtRoughAirLimit,
         "doubtful" => Doubtful,
-        "too-uncertain" => TooUncertain,
         "no-airspeed" => NoAirspeed,
         _ => Nothing,
     };
 
     public static IReadOnlyList<string> Names { get; } =
-        ["gliding-too-slow", "climbing-too-fast", "rough-air-limit", "doubtful", "too-uncertain", "no-airspeed", "nothing"];
+        ["gliding-too-slow", "climbing-too-fast", "rough-air-limit", "doubtful", "no-airspeed", "nothing"];
 }

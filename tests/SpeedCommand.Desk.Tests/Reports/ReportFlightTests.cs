@@ -41,8 +41,8 @@ public sealed class ReportFlightTests : IDisposable
     [Fact]
     public void Climbs_GainWhatWasGained()
     {
-        Assert.Equal(2, _flight.Climbs.Count);
-        Assert.All(_flight.Climbs, climb =>
+        Assert.Equal(2, _flight.Circlings.Count);
+        Assert.All(_flight.Circlings, climb =>
         {
             var gained = TruthAt(climb.EndS).EnergyHeightM - TruthAt(climb.StartS).EnergyHeightM;
             Assert.Equal(gained, climb.GainM, 8.0);
