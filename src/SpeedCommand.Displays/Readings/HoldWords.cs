@@ -19,6 +19,7 @@ public static class HoldWords
     /// <returns>For example "minimum sink".</returns>
     public static string Source(in CockpitPicture picture) =>
         IsTooUncertain(picture) ? TooUncertain
+        : !picture.HoldIndicatedMps.IsKnown && picture.Faults == Faults.None ? "not known yet"
         : picture.Phase == FlightPhase.Climbing ? "minimum sink"
         : "speed to fly";
 }

@@ -20,6 +20,15 @@ public class HoldWordsTests
         [.. Shown(Pictures.Doubtful), .. Shown(Pictures.NoAirspeed), .. Shown(Pictures.TooUncertain with { HoldIndicatedMps = new Gauge(34, 5, 0) })],
         text => Assert.DoesNotContain("too uncertain", text));
 
+    [Fact] // the estimators have just begun anew: no sensor failed, and there is no number yet
+    public void NotKnownYet_IsSaid_UnlessAFaultSaysWhy()
+    {
+        var unknown = Pictures.GlidingTooSlow with { HoldIndicatedMps = Gauge.Blank };
+        Assert.Equal("not known yet", HoldWords.Source(unknown));
+        Assert.Equal("speed to fly", HoldWords.Source(unknown with { Faults = Faults.AirspeedSilent }));
+        Assert.Equal("minimum sink", HoldWords.Source(Pictures.ClimbingTooFast));
+    }
+
     [Fact]
     public void TooUncertain_IsSaidInPixelsToo()
     {
