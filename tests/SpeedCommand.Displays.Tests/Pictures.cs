@@ -75,6 +75,13 @@ internal static class Pictures
         RelativeNettoMps = new Gauge(-1.68, 0.7, 0.05),
     };
 
+    /// <summary>Just out of the thermal: nothing is broken, but the speed to hold is worth nothing yet.</summary>
+    public static CockpitPicture TooUncertain => GlidingTooSlow with
+    {
+        SpeedToFlyIndicatedMps = new Gauge(123 / 3.6, 5.1, 0.05),
+        HoldIndicatedMps = new Gauge(123 / 3.6, 5.1, 0.05),
+    };
+
     /// <summary>No airspeed: everything that rests on it is blank.</summary>
     public static CockpitPicture NoAirspeed => GlidingTooSlow with
     {

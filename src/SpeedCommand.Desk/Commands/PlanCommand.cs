@@ -59,7 +59,7 @@ internal static class PlanCommand
             }
             else
             {
-                Console.Out.Write(PlanTable.Write(conditions, prospect, plan, chosen));
+                Console.Out.Write(PlanTable.Write(conditions, prospect, plan, chosen, options.IsGiven(parsed, "--climb")));
             }
 
             return (int)ExitStatus.Done;

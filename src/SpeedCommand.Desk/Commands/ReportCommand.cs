@@ -74,7 +74,7 @@ internal static class ReportCommand
     {
         using var recording = input.Open();
         var settings = input.ReadSettings(recording.GliderFile, recording.Flown, out var streams);
-        var flight = new ReportFlight(RecordingFile.StemOf(input.Path), settings);
+        var flight = new ReportFlight(RecordingFile.StemOf(input.Path), settings) { StartUtc = recording.StartUtc };
         recording.Start(settings, flight, streams).RunToEnd();
 
         flight.End();

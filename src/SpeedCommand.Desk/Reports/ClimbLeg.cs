@@ -1,6 +1,8 @@
+using SpeedCommand.Estimation.Command;
+
 namespace SpeedCommand.Desk.Reports;
 
-/// <summary>One climb, from the picture that called it one to the last.</summary>
+/// <summary>One stretch of circling, from the picture that called it climbing to the last.</summary>
 /// <param name="StartS">Its begin, s since the start.</param>
 /// <param name="EndS">Its end, s.</param>
 /// <param name="StartHeightM">Pressure altitude at its begin, m; NaN when not known.</param>
@@ -10,4 +12,7 @@ namespace SpeedCommand.Desk.Reports;
 internal sealed record ClimbLeg(double StartS, double EndS, double StartHeightM, double GainM, double AverageMps, double TurningShare)
 {
     public double DurationS => EndS - StartS;
+
+    /// <summary>Whether it counts as a climb, by the rule for the climb expected next; a search in sink says nothing about the day's climbs.</summary>
+    public bool IsClimb => DurationS >= LastClimbs.LeastS && GainM >= LastClimbs.LeastGainM;
 }

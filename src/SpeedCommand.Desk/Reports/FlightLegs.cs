@@ -14,7 +14,7 @@ internal static class FlightLegs
     /// <summary>Load factor of a 20-degree bank, where the cockpit begins to see a turn too.</summary>
     private const double TurningLoad = 1.064;
 
-    public static IReadOnlyList<ClimbLeg> Climbs(IReadOnlyList<ReportMoment> moments) =>
+    public static IReadOnlyList<ClimbLeg> Circlings(IReadOnlyList<ReportMoment> moments) =>
         [.. Stretches(moments, FlightPhase.Climbing).Select(Climb)];
 
     public static IReadOnlyList<GlideLeg> Glides(IReadOnlyList<ReportMoment> moments) =>

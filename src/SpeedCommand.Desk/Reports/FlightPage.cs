@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Xml.Linq;
 using SpeedCommand.Displays.Units;
 
@@ -10,7 +11,7 @@ internal sealed class FlightPage(ReportFlight flight, DisplayUnits units)
     private readonly FlightTables _tables = new(flight, units);
 
     public string Html() => ReportHtml.Page(
-        $"Flight {flight.Name}", $"{flight.Settings.Glider.Name}. Times are minutes and seconds since the start of the recording.",
+        $"Flight {flight.Name}", $"{flight.Settings.Glider.Name}{Start()}. Times are minutes and seconds since the start of the recording.",
         _tables.Facts(),
         flight.Remarks.Select(ReportHtml.Quiet),
         ReportHtml.Section("Phases", Phases()),
@@ -22,6 +23,8 @@ internal sealed class FlightPage(ReportFlight flight, DisplayUnits units)
         ReportHtml.Section("Glides", _tables.Glides()),
         ReportHtml.Section("Faults", FaultLine(), _tables.Faults()),
         ReportHtml.Section("Settings used", _tables.Settings()));
+
+    private string Start() => flight.StartUtc is { } start ? start.UtcDateTime.ToString(", yyyy-MM-dd, 'recording from' HH:mm:ss 'UTC'", CultureInfo.InvariantCulture) : "";
 
     private XElement Phases() => ReportHtml.Figure("Climbing and gliding, as the cockpit saw it",
         $"{flight.Climbs.Count} climbs and {flight.Glides.Count} glides; the tables below list them.", "phases", StripFigure.OfPhases(flight.Moments, _endMinutes));

@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Xml.Linq;
 using SpeedCommand.Displays.Readings;
 using SpeedCommand.Displays.Units;
+using SpeedCommand.Estimation.Command;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Desk.Reports;
@@ -25,14 +26,15 @@ internal sealed class FlightTables(ReportFlight flight, DisplayUnits units)
             ("faults", flight.Faults.Select(one => one.Fault).Distinct().Count().ToString(CultureInfo.InvariantCulture)));
     }
 
-    public object Climbs() => flight.Climbs.Count == 0
-        ? ReportHtml.Quiet("No climb was noticed.")
+    public object Climbs() => flight.Circlings.Count == 0
+        ? ReportHtml.Quiet("No circling was noticed.")
         : ReportHtml.Table(
-            "Gain and average count speed as the height it is worth. A turn is a load above that of a 20-degree bank.",
-            ["start", "time", $"from, {units.Height.Label}", $"gain, {units.Height.Label}", $"average, {units.Vertical.Label}", "turning, %"],
-            flight.Climbs.Select(one => (IReadOnlyList<object>)
+            FormattableString.Invariant($"A climb is circling of at least {LastClimbs.LeastS:F0} s that gained {ReportNumbers.In(units.Height, LastClimbs.LeastGainM)} {units.Height.Label}; less is circling, and no part of the average climb. ")
+            + "Gain and average count speed as the height it is worth. A turn is a load above that of a 20-degree bank.",
+            ["start", "kind", "time", $"from, {units.Height.Label}", $"gain, {units.Height.Label}", $"average, {units.Vertical.Label}", "turning, %"],
+            flight.Circlings.Select(one => (IReadOnlyList<object>)
             [
-                ReportNumbers.Time(one.StartS), ReportNumbers.Time(one.DurationS), ReportNumbers.In(units.Height, one.StartHeightM),
+                ReportNumbers.Time(one.StartS), one.IsClimb ? "climb" : "circling", ReportNumbers.Time(one.DurationS), ReportNumbers.In(units.Height, one.StartHeightM),
                 ReportNumbers.In(units.Height, one.GainM, isSigned: true), ReportNumbers.In(units.Vertical, one.AverageMps, isSigned: true),
                 ReportNumbers.Plain(one.TurningShare * Percent, 0),
             ]));
@@ -72,8 +74,8 @@ internal sealed class FlightTables(ReportFlight flight, DisplayUnits units)
             ["climb expected", With(units.Vertical, settings.ExpectedClimbMps)],
             ["stall margin", Number(settings.StallMargin * Percent, "%")],
             ["safety height", With(units.Height, settings.SafetyHeightM)],
-            ["temperature offset", Number(settings.TemperatureOffsetK, "K")],
-            ["thermometer recovery", Number(settings.ThermometerRecovery, "")],
+            ["temperature offset", $"{ReportNumbers.Plain(units.Temperature.ConvertDifference(settings.TemperatureOffsetK), 1, isSigned: true)} {units.Temperature.Label}"],
+            ["thermometer recovery", Number(settings.ThermometerRecovery * Percent, "%")],
             ["lag of static, impact, probe", $"{Number(settings.StaticLagS, "s")}, {Number(settings.ImpactLagS, "s")}, {Number(settings.ProbeLagS, "s")}"],
             ["phase", settings.ForcedPhase switch { FlightPhase.Climbing => "climbing", FlightPhase.Gliding => "gliding", _ => "automatic" }],
         ], isWords: true);

@@ -1,5 +1,6 @@
 using SpeedCommand.Flight.Targets;
 using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Health;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Desk.Reports;
@@ -13,12 +14,17 @@ internal sealed class ReportFlight(string name, FlightSettings settings) : IPict
     private readonly List<ReportMoment> _moments = [];
     private readonly List<FaultStretch> _faults = [];
     private readonly double[] _since = new double[FaultNames.All.Count];
+    private StartupSilence _startup;
     private Faults _present;
+    private Faults _latest;
     private double _beforeS;
 
     public string Name => name;
 
     public FlightSettings Settings => settings;
+
+    /// <summary>Time of day at the start of the recording; null when it does not tell.</summary>
+    public DateTimeOffset? StartUtc { get; init; }
 
     /// <summary>What the recording itself says should be known before its numbers.</summary>
     public List<string> Remarks { get; } = [];
@@ -30,7 +36,11 @@ internal sealed class ReportFlight(string name, FlightSettings settings) : IPict
 
     public double DurationS => _moments.Count == 0 ? 0 : _moments[^1].TimeS;
 
-    public IReadOnlyList<ClimbLeg> Climbs => FlightLegs.Climbs(_moments);
+    /// <summary>Every stretch of circling, climb or not.</summary>
+    public IReadOnlyList<ClimbLeg> Circlings => FlightLegs.Circlings(_moments);
+
+    /// <summary>Those that count as climbs.</summary>
+    public IReadOnlyList<ClimbLeg> Climbs => [.. Circlings.Where(one => one.IsClimb)];
 
     public IReadOnlyList<GlideLeg> Glides => FlightLegs.Glides(_moments);
 
@@ -38,12 +48,21 @@ internal sealed class ReportFlight(string name, FlightSettings settings) : IPict
     public void OnPicture(in CockpitPicture picture)
     {
         _moments.Add(ReportMoment.Of(picture, settings, _targets));
-        Follow(picture.Faults, picture.TimeS);
+        Follow(_startup.Counted(picture.TimeUs, picture.Faults), picture.TimeS);
+        _latest = picture.Faults;
         _beforeS = picture.TimeS;
     }
 
     /// <summary>Ends the flight and with it the faults that are still there.</summary>
-    public void End() => Follow(Pipeline.Picture.Faults.None, _beforeS);
+    public void End()
+    {
+        if (!_startup.HasData)
+        {
+            Follow(_latest, _beforeS);
+        }
+
+        Follow(Pipeline.Picture.Faults.None, _beforeS);
+    }
 
     private void Follow(Faults faults, double timeS)
     {

@@ -28,13 +28,13 @@ internal ref struct AsciiLine
         }
     }
 
-    /// <summary>Appends a number, led by a space, or by a question mark when it is doubtful.</summary>
+    /// <summary>Appends a number and a space, or the mark in the space's place when it is doubtful.</summary>
     public void Add(Readout readout, int width, bool isSigned)
     {
         Span<char> text = stackalloc char[16];
         var length = readout.Write(text, isSigned);
-        Add(readout.IsDoubtful ? "?" : " ");
         Add(text[..length], width);
+        Add(readout.IsDoubtful ? Readout.PlainDoubtMark : " ");
     }
 
     /// <summary>Puts ASCII text against the right edge.</summary>

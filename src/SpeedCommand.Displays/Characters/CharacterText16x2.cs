@@ -35,7 +35,7 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
         }
         else
         {
-            WriteCorrection(line, correction);
+            WriteCorrection(line, correction, HoldWords.IsTooUncertain(picture));
         }
     }
 
@@ -43,9 +43,8 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
     {
         var isClimbing = picture.Phase == FlightPhase.Climbing;
         var hold = Readout.Of(picture.HoldIndicatedMps, Units.Speed, Trust.Airspeed);
-        line.Add(isClimbing ? "CLIMB^" : hold.IsKnown && picture.LimitedBy != LimitedBy.None ? "LIMIT " : "GLIDE ");
+        line.Add(isClimbing ? "CLIMB^ " : hold.IsKnown && picture.LimitedBy != LimitedBy.None ? "LIMIT  " : "GLIDE  ");
         line.Add(hold, 3, false);
-        line.Add(" ");
         line.Add(Units.Speed.Symbol);
         if (picture.Faults != Faults.None)
         {
@@ -54,16 +53,16 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
     }
 
     /// <summary>Faster is to the right and slower to the left, so that the place tells the direction before it is read.</summary>
-    private void WriteCorrection(AsciiLine line, SpeedCorrection correction)
+    private void WriteCorrection(AsciiLine line, SpeedCorrection correction, bool isTooUncertain)
     {
         Span<char> words = stackalloc char[16];
         switch (correction.Direction)
         {
             case CorrectionDirection.SpeedUp:
-                var length = Words(words, correction.IsDoubtful ? "?+" : "+", correction.Amount);
+                var length = Words(words, "+", correction.Amount);
                 line.MoveTo(Frame.Columns - MostStrokes - 1 - length);
                 line.Add(words[..length]);
-                line.Add(" ");
+                line.Add(correction.IsDoubtful ? Readout.PlainDoubtMark : " ");
                 line.AddRun('>', Strokes(correction, MostStrokes));
                 break;
             case CorrectionDirection.SlowDown:
@@ -71,13 +70,14 @@ public sealed class CharacterText16x2(DisplayUnits units) : CharacterText(Charac
                 line.MoveTo(MostStrokes - strokes);
                 line.AddRun('<', strokes);
                 line.Add(" ");
-                line.Add(words[..Words(words, correction.IsDoubtful ? "?-" : "-", correction.Amount)]);
+                line.Add(words[..Words(words, "-", correction.Amount)]);
+                line.Add(correction.IsDoubtful ? Readout.PlainDoubtMark : "");
                 break;
             case CorrectionDirection.OnSpeed:
                 line.Add("==  on speed  ==");
                 break;
             default:
-                line.Add("       --");
+                line.Add(isTooUncertain ? " " + HoldWords.TooUncertain : "       --");
                 break;
         }
     }

@@ -21,7 +21,7 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
     protected override void WriteLines(in CockpitPicture picture, Span<byte> frame)
     {
         WriteHold(new AsciiLine(Frame.Line(frame, 0)), picture);
-        WriteCorrection(new AsciiLine(Frame.Line(frame, 1)), SpeedCorrection.Of(picture, Units));
+        WriteCorrection(new AsciiLine(Frame.Line(frame, 1)), SpeedCorrection.Of(picture, Units), HoldWords.IsTooUncertain(picture));
         if (ControlWords.ShortMoment(picture, Units) is { Length: > 0 } moment)
         {
             new AsciiLine(Frame.Line(frame, 2)).Add(moment);
@@ -47,14 +47,13 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
         var hold = Readout.Of(picture.HoldIndicatedMps, Units.Speed, Trust.Airspeed);
         var isLimited = !isClimbing && hold.IsKnown && picture.LimitedBy != LimitedBy.None;
         line.Add(isClimbing ? "CLIMB^" : "GLIDE ");
-        line.Add(isLimited ? "limit" : " hold");
+        line.Add(isLimited ? "limit " : " hold ");
         line.Add(hold, 3, false);
-        line.Add(" ");
         line.Add(Units.Speed.Symbol);
     }
 
     /// <summary>Faster is to the right and slower to the left, so that the place tells the direction before it is read.</summary>
-    private void WriteCorrection(AsciiLine line, SpeedCorrection correction)
+    private void WriteCorrection(AsciiLine line, SpeedCorrection correction, bool isTooUncertain)
     {
         Span<char> words = stackalloc char[16];
         switch (correction.Direction)
@@ -76,7 +75,7 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
                 line.Add("====  on speed  ====");
                 break;
             default:
-                line.Add("         --");
+                line.Add(isTooUncertain ? "   " + HoldWords.TooUncertain : "         --");
                 break;
         }
     }
@@ -86,32 +85,33 @@ public sealed class CharacterText20x4(DisplayUnits units) : CharacterText(Charac
         var climb = Readout.Of(picture.ClimbMps, Units.Vertical, Trust.Vertical);
         if (picture.Phase == FlightPhase.Climbing)
         {
-            line.Add("up");
+            line.Add("up ");
             line.Add(climb, 4, true);
-            line.Add(" avg");
+            line.Add("avg ");
             line.Add(Readout.Of(picture.AverageClimbMps, Units.Vertical, Trust.Vertical), 4, true);
         }
         else
         {
-            line.Add("air");
+            line.Add("air ");
             line.Add(Readout.Of(picture.NettoMps, Units.Vertical, Trust.Vertical), 4, true);
-            line.Add(" up");
+            line.Add("up ");
             line.Add(climb, 4, true);
         }
 
-        line.Add(" ");
         line.Add(Units.Vertical.Symbol);
     }
 
     private void WriteDensity(AsciiLine line, in CockpitPicture picture)
     {
-        line.Add("DA");
+        line.Add("DA ");
         line.Add(Readout.Of(picture.DensityAltitudeM, Units.Height, Trust.Height), 5, false);
-        line.Add(" ");
         line.Add(Units.Height.Symbol);
-        line.MoveTo(11);
         var temperature = Readout.Of(picture.TemperatureK, Units.Temperature, Trust.Temperature);
-        line.Add(temperature, 3, false);
+        // No space before the unit, but room for the mark, and for "std" behind.
+        line.MoveTo(temperature.IsDoubtful ? 11 : 12);
+        Span<char> text = stackalloc char[16];
+        line.Add(text[..temperature.Write(text, false)], 3);
+        line.Add(temperature.IsDoubtful ? Readout.PlainDoubtMark : "");
         line.Add(Units.Temperature.Symbol);
         if (temperature.IsKnown && picture.TemperatureSource == TemperatureSource.Standard)
         {

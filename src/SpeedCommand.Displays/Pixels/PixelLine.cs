@@ -46,21 +46,29 @@ internal ref struct PixelLine
     {
         Span<char> text = stackalloc char[40];
         var length = Write(text, label, readout, isSigned);
-        if (length + 1 + unit.Length < _right - _left)
+        // The mark takes the place of the space before the unit.
+        var unitAt = length + (readout.IsDoubtful ? 0 : 1);
+        if (unitAt + unit.Length < _right - _left)
         {
-            text[length] = ' ';
-            unit.CopyTo(text[(length + 1)..]);
-            length += 1 + unit.Length;
+            text[length..unitAt].Fill(' ');
+            unit.CopyTo(text[unitAt..]);
+            length = unitAt + unit.Length;
         }
 
         AddRight(text[..length]);
     }
 
-    /// <summary>A doubtful number is led by the mark instead of a space.</summary>
+    /// <summary>Label, number, and the mark of a doubtful one.</summary>
     private static int Write(Span<char> text, scoped ReadOnlySpan<char> label, Readout readout, bool isSigned)
     {
         label.CopyTo(text);
-        text[label.Length] = readout.IsDoubtful ? '~' : ' ';
-        return label.Length + 1 + readout.Write(text[(label.Length + 1)..], isSigned);
+        text[label.Length] = ' ';
+        var length = label.Length + 1 + readout.Write(text[(label.Length + 1)..], isSigned);
+        if (readout.IsDoubtful)
+        {
+            Readout.DoubtMark.CopyTo(text[length++..]);
+        }
+
+        return length;
     }
 }

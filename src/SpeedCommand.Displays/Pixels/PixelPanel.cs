@@ -36,7 +36,15 @@ public sealed class PixelPanel(DisplayUnits units)
         var isClimbing = picture.Phase == FlightPhase.Climbing;
         DrawHeader(page, picture, isClimbing);
         DrawHold(page, picture, isClimbing);
-        StickBar.Draw(page, BarTop, BarHeight, SpeedCorrection.Of(picture, units), units.Speed);
+        if (HoldWords.IsTooUncertain(picture))
+        {
+            SmallFont.Draw(page, (PixelPage.Width - SmallFont.WidthOf(HoldWords.TooUncertain.Length, 1)) / 2, BarTop + 4, HoldWords.TooUncertain);
+        }
+        else
+        {
+            StickBar.Draw(page, BarTop, BarHeight, SpeedCorrection.Of(picture, units), units.Speed);
+        }
+
         if (picture.Faults == Faults.None)
         {
             DrawReasons(page, picture, isClimbing);
@@ -114,7 +122,7 @@ public sealed class PixelPanel(DisplayUnits units)
         SmallFont.Draw(page, CaptionLeft, DigitTop, units.Speed.Symbol);
         if (hold.IsDoubtful)
         {
-            SmallFont.Draw(page, CaptionLeft + 8, DigitTop + 8, "~", 2);
+            SmallFont.Draw(page, CaptionLeft + 8, DigitTop + 8, Readout.DoubtMark, 2);
         }
 
         if (!isClimbing && hold.IsKnown && picture.LimitedBy != LimitedBy.None)

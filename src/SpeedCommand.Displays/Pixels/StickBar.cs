@@ -59,7 +59,7 @@ internal static class StickBar
         }
     }
 
-    /// <summary>Signed, so that the number alone tells the direction too; when doubtful the mark takes the sign's place.</summary>
+    /// <summary>Signed, so that the number alone tells the direction too; a doubtful one has its mark instead, for there is no room for both.</summary>
     private static void DrawAmount(PixelPage page, int top, int side, SpeedCorrection correction)
     {
         if (correction.Amount > LargestAmount)
@@ -68,10 +68,10 @@ internal static class StickBar
         }
 
         Span<char> text = stackalloc char[8];
-        text[0] = correction.IsDoubtful ? '~' : side > 0 ? '+' : '-';
-        _ = correction.Amount.TryFormat(text[1..], out var digits, "0", System.Globalization.CultureInfo.InvariantCulture);
-        var width = SmallFont.WidthOf(digits + 1, 2);
+        ReadOnlySpan<char> format = correction.IsDoubtful ? "0" + Readout.DoubtMark : side > 0 ? "+0" : "-0";
+        _ = correction.Amount.TryFormat(text, out var length, format, System.Globalization.CultureInfo.InvariantCulture);
+        var width = SmallFont.WidthOf(length, 2);
         // A number of one digit keeps to the edge of its side.
-        SmallFont.Draw(page, side > 0 ? PixelPage.Width - width : 0, top, text[..(digits + 1)], 2);
+        SmallFont.Draw(page, side > 0 ? PixelPage.Width - width : 0, top, text[..length], 2);
     }
 }

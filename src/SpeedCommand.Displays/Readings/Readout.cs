@@ -13,6 +13,12 @@ public readonly record struct Readout
     /// <summary>What a blank number looks like.</summary>
     public const string BlankText = "--";
 
+    /// <summary>The mark right after a doubtful number: before it, a minus sign would make a second wave of it.</summary>
+    public const string DoubtMark = "~";
+
+    /// <summary>The same for characters that common character generators have.</summary>
+    public const string PlainDoubtMark = "?";
+
     private static readonly double[] Steps = [0.1, 0.2, 0.5, 1, 2, 5, 10, 20, 50, 100, 200, 500, 1000];
 
     private Readout(double value, double step, double sigma, bool isDoubtful)
@@ -110,6 +116,11 @@ public readonly record struct Readout
         Span<char> buffer = stackalloc char[16];
         return new string(buffer[..Write(buffer, isSigned)]);
     }
+
+    /// <summary>The number, or <see cref="BlankText"/>, with <see cref="DoubtMark"/> after it when it is doubtful.</summary>
+    /// <param name="isSigned">Whether to write a plus sign before a positive number.</param>
+    /// <returns>The text, without unit.</returns>
+    public string MarkedText(bool isSigned = false) => IsDoubtful ? Text(isSigned) + DoubtMark : Text(isSigned);
 
     /// <summary>The uncertainty as text ("±0.3"), or nothing when it is not known or would not show.</summary>
     /// <returns>The text, without unit.</returns>

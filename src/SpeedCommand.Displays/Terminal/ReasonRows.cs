@@ -86,14 +86,15 @@ internal static class ReasonRows
 
     private readonly struct Column(TextGrid grid, int left, int labelWidth, int end)
     {
-        /// <summary>Label, number, unit, uncertainty. The uncertainty is left out whole where it has no room.</summary>
+        /// <summary>Label, number, mark (in the place of the space, so that the digits stay where they are), unit, uncertainty. The uncertainty is left out whole where it has no room.</summary>
         public void Row(int row, string label, Readout readout, DisplayUnit unit, bool isVertical, bool isStrong = false)
         {
             var tone = !readout.IsKnown || readout.IsDoubtful ? Tone.Faint : isStrong ? Tone.Strong : Tone.Normal;
-            var number = (readout.IsDoubtful ? "~" : string.Empty) + readout.Text(isVertical);
+            var number = readout.Text(isVertical);
             var unitLeft = left + labelWidth + NumberWidth + 1;
             grid.Put(row, left, label, isStrong ? Tone.Strong : Tone.Normal);
             grid.Put(row, unitLeft - 1 - number.Length, number, tone);
+            grid.Put(row, unitLeft - 1, readout.IsDoubtful ? Readout.DoubtMark : string.Empty, tone);
             grid.Put(row, unitLeft, unit.Label, Tone.Faint);
             var sigma = isVertical ? readout.SigmaText() : string.Empty;
             var sigmaLeft = unitLeft + unit.Label.Length + 1;

@@ -15,6 +15,7 @@ internal static class StatusLine
         var text = new StringBuilder(200);
         text.Append(TimeText(picture.TimeUs)).Append(picture.Phase == FlightPhase.Climbing ? " climbing" : " gliding");
         Add(", hold", Readout.Of(picture.HoldIndicatedMps, units.Speed, Trust.Airspeed), units.Speed, false);
+        text.Append(HoldWords.IsTooUncertain(picture) ? $" ({HoldWords.TooUncertain})" : string.Empty);
         Add(", flying", Readout.Of(picture.IndicatedAirspeedMps, units.Speed, Trust.Airspeed), units.Speed, false);
         var correction = SpeedCorrection.Of(picture, units);
         if (correction.Direction != CorrectionDirection.Unknown)
@@ -48,7 +49,7 @@ internal static class StatusLine
 
         void Add(string words, Readout readout, DisplayUnit unit, bool isSigned)
         {
-            text.Append(words).Append(' ').Append(readout.IsDoubtful ? "~" : string.Empty).Append(readout.Text(isSigned));
+            text.Append(words).Append(' ').Append(readout.MarkedText(isSigned));
             if (readout.IsKnown)
             {
                 text.Append(' ').Append(unit.Label);

@@ -32,7 +32,7 @@ public static class TerminalPanel
         var grid = new TextGrid(style.Width, style.Height);
         if (style.Page.Count > 0)
         {
-            DrawPage(grid, style.Page);
+            DrawPage(grid, style);
             return grid.ToText(style.Look);
         }
 
@@ -51,16 +51,54 @@ public static class TerminalPanel
         LeaningBar.Draw(grid, layout.BarTop, layout.BarHeight, SpeedCorrection.Of(picture, style.Units), style.Units.Speed);
         ReasonRows.Draw(grid, layout, picture, style.Units);
         DrawHealth(grid, layout.HealthRow, picture.Faults);
-        grid.Put(MomentRow, 1, moment, Tone.Strong);
+        DrawMoment(grid, layout, moment);
         return grid.ToText(style.Look);
     }
 
-    private static void DrawPage(TextGrid grid, IReadOnlyList<string> page)
+    /// <summary>A page too long for the rows goes on in a second column; its first line is the heading.</summary>
+    private static void DrawPage(TextGrid grid, PanelStyle style)
     {
-        for (var row = 0; row < page.Count; row++)
+        var (page, left) = (style.Page, 1);
+        var rows = page.Count <= style.Height ? page.Count - 1 : page.Count / 2;
+        grid.Put(0, left, page[0], Tone.Normal);
+        for (var first = 1; first < page.Count; first += rows)
         {
-            grid.Put(row, 1, page[row], Tone.Normal);
+            for (var row = 0; row < rows && first + row < page.Count; row++)
+            {
+                // What the column before it left over is wiped first.
+                grid.Put(row + 1, left, new string(' ', grid.Width), Tone.Normal);
+                grid.Put(row + 1, left, page[first + row], Tone.Normal);
+            }
+
+            left += grid.Width / 2;
         }
+    }
+
+    /// <summary>
+    /// Below the header. What is too long takes a second row, broken at a space: the one below, or the header's where the digits begin
+    /// there, for a cut digit is another one. What is longer than both loses its middle, since the end says what was found.
+    /// </summary>
+    private static void DrawMoment(TextGrid grid, PanelLayout layout, string moment)
+    {
+        var room = grid.Width - 2;
+        if (moment.Length > 2 * room)
+        {
+            moment = string.Concat(moment.AsSpan(0, room - 4), "... ", moment.AsSpan(moment.Length - room));
+        }
+
+        if (moment.Length <= room)
+        {
+            grid.Put(MomentRow, 1, moment, Tone.Strong);
+            return;
+        }
+
+        var space = moment.LastIndexOf(' ', room);
+        var end = space > moment.Length - room - 1 ? space + 1 : moment.Length - room;
+        var row = layout.DigitTop > MomentRow + 1 ? MomentRow : MomentRow - 1;
+        grid.FillRow(row, ' ', Tone.Normal);
+        grid.FillRow(row + 1, ' ', Tone.Normal);
+        grid.Put(row, 1, moment.AsSpan(0, end), Tone.Strong);
+        grid.Put(row + 1, 1, moment.AsSpan(end), Tone.Strong);
     }
 
     /// <summary>One line of plain text, for output that is not a terminal.</summary>
@@ -94,7 +132,7 @@ public static class TerminalPanel
         BlockDigits.Draw(grid, top, layout.DigitLeft, height, (number.Length > 3 ? Readout.BlankText : number).PadLeft(3), tone);
 
         grid.Put(top, left, $"{unit.Label} to hold", Tone.Strong);
-        grid.Put(top + 1, left, isClimbing ? "minimum sink" : "speed to fly", Tone.Normal);
+        grid.Put(top + 1, left, HoldWords.Source(picture), Tone.Normal);
         grid.Put(top + 2, left, hold.IsDoubtful ? $"roughly, {hold.SigmaText()}" : hold.SigmaText(), Tone.Faint);
         if (!isClimbing && hold.IsKnown)
         {
@@ -102,7 +140,7 @@ public static class TerminalPanel
         }
 
         var now = Readout.Of(picture.IndicatedAirspeedMps, unit, Trust.Airspeed);
-        grid.Put(top + height - 1, left, $"flying {now.Text()} {unit.Label}", now.IsKnown ? Tone.Normal : Tone.Faint);
+        grid.Put(top + height - 1, left, $"flying {now.MarkedText()} {unit.Label}", now.IsKnown && !now.IsDoubtful ? Tone.Normal : Tone.Faint);
         for (var row = top; isClimbing && row < top + height; row++)
         {
             grid.Put(row, 1, '^', Tone.Climb);

@@ -58,7 +58,7 @@ public static class PageFrame
     /// <summary>A number's text with its mark, its unit, and whether it is doubtful or blank.</summary>
     internal static void WriteNumber(Utf8JsonWriter json, Readout readout, DisplayUnit unit, bool isSigned)
     {
-        json.WriteString("text", (readout.IsDoubtful ? "~" : "") + readout.Text(isSigned));
+        json.WriteString("text", readout.MarkedText(isSigned));
         json.WriteString("unit", unit.Label);
         json.WriteBoolean("doubtful", readout.IsDoubtful);
         json.WriteBoolean("known", readout.IsKnown);
@@ -70,7 +70,7 @@ public static class PageFrame
         var hold = Readout.Of(picture.HoldIndicatedMps, unit, Trust.Airspeed);
         json.WriteStartObject("hold");
         WriteNumber(json, hold, unit, false);
-        json.WriteString("source", isClimbing ? "minimum sink" : "speed to fly");
+        json.WriteString("source", HoldWords.Source(picture));
         json.WriteString("sigma", hold.IsDoubtful ? $"roughly, {hold.SigmaText()}" : hold.SigmaText());
         json.WriteString("limit", !isClimbing && hold.IsKnown ? TerminalPanel.LimitWords(picture.LimitedBy) : "");
         json.WriteEndObject();

@@ -37,6 +37,11 @@ public sealed class IgcRecording : IRecording
     public string GliderFile => "";
 
     /// <inheritdoc/>
+    public DateTimeOffset? StartUtc => Header.Date is { } date && double.IsFinite(Survey.StartTimeOfDayS)
+        ? new DateTimeOffset(date, TimeOnly.MinValue, TimeSpan.Zero).AddSeconds(Survey.StartTimeOfDayS)
+        : null;
+
+    /// <inheritdoc/>
     public FlownSettings Flown => FlownSettings.None;
 
     /// <inheritdoc/>

@@ -10,6 +10,9 @@ namespace SpeedCommand.Replay.Igc;
 public sealed record IgcSurvey(
     long FixCount, long IntervalUs, bool HasPressure, bool HasIndicated, bool HasTrue, bool HasTemperature)
 {
+    /// <summary>UTC time of day of the first fix, s; NaN when there is none.</summary>
+    public double StartTimeOfDayS { get; private init; } = double.NaN;
+
     private const long BinUs = 100_000;
 
     /// <summary>Bins of a tenth of a second up to a minute; longer intervals share the last one.</summary>
@@ -28,9 +31,14 @@ public sealed record IgcSurvey(
         var intervals = new long[Bins];
         var (count, lastUs) = (0L, 0L);
         var (pressure, indicated, @true, temperature) = (false, false, false, false);
+        var startS = double.NaN;
         while (reader.TryRead(out var fix))
         {
-            if (count++ > 0)
+            if (count++ == 0)
+            {
+                startS = fix.TimeOfDayS;
+            }
+            else
             {
                 intervals[Math.Min((fix.TimeUs - lastUs + BinUs / 2) / BinUs, Bins - 1)]++;
             }
@@ -42,7 +50,7 @@ public sealed record IgcSurvey(
             temperature |= double.IsFinite(fix.OutsideTemperatureK);
         }
 
-        return new IgcSurvey(count, Median(intervals, count - 1) * BinUs, pressure, indicated, @true, temperature);
+        return new IgcSurvey(count, Median(intervals, count - 1) * BinUs, pressure, indicated, @true, temperature) { StartTimeOfDayS = startS };
     }
 
     private static int Median(long[] bins, long total)

@@ -1,3 +1,4 @@
+using SpeedCommand.Pipeline.Health;
 using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Replay.Replaying;
@@ -5,6 +6,10 @@ namespace SpeedCommand.Replay.Replaying;
 /// <summary>What a whole flight comes to, picked up from its pictures.</summary>
 public sealed class FlightTotals : IPictureSink
 {
+    private StartupSilence _startup;
+    private Faults _counted;
+    private Faults _latest;
+
     /// <summary>Time of the last picture, microseconds since the start.</summary>
     public long TimeUs { get; private set; }
 
@@ -14,14 +19,15 @@ public sealed class FlightTotals : IPictureSink
     /// <summary>Greatest total-energy climb averaged over 30 s, m/s; NaN when none was known.</summary>
     public double MaxAverageClimbMps { get; private set; } = double.NaN;
 
-    /// <summary>Every fault that occurred.</summary>
-    public Faults Faults { get; private set; }
+    /// <summary>Every fault that occurred; the silence of a sensor that had yet to speak up at the start is none.</summary>
+    public Faults Faults => _startup.HasData ? _counted : _counted | _latest;
 
     /// <inheritdoc/>
     public void OnPicture(in CockpitPicture picture)
     {
         TimeUs = picture.TimeUs;
-        Faults |= picture.Faults;
+        _latest = picture.Faults;
+        _counted |= _startup.Counted(picture.TimeUs, picture.Faults);
         MaxPressureAltitudeM = Greater(MaxPressureAltitudeM, picture.PressureAltitudeM.Value);
         MaxAverageClimbMps = Greater(MaxAverageClimbMps, picture.AverageClimbMps.Value);
     }

@@ -11,6 +11,9 @@ public interface IRecording : IDisposable
     /// <summary>File name of the glider the recording names; empty when it names none.</summary>
     string GliderFile { get; }
 
+    /// <summary>Time of day at its start; null when it does not tell.</summary>
+    DateTimeOffset? StartUtc { get; }
+
     /// <summary>The settings and the glider the recording was flown with, as far as it tells them.</summary>
     FlownSettings Flown { get; }
 

@@ -10,6 +10,8 @@ internal sealed class LogRecording(FlightLogReader log) : IRecording
 {
     public string GliderFile => log.Header.GliderFile;
 
+    public DateTimeOffset? StartUtc => log.Header.StartUtc;
+
     public FlownSettings Flown => log.Header.Flown;
 
     public IReadOnlyList<LogProblem> Problems => log.Problems;

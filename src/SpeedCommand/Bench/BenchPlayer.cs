@@ -25,6 +25,9 @@ internal sealed class BenchPlayer(
     /// <summary>Lines written in full.</summary>
     public long LinesSent { get; private set; }
 
+    /// <summary>How fast the flight was really played, as a multiple of its own time; NaN before its end.</summary>
+    public double ReachedPace { get; private set; } = double.NaN;
+
     /// <summary>Whether the whole flight was played.</summary>
     public bool IsComplete { get; private set; }
 
@@ -52,7 +55,7 @@ internal sealed class BenchPlayer(
     private async Task PlayAsync(CancellationToken stop)
     {
         using var records = FlightLogFile.Open(flight.LogPath);
-        var startUs = clock.NowUs;
+        var (startUs, began, lastUs) = (clock.NowUs, time.GetTimestamp(), flight.Header.FromUs);
         while (TryReadLine(records, out var timeUs, out var streamName, out var length))
         {
             await WaitUntilAsync(startUs + timeUs - flight.Header.FromUs, stop).ConfigureAwait(false);
@@ -67,7 +70,10 @@ internal sealed class BenchPlayer(
             }
 
             LinesSent++;
+            lastUs = timeUs;
         }
+
+        ReachedPace = (lastUs - flight.Header.FromUs) / time.GetElapsedTime(began).TotalMicroseconds;
     }
 
     private bool TryReadLine(FlightLogReader records, out long timeUs, out string streamName, out int length)

@@ -6,9 +6,13 @@ namespace SpeedCommand.Controls;
 /// The keys of the terminal panel: bytes in, changes of controls out, and what the panel says meanwhile. A small letter is less, a
 /// capital more. Sequences of function and arrow keys are passed over.
 /// </summary>
-internal sealed class PanelKeys(ControlDesk desk, TimeProvider time)
+/// <param name="desk">Where changes go.</param>
+/// <param name="time">The clock of the moments.</param>
+/// <param name="hasSound">Whether the settings have sound: without, its keys say that they change nothing to be heard.</param>
+internal sealed class PanelKeys(ControlDesk desk, TimeProvider time, bool hasSound = true)
 {
-    private const char Help = '?', Entry = ':', Escape = '\u001b', Backspace = '\b', Delete = '\u007f';
+    private const char Help = '?', Entry = ':', EntryCursor = '_', Escape = '\u001b', Backspace = '\b', Delete = '\u007f';
+    private const string NoSound = "sound is off in the settings (sound.active)";
     private static readonly TimeSpan NoticeTime = TimeSpan.FromSeconds(4);
 
     /// <summary>The page of keys hides the speed to hold, so it goes by itself.</summary>
@@ -60,7 +64,7 @@ internal sealed class PanelKeys(ControlDesk desk, TimeProvider time)
         {
             lock (_gate)
             {
-                return _entryLength >= 0 ? $"{Entry} {_entry.AsSpan(0, _entryLength)}_" : !_isHelp && time.GetElapsedTime(_since) < NoticeTime ? _notice : "";
+                return _entryLength >= 0 ? $"{Entry} {_entry.AsSpan(0, _entryLength)}{EntryCursor}" : !_isHelp && time.GetElapsedTime(_since) < NoticeTime ? _notice : "";
             }
         }
     }
@@ -181,10 +185,14 @@ internal sealed class PanelKeys(ControlDesk desk, TimeProvider time)
         }
     }
 
+    private static bool IsOfSound(string line) =>
+        ControlText.TryRead(line, out var request, out _) && request.Control is ControlId.Volume or ControlId.Mute;
+
     /// <summary>What was done, the picture says by itself; what was not, is said here.</summary>
     private void Ask(string line)
     {
         var isDone = desk.TryAnswer(line, ControlSource.Key, out var message);
-        Say(isDone && ControlCatalogue.Find(line.AsSpan().Trim(' ')) is null ? "" : message);
+        var isQuestion = ControlCatalogue.Find(line.AsSpan().Trim(' ')) is not null;
+        Say(!isDone || isQuestion ? message : !hasSound && IsOfSound(line) ? NoSound : "");
     }
 }

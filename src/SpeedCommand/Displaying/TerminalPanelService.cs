@@ -15,7 +15,7 @@ internal sealed class TerminalPanelService(
 {
     private const int StandardInput = 0;
 
-    private readonly PanelKeys _keys = new(desk, time);
+    private readonly PanelKeys _keys = new(desk, time, settings.Sound.IsOn);
     private readonly SpeedSteadier _steadier = new(settings.Units.Speed);
 
     /// <summary>What was kept from before the start is said once, with the first picture: a pilot must know of water that is not there.</summary>

@@ -1,3 +1,4 @@
+using SpeedCommand.Pipeline.Health;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports;
 
@@ -14,9 +15,11 @@ internal sealed class LatestPicture(IReadOnlyList<PortState> ports) : IPictureSi
     private CockpitPicture _picture;
     private long _count;
     private Faults _recorderFault;
+    private Faults _faultsSeen;
+    private StartupSilence _startup;
 
-    /// <summary>Every fault that any picture of this flight has named.</summary>
-    public Faults FaultsSeen { get; private set; }
+    /// <summary>Every fault that any picture of this flight has named; the silence of a sensor that had yet to speak up at the start is none.</summary>
+    public Faults FaultsSeen => _startup.HasData ? _faultsSeen : _faultsSeen | _picture.Faults;
 
     /// <summary>From now on every picture names the recorder's fault, or no longer; the pipeline knows nothing of recorders.</summary>
     public void SetRecorder(bool isStopped)
@@ -50,7 +53,7 @@ internal sealed class LatestPicture(IReadOnlyList<PortState> ports) : IPictureSi
         {
             _picture = picture with { Faults = faults | _recorderFault };
             _count++;
-            FaultsSeen |= _picture.Faults;
+            _faultsSeen |= _startup.Counted(_picture.TimeUs, _picture.Faults);
             foreach (var bell in _bells)
             {
                 if (bell.CurrentCount == 0)

@@ -40,6 +40,15 @@ public sealed class PlanCommandTests(ReferenceGlider glider) : IClassFixture<Ref
         Assert.Equal("100.0", rows[^1][4]);
     }
 
+    [Fact] // 1500 m are 4921 ft; who forgets --climb must see what the plan took it for
+    public void Table_BeginsAtTheTop_AndSaysThatNoClimbWasGiven()
+    {
+        var text = glider.Text("plan", "--spread", "1.5m/s", "--spacing", "8km", "--top", "1500m", "--units", "aviation");
+        Assert.Matches(@" ind\. .*\n +4921 .*\n +4500 ", text);
+        Assert.Contains("no --climb given", text);
+        Assert.DoesNotContain("no --climb given", glider.Text("plan", Prospect));
+    }
+
     [Theory]
     [InlineData(2, "--climb: expected a mean climb above 0", "--climb", "0m/s", "--spread", "0m/s", "--spacing", "8km", "--top", "1500m")]
     [InlineData(2, "--spread: expected a number with a unit", "--climb", "2m/s", "--spread", "much", "--spacing", "8km", "--top", "1500m")]

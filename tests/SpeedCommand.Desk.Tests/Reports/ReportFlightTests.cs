@@ -1,5 +1,8 @@
 using SpeedCommand.Desk.Commands;
 using SpeedCommand.Desk.Reports;
+using SpeedCommand.Displays.Units;
+using SpeedCommand.Pipeline;
+using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Simulation.Truth;
 
@@ -38,8 +41,8 @@ public sealed class ReportFlightTests : IDisposable
     [Fact]
     public void Climbs_GainWhatWasGained()
     {
-        Assert.Equal(2, _flight.Climbs.Count);
-        Assert.All(_flight.Climbs, climb =>
+        Assert.Equal(2, _flight.Circlings.Count);
+        Assert.All(_flight.Circlings, climb =>
         {
             var gained = TruthAt(climb.EndS).EnergyHeightM - TruthAt(climb.StartS).EnergyHeightM;
             Assert.Equal(gained, climb.GainM, 8.0);
@@ -65,11 +68,47 @@ public sealed class ReportFlightTests : IDisposable
         });
     }
 
-    [Fact]
-    public void Faults_AreThoseOfTheReplay()
+    [Fact] // the thermometer speaks up a moment after the pressures; a flight that never hears a sensor has its faults all the same
+    public void Faults_SensorsYetToSpeakUp_AreNone()
     {
-        var fault = Assert.Single(_flight.Faults);
-        Assert.Equal(Pipeline.Picture.Faults.TemperatureSilent, fault.Fault);
-        Assert.InRange(fault.EndS, 0.1, 2);
+        Assert.Empty(_flight.Faults);
+        var silent = Flown(Enumerable.Repeat(CockpitPicture.Blank(0, Pipeline.Picture.Faults.StaticSilent | Pipeline.Picture.Faults.AirspeedSilent
+            | Pipeline.Picture.Faults.TemperatureSilent), 10));
+        Assert.Equal(3, silent.Faults.Count);
+    }
+
+    [Fact] // 150 s at +1 m/s, and 150 s of looking for a thermal in sink
+    public void Circling_InSink_IsNoClimb_AndSpoilsNoAverage()
+    {
+        var flight = Flown(Legs((FlightPhase.Climbing, 1), (FlightPhase.Gliding, -1), (FlightPhase.Climbing, -1)));
+        Assert.Equal([150, -150], flight.Circlings.Select(one => Math.Round(one.GainM)));
+        Assert.Equal(150, Assert.Single(flight.Climbs).GainM, 6);
+        var page = new FlightPage(flight, DisplayUnits.American).Html();
+        Assert.Contains("<dt>climbs</dt><dd>1</dd>", page);
+        // 1 m/s is 1.94384 kt; an offset of 0.5 K is one of 0.9 °F.
+        Assert.Contains("<dt>average climb</dt><dd>1.9 kt</dd>", page);
+        Assert.Contains("<td>circling</td><td>2:30</td>", page);
+        Assert.Contains("<td>+0.9 °F</td>", page);
+        Assert.Contains("<td>70 %</td>", page);
+        Assert.Contains(", 2026-06-14, recording from 09:05:07 UTC.", page);
+    }
+
+    private static IEnumerable<CockpitPicture> Legs(params (FlightPhase Phase, double ClimbMps)[] legs) => legs.SelectMany(leg => Enumerable.Repeat(
+        CockpitPicture.Blank(0, Pipeline.Picture.Faults.None) with { Phase = leg.Phase, ClimbMps = new Gauge(leg.ClimbMps, 0.1, 0) }, 1500));
+
+    private ReportFlight Flown(IEnumerable<CockpitPicture> pictures)
+    {
+        var flight = new ReportFlight("made", _flight.Settings with { TemperatureOffsetK = 0.5, ThermometerRecovery = 0.7 })
+        {
+            StartUtc = new DateTimeOffset(2026, 6, 14, 9, 5, 7, TimeSpan.Zero),
+        };
+        var timeUs = 0L;
+        foreach (var picture in pictures)
+        {
+            flight.OnPicture(picture with { TimeUs = timeUs += PipelineBounds.PicturePeriodUs });
+        }
+
+        flight.End();
+        return flight;
     }
 }

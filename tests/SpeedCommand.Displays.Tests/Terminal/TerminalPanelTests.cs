@@ -174,6 +174,9 @@ public class TerminalPanelTests
         Assert.Equal(4, string.Concat(doubtful.Page()).Count(c => c == '~'));
         Assert.Contains("roughly, ±8", string.Concat(doubtful.Page()));
         Assert.DoesNotContain('~', string.Concat(sure.Page()));
+        // A mark before a sign is read as two marks.
+        Assert.Contains("-2.0~m/s", string.Concat(doubtful.Page()));
+        Assert.DoesNotMatch("~ ?[-+0-9]", string.Concat(doubtful.Page()) + TerminalPanel.Plain(Pictures.Doubtful, DisplayUnits.Metric));
     }
 
     [Fact]

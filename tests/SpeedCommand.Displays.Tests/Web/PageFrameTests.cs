@@ -35,18 +35,18 @@ public class PageFrameTests
         var frame = Frame(picture);
         foreach (var reason in frame.GetProperty("reasons").EnumerateArray())
         {
-            var row = $"{Regex.Escape(Text(reason, "label"))} +{Regex.Escape(Text(reason, "text"))} {Regex.Escape(Text(reason, "unit"))} ?{Regex.Escape(Text(reason, "sigma"))}";
+            var row = $"{Regex.Escape(Text(reason, "label"))} +{Regex.Escape(Text(reason, "text"))}[ ]?{Regex.Escape(Text(reason, "unit"))} ?{Regex.Escape(Text(reason, "sigma"))}";
             // A number too long for its column runs over its label there.
-            Assert.True(Text(reason, "text").Length > 5 || Regex.IsMatch(panel, row), $"not on the panel: {row}\n{panel}");
+            Assert.True(Text(reason, "text").TrimEnd('~').Length > 5 || Regex.IsMatch(panel, row), $"not on the panel: {row}\n{panel}");
         }
 
-        Assert.Contains($"flying {Text(frame.GetProperty("flying"), "text").TrimStart('~')} kt", panel);
+        Assert.Contains($"flying {Text(frame.GetProperty("flying"), "text")} kt", panel);
         Assert.Contains(Text(frame.GetProperty("turn"), "words"), panel);
         Assert.Contains(Text(frame.GetProperty("hold"), "limit"), panel);
         Assert.Contains(Text(frame, "phase").ToUpperInvariant(), panel);
         Assert.Contains(Text(frame, "time"), panel);
         var hold = Readout.Of(picture.HoldIndicatedMps, Panel.Units.Speed, Trust.Airspeed);
-        Assert.Equal((hold.IsDoubtful ? "~" : "") + hold.Text(), Text(frame.GetProperty("hold"), "text"));
+        Assert.Equal(hold.Text() + (hold.IsDoubtful ? "~" : ""), Text(frame.GetProperty("hold"), "text"));
     }, iter: 200, threads: 1);
 
     [Fact]

@@ -1,5 +1,8 @@
 using System.Text;
 using SpeedCommand.Controls;
+using SpeedCommand.Displays.Terminal;
+using SpeedCommand.Displays.Units;
+using SpeedCommand.Pipeline.Picture;
 
 namespace SpeedCommand.Tests.Controls;
 
@@ -64,6 +67,38 @@ public sealed class PanelKeysTests : IDisposable
         _desk.Advance(4);
         Assert.Equal("", _keys.Notice);
     }
+
+    [Theory]
+    [InlineData("v")]
+    [InlineData("m")]
+    [InlineData(":volume 20 %\r")]
+    public void SoundOffInTheSettings_IsSaid(string typed)
+    {
+        var keys = new PanelKeys(_desk.Desk, _desk.Time, hasSound: false);
+        keys.Take(Encoding.ASCII.GetBytes(typed));
+        Assert.Equal("sound is off in the settings (sound.active)", keys.Notice);
+        keys.Take("B"u8);
+        Assert.Equal("", keys.Notice);
+    }
+
+    [Theory] // "found ..." is what the pilot has to see
+    [InlineData(60, 16)]
+    [InlineData(80, 24)]
+    public void KeysAndAnswers_FitThePanel(int width, int height)
+    {
+        Type("?");
+        var page = Shown(width, height);
+        Assert.All(PanelKeys.All, key => Assert.Contains($" {key.Key}  {key.Meaning[..9]}", page));
+        Type("x:qnh 99999 furlongs above the sea\r");
+        var answer = _keys.Notice;
+        Assert.EndsWith("found '99999 furlongs above the sea'", answer);
+        Assert.Contains("above the sea'", Shown(width, height));
+        Type(":" + new string('x', 59) + "z");
+        Assert.Contains("xz_", Shown(width, height));
+    }
+
+    private string Shown(int width, int height) => TerminalPanel.Render(
+        CockpitPicture.Blank(0, Faults.None), new PanelStyle(width, height, PanelLook.Text, DisplayUnits.Metric) { Notice = _keys.Notice, Page = _keys.Page });
 
     [Fact]
     public void GivenUpLine_DoesNothing()
