@@ -39,6 +39,7 @@ internal static class ScreensCommand
 
     private static void Run(string logs, string folder, DisplayUnits units)
     {
+        DeskOutput.MakeFolder("--out", folder);
         List<ScreenMoment> moments = [.. Phases(Path.Combine(logs, "demo.log"), units), .. Faults(Path.Combine(logs, "faults"), units)];
         foreach (var missing in PhaseMoments.Names.Except(moments.Select(moment => moment.Name)))
         {
