@@ -19,6 +19,7 @@ public sealed class OutputGuardTests : IDisposable
         File.WriteAllText(PathOf("settings.csv"), """{ "glider": "glider.svg" }""");
         File.WriteAllText(PathOf("bad.log.gz"), "no gzip");
         Directory.CreateDirectory(PathOf("dir"));
+        Directory.CreateDirectory(PathOf("faults"));
         File.CreateSymbolicLink(PathOf("d.jsonl"), PathOf("d.log"));
     }
 
@@ -36,7 +37,7 @@ public sealed class OutputGuardTests : IDisposable
     [InlineData(2, "--plot: expected another file than that of --out", "fit", "@/d.log", "--glider", "@/glider.txt", "--out", "@/x.svg", "--plot", "@/x.svg")]
     [InlineData(2, "--out: expected another file than the log", "spoil", "@/d.log", "--plan", "silent", "--seed", "1", "--out", "@/d.jsonl")]
     [InlineData(2, "--out: expected a folder, found the file '@/d.log'", "report", "@/d.log", "--out", "@/d.log")]
-    [InlineData(2, "--out: expected a folder, found the file '@/d.log'", "screens", "--out", "@/d.log")]
+    [InlineData(2, "--out: expected a folder, found the file '@/d.log'", "screens", "--logs", "@", "--out", "@/d.log")]
     [InlineData(74, "--plot: expected a file that can be written, found '@/nope/x.png': there is no folder", "compare", "@/d.log", "--against", "@/settings.csv", "--plot", "@/nope/x.png")]
     [InlineData(74, "--out: expected a file that can be written, found '@/nope/x.json'", "fit", "@/d.log", "--glider", "@/glider.txt", "--out", "@/nope/x.json")]
     [InlineData(2, "LOG: expected a flight log, found ''", "export", "", "--to", "x.csv")]
