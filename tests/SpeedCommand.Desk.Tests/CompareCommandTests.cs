@@ -64,6 +64,18 @@ public sealed class CompareCommandTests : IDisposable
         Assert.Equal(4, output.TrimEnd().Split('\n').Length);
     }
 
+    /// <summary>A recorder's file ends with one picture more, which comes only when its end is found.</summary>
+    [Fact]
+    public void RecordersFile_IsComparedToItsLastPicture()
+    {
+        var (igc, stored) = (PathOf("flight.igc"), PathOf("flight.jsonl"));
+        File.WriteAllLines(igc, ["AXXXABC", "HFDTE140626",
+            .. Enumerable.Range(0, 20).Select(second => FormattableString.Invariant($"B1000{second:00}5030000N00830000EA{1000 + second:00000}{1041 + second:00000}"))]);
+        Assert.Equal(0, DeskConsole.Run("export", igc, "--glider", "tern-18.json", "--to", stored).Status);
+        var (status, output, _) = DeskConsole.RunToText("compare", igc, "--glider", "tern-18.json", "--against", stored);
+        Assert.Equal((0, $"{File.ReadAllLines(stored).Length} pictures compared: equal\n"), (status, output));
+    }
+
     [Theory]
     [InlineData(66, "--against: expected a settings file or stored output", "--against", "nowhere.json")]
     [InlineData(2, "--plot: expected a file name ending in .png or .svg", "--against", "x.json", "--plot", "x.gif")]

@@ -44,7 +44,7 @@ public sealed class SpoilCommandTests : IDisposable
     [Theory]
     [InlineData(66, "--plan: expected a file or one of bad-day", "GOOD", "--plan", "no-such", "--seed", "1", "--out", "x.log")]
     [InlineData(66, "LOG: expected a file", "no-such.log", "--plan", "silent", "--seed", "1", "--out", "x.log")]
-    [InlineData(2, "--out: expected another file than LOG", "GOOD", "--plan", "silent", "--seed", "1", "--out", "GOOD")]
+    [InlineData(2, "--out: expected another file than the log", "GOOD", "--plan", "silent", "--seed", "1", "--out", "GOOD")]
     [InlineData(2, "--seed", "GOOD", "--plan", "silent", "--out", "x.log")]
     [InlineData(74, "no/such/folder", "GOOD", "--plan", "silent", "--seed", "1", "--out", "no/such/folder/x.log")]
     public void Spoil_WrongUse_OneLineAndItsStatus(int expected, string message, params string[] args)

@@ -95,7 +95,10 @@ public sealed partial class CommandLineTests : IDisposable
     [InlineData(78, "/: expected a settings file, found a folder", "check", "--settings", "/")]
     [InlineData(2, "--pace: expected max or a number from 0.1 to 1000, found 'fast'", "replay", "a.log", "--pace", "fast")]
     [InlineData(78, "--settings: expected a settings file, found none here or at ", "run", "--with", "glider=marram-15.json")]
-    [InlineData(74, "/no-such-folder/x.jsonl", "replay", "demo.log", "--out", "/no-such-folder/x.jsonl")]
+    [InlineData(2, "--out: expected a file, found the folder 'gliders'", "replay", "demo.log", "--out", "gliders")]
+    [InlineData(2, "--sound: expected a file, found ''", "replay", "demo.log", "--sound", "")]
+    [InlineData(66, "gliders: expected a flight log, found a folder", "replay", "gliders")]
+    [InlineData(74, "--out: expected a file that can be written, found '/no-such-folder/x.jsonl': there is no folder '/no-such-folder'", "replay", "demo.log", "--out", "/no-such-folder/x.jsonl")]
     public async Task BadInput_GivesItsStatus_AndOneLineThatNamesIt(int exitStatus, string message, params string[] args)
     {
         var outcome = await RunAsync(args);

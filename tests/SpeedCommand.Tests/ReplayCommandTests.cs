@@ -99,7 +99,7 @@ public sealed class ReplayCommandTests : IDisposable
         Assert.Equal(44 + 119 * 4800, bytes.Length);
         Assert.Contains(bytes.Skip(44), one => one != 0);
         var (status, _, errors) = await RunAsync("replay", flight, "--sound", flight, "--glider", "marram-15.json");
-        Assert.Equal((2, $"--sound: expected a file of its own, found '{flight}'\n"), (status, errors));
+        Assert.Equal((2, $"--sound: expected another file than the log, found '{flight}'\n"), (status, errors));
     }
 
     private static async Task<(int Status, string Output, string Errors)> RunAsync(params string[] args)

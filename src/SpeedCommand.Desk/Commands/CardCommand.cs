@@ -35,7 +35,7 @@ internal static class CardCommand
         command.SetAction(parsed =>
         {
             var chosen = AnswerOptions.ReadUnits(parsed.GetValue(units));
-            var file = parsed.GetValue(output) is { } path ? PictureFile.Named("--out", path, ".txt", ".svg", ".pdf", ".png") : null;
+            var file = parsed.GetValue(output) is { } path ? PictureFile.Named("--out", path, ".txt", ".svg", ".pdf", ".png").Checked(options.GliderOf(parsed)) : null;
             var card = new SpeedCard(Read(options, parsed, parsed.GetValue(masses), chosen));
             if (file is null)
             {

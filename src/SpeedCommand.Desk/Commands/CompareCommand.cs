@@ -2,6 +2,7 @@ using System.CommandLine;
 using SpeedCommand.Desk.Comparisons;
 using SpeedCommand.Desk.Plots;
 using SpeedCommand.Replay.Comparison;
+using SpeedCommand.Replay.Files;
 
 namespace SpeedCommand.Desk.Commands;
 
@@ -32,8 +33,10 @@ internal static class CompareCommand
     {
         if (!File.Exists(request.Against))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"--against: expected a settings file or stored output, found no '{request.Against}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"--against: expected a settings file or stored output, found {InputFile.Found(request.Against)}");
         }
+
+        request.Plot?.Checked([.. request.Flight.Files, new("that of --against", request.Against)]);
 
         var comparison = Compare(request, onNumbers: null);
         Console.Out.Write(ComparisonTable.Of(comparison));

@@ -1,5 +1,7 @@
 using System.CommandLine;
 using SpeedCommand.Replay.Conditions;
+using SpeedCommand.Replay.Files;
+using SpeedCommand.Replay.Settings;
 
 namespace SpeedCommand.Desk.Commands;
 
@@ -13,6 +15,9 @@ internal sealed class ConditionInput(params string[] without)
     public void AddTo(Command command) => _options.ForEach(command.Add);
 
     public bool IsGiven(ParseResult parsed, string name) => TextOf(parsed, name) is not null;
+
+    /// <summary>The glider file the options name; without a path when they name none that is there.</summary>
+    public InputFile GliderOf(ParseResult parsed) => new("the glider file", GliderFiles.PathOf(TextOf(parsed, "--glider"), ""));
 
     /// <summary>The conditions, with the mass another option gives if there is one. Warnings go to standard error.</summary>
     /// <exception cref="DeskFailure">Every fault of the options, or else of the glider file.</exception>

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using SpeedCommand.Commands;
 
 namespace SpeedCommand.Desk.Commands;
 
@@ -26,9 +27,9 @@ internal static class DeskProgram
             FitTrialsCommand.Create(),
         };
         var parsed = root.Parse(args);
-        if (parsed.Errors.Count > 0)
+        if (ParseFaults.Of(parsed) is { Count: > 0 } faults)
         {
-            return Fail(ExitStatus.Usage, parsed.Errors[0].Message);
+            return Fail(ExitStatus.Usage, [.. faults]);
         }
 
         try
@@ -47,11 +48,16 @@ internal static class DeskProgram
 
     private static int Fail(ExitStatus status, params string[] messages)
     {
+        Tell(messages);
+        return (int)status;
+    }
+
+    /// <summary>Tells what is wrong, a line each.</summary>
+    public static void Tell(IEnumerable<string> messages)
+    {
         foreach (var message in messages)
         {
             Console.Error.WriteLine($"speedcommand-desk: {message.ReplaceLineEndings(" ")}");
         }
-
-        return (int)status;
     }
 }

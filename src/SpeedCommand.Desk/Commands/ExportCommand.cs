@@ -2,6 +2,7 @@ using System.CommandLine;
 using SpeedCommand.Desk.Exports;
 using SpeedCommand.Pipeline;
 using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Replay.Pictures;
@@ -33,11 +34,7 @@ internal static class ExportCommand
     {
         var ending = Endings.FirstOrDefault(one => to.EndsWith(one, StringComparison.OrdinalIgnoreCase))
             ?? throw new DeskFailure(ExitStatus.Usage, $"--to: expected a file name ending in {string.Join(", ", Endings)}, found '{to}'");
-        if (Path.GetFullPath(to) == Path.GetFullPath(flight.Path))
-        {
-            throw new DeskFailure(ExitStatus.Usage, $"--to: expected another file than the log, found '{to}'");
-        }
-
+        DeskOutput.Check("--to", to, flight.Files);
         if (ending == ".igc")
         {
             WriteIgc(flight, to);
@@ -64,9 +61,14 @@ internal static class ExportCommand
 
     private static void WriteIgc(FlightInput flight, string to)
     {
-        if (flight.Path.EndsWith(".igc", StringComparison.OrdinalIgnoreCase) || !File.Exists(flight.Path))
+        if (!File.Exists(flight.Path))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a flight log (.log, .log.gz), found '{flight.Path}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a flight log (.log, .log.gz), found {InputFile.Found(flight.Path)}");
+        }
+
+        if (flight.Path.EndsWith(".igc", StringComparison.OrdinalIgnoreCase))
+        {
+            throw new DeskFailure(ExitStatus.BadData, $"LOG: expected a flight log (.log, .log.gz), found the recorder's file '{flight.Path}'");
         }
 
         try

@@ -5,6 +5,7 @@ using SpeedCommand.Desk.Plots;
 using SpeedCommand.Displays.Units;
 using SpeedCommand.Flight.Gliders;
 using SpeedCommand.Flight.Polars;
+using SpeedCommand.Replay.Files;
 
 namespace SpeedCommand.Desk.Commands;
 
@@ -38,6 +39,7 @@ internal static class FitCommand
     private static void Run(Request request)
     {
         var (bytes, glider) = ScenarioInput.ReadGliderBytes(request.Glider);
+        CheckOutputs(request);
         var handbook = HandbookPolar.Of(glider, request.Glider);
         var (flights, segments) = (new List<FitFlight>(), new List<GlideSegment>());
         foreach (var log in request.Logs)
@@ -49,11 +51,32 @@ internal static class FitCommand
 
         var fit = FitResult.Of(handbook, request.IsBugsOnly, flights, segments);
         Console.Out.Write(FitTable.Of(fit, request.Units));
+        if (fit.ReasonNotToTrust is { } reason)
+        {
+            throw new DeskFailure(ExitStatus.BadData, request.Output is null ? reason : $"{reason}: '{request.Output}' was not written");
+        }
+
         request.Plot?.Write(FitPicture.WidthPx, FitPicture.HeightPx, canvas => FitPicture.Draw(canvas, fit, request.Units));
         if (request.Output is { } output)
         {
             WriteGlider(output, bytes, fit);
         }
+    }
+
+    private static void CheckOutputs(Request request)
+    {
+        InputFile[] inputs =
+        [
+            .. request.Logs.Select(log => new InputFile("the log", log)),
+            new("the settings", request.Settings),
+            new("the glider file", ScenarioInput.PathOfGlider(request.Glider)),
+        ];
+        if (request.Output is { } output)
+        {
+            DeskOutput.Check("--out", output, inputs);
+        }
+
+        request.Plot?.Checked([.. inputs, new("that of --out", request.Output)]);
     }
 
     private static GlideSegments Cut(FlightInput flight, int number, DragPolar handbook)
@@ -80,6 +103,6 @@ internal static class FitCommand
             throw new DeskFailure(ExitStatus.BadData, [.. result.Problems.Where(one => !one.IsWarning).Select(one => one.ToString())]);
         }
 
-        File.WriteAllBytes(output, written);
+        OutputFile.Replace(output, written);
     }
 }

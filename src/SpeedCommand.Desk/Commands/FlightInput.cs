@@ -1,4 +1,5 @@
 using SpeedCommand.Pipeline;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Replaying;
 using SpeedCommand.Replay.Settings;
 using SpeedCommand.Sentences;
@@ -13,13 +14,22 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
 {
     private static readonly Dictionary<string, string> Nothing = [];
 
+    /// <summary>Every file that is read for it, as far as it is known before the recording is opened.</summary>
+    public IEnumerable<InputFile> Files =>
+    [
+        new("the log", Path),
+        new("the settings", SettingsFile),
+        new("the glider file", GliderFiles.PathOf(Glider, SettingsFile ?? "")),
+        new("the glider file", GliderFiles.PathOf(Replay.Settings.SettingsFile.GliderOf(SettingsFile), SettingsFile ?? "")),
+    ];
+
     /// <summary>Opens the recording.</summary>
     /// <exception cref="DeskFailure">There is none, or it is not readable as one.</exception>
     public IRecording Open()
     {
         if (!File.Exists(Path))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a recorded flight, found no '{Path}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a recorded flight, found {InputFile.Found(Path)}");
         }
 
         try
@@ -41,7 +51,7 @@ internal sealed record FlightInput(string Path, string? SettingsFile, string? Gl
     {
         if (SettingsFile is not null && !File.Exists(SettingsFile))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"--settings: expected a settings file, found no '{SettingsFile}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"--settings: expected a settings file, found {InputFile.Found(SettingsFile)}");
         }
 
         if (!Replay.Settings.SettingsFile.TryOpen(SettingsFile, Nothing, Nothing, out var source, out var problem))

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Globalization;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Simulation.Noise;
 
@@ -26,7 +27,7 @@ internal static class NoiseCommand
     {
         if (!File.Exists(path))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a file, found no '{path}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a file, found {InputFile.Found(path)}");
         }
 
         IReadOnlyList<SensorNoise> sensors;

@@ -25,7 +25,7 @@ internal static class PolarCommand
         command.SetAction(parsed =>
         {
             var chosen = AnswerOptions.ReadUnits(parsed.GetValue(units));
-            var file = parsed.GetValue(plot) is { } path ? PictureFile.Named("--plot", path, ".png", ".svg") : null;
+            var file = parsed.GetValue(plot) is { } path ? PictureFile.Named("--plot", path, ".png", ".svg").Checked(options.GliderOf(parsed)) : null;
             var curve = new SinkCurve(options.Read(parsed));
             if (!curve.IsKnown)
             {

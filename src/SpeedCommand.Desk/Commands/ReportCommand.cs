@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.Globalization;
 using SpeedCommand.Desk.Reports;
 using SpeedCommand.Displays.Units;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Replaying;
 
 namespace SpeedCommand.Desk.Commands;
@@ -22,33 +23,50 @@ internal static class ReportCommand
         command.SetAction(parsed =>
         {
             var flights = parsed.GetRequiredValue(logs).Select(log => new FlightInput(log, parsed.GetValue(settings), parsed.GetValue(glider))).ToList();
-            Run(flights, parsed.GetRequiredValue(output), AnswerOptions.ReadUnits(parsed.GetValue(units)));
-            return (int)ExitStatus.Done;
+            return (int)Run(flights, parsed.GetRequiredValue(output), AnswerOptions.ReadUnits(parsed.GetValue(units)));
         });
         return command;
     }
 
-    private static void Run(IReadOnlyList<FlightInput> flights, string folder, DisplayUnits units)
+    /// <summary>A flight that cannot be reported spoils no other; the exit status is the worst of theirs.</summary>
+    private static ExitStatus Run(IReadOnlyList<FlightInput> flights, string folder, DisplayUnits units)
     {
         var pages = PageNames(flights);
-        Directory.CreateDirectory(folder);
+        DeskOutput.MakeFolder("--out", folder);
+        InputFile[] inputs = [.. flights[0].Files, .. flights.Select(flight => new InputFile("the log", flight.Path))];
+        foreach (var page in flights.Count > 1 ? pages.Append(IndexName) : pages)
+        {
+            DeskOutput.Check("--out", Path.Combine(folder, page), inputs);
+        }
+
         var rows = new List<IndexRow>();
+        var worst = ExitStatus.Done;
         foreach (var (input, page) in flights.Zip(pages))
         {
-            var flight = Replay(input);
-            if (flight.Moments.Count == 0)
+            try
             {
-                throw new DeskFailure(ExitStatus.BadData, $"{input.Path}: expected a flight, found nothing that lasts");
+                var flight = Replay(input);
+                File.WriteAllText(Path.Combine(folder, page), new FlightPage(flight, units).Html());
+                rows.Add(IndexRow.Of(page, flight));
             }
-
-            File.WriteAllText(Path.Combine(folder, page), new FlightPage(flight, units).Html());
-            rows.Add(IndexRow.Of(page, flight));
+            catch (DeskFailure failure)
+            {
+                DeskProgram.Tell(failure.Messages);
+                worst = failure.Status > worst ? failure.Status : worst;
+            }
+            catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+            {
+                DeskProgram.Tell([$"{input.Path}: {fault.Message}"]);
+                worst = ExitStatus.InputOutput > worst ? ExitStatus.InputOutput : worst;
+            }
         }
 
         if (rows.Count > 1)
         {
             File.WriteAllText(Path.Combine(folder, IndexName), IndexPage.Html(rows, units));
         }
+
+        return worst;
     }
 
     /// <summary>Logs of the same name in different folders must not overwrite each other's page, nor the index.</summary>
@@ -70,6 +88,7 @@ internal static class ReportCommand
     }
 
     /// <summary>Replays a recording into what a report needs of it.</summary>
+    /// <exception cref="DeskFailure">There is none, it is not readable as one, or nothing was flown.</exception>
     public static ReportFlight Replay(FlightInput input)
     {
         using var recording = input.Open();
@@ -78,6 +97,11 @@ internal static class ReportCommand
         recording.Start(settings, flight, streams).RunToEnd();
 
         flight.End();
+        if (flight.Moments.Count == 0)
+        {
+            throw new DeskFailure(ExitStatus.BadData, $"{input.Path}: expected a flight, found nothing that lasts");
+        }
+
         flight.Remarks.AddRange(recording.Remarks);
         if (recording.IsCut)
         {

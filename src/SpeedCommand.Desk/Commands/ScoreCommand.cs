@@ -1,5 +1,6 @@
 using System.CommandLine;
 using SpeedCommand.Desk.Plots;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Simulation.Scoring;
 using SpeedCommand.Simulation.Sensors;
@@ -24,7 +25,7 @@ internal static class ScoreCommand
             DefaultValueFactory = _ => string.Join(',', EstimatorCatalogue.All.Select(one => one.Name)),
         };
         var json = new Option<bool>("--json") { Description = "JSON instead of a table." };
-        var plot = new Option<string?>("--plot") { Description = "Picture of truth and estimates on the first flight (.png or .svg)." };
+        var plot = new Option<string?>("--plot") { Description = "Picture of truth and estimates on the first flight (.png or .svg).", HelpName = "FILE" };
         var command = new Command("score", "Score estimators of the climb on simulated flights or on logs with truth.") { inputs, grade, seeds, estimators, json, plot };
         command.SetAction(parsed =>
         {
@@ -49,6 +50,7 @@ internal static class ScoreCommand
 
     private static void Run(Request request)
     {
+        request.Plot?.Checked(request.Inputs.Where(File.Exists).Select(input => new InputFile("the log or scenario", input)));
         var rows = new List<ScoreRow>();
         var plotted = false;
         foreach (var input in request.Inputs)
@@ -95,7 +97,7 @@ internal static class ScoreCommand
     {
         if (!File.Exists(input))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a file, found no '{input}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a file, found {InputFile.Found(input)}");
         }
 
         try

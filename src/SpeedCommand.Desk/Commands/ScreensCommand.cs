@@ -39,7 +39,14 @@ internal static class ScreensCommand
 
     private static void Run(string logs, string folder, DisplayUnits units)
     {
-        List<ScreenMoment> moments = [.. Phases(Path.Combine(logs, "demo.log"), units), .. Faults(Path.Combine(logs, "faults"), units)];
+        var faults = Path.Combine(logs, "faults");
+        if (!Directory.Exists(faults))
+        {
+            throw new DeskFailure(ExitStatus.NoInput, $"--logs: expected a folder of logs, found no '{faults}'");
+        }
+
+        DeskOutput.MakeFolder("--out", folder);
+        List<ScreenMoment> moments = [.. Phases(Path.Combine(logs, "demo.log"), units), .. Faults(faults, units)];
         foreach (var missing in PhaseMoments.Names.Except(moments.Select(moment => moment.Name)))
         {
             Console.Error.WriteLine($"{logs}: no moment of '{missing}' in these flights");
@@ -96,11 +103,6 @@ internal static class ScreensCommand
 
     private static IEnumerable<ScreenMoment> Faults(string folder, DisplayUnits units)
     {
-        if (!Directory.Exists(folder))
-        {
-            throw new DeskFailure(ExitStatus.NoInput, $"--logs: expected a folder of logs, found no '{folder}'");
-        }
-
         foreach (var log in Directory.GetFiles(folder, "*.log").Order(StringComparer.Ordinal))
         {
             var moment = new FaultMoment("fault-" + RecordingFile.StemOf(log), units);

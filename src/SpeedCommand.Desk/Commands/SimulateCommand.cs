@@ -16,7 +16,7 @@ internal static class SimulateCommand
             Description = $"A scenario file, or one of {string.Join(", ", BundledScenarios.Names)}.",
         };
         var seed = new Option<long>("--seed") { Description = "Seed of every random number; the same seed gives the same bytes.", Required = true };
-        var output = new Option<string>("--out") { Description = "The flight log to write (.log or .log.gz).", Required = true };
+        var output = new Option<string>("--out") { Description = "The flight log to write (.log or .log.gz).", HelpName = "FILE", Required = true };
         var grade = GradeOption();
         var command = new Command("simulate", "Fly a scenario with simulated air and sensors; write a flight log with truth records.")
         {
@@ -38,6 +38,7 @@ internal static class SimulateCommand
     private static void Run(string nameOrPath, long seed, string output, SensorGrade? grade)
     {
         var (scenario, glider) = ScenarioInput.Read(nameOrPath, grade);
+        DeskOutput.Check("--out", output, ScenarioInput.FilesOf(nameOrPath, scenario));
         foreach (var line in KnobList.Of(scenario, seed))
         {
             Console.Error.WriteLine(line);

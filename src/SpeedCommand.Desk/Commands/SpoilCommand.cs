@@ -1,4 +1,5 @@
 using System.CommandLine;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Logs;
 using SpeedCommand.Simulation.Faults;
 
@@ -13,14 +14,15 @@ internal static class SpoilCommand
         var plan = new Option<string>("--plan")
         {
             Description = $"A fault plan, or one of {string.Join(", ", BundledFaultPlans.Names)}.",
+            HelpName = "PLAN",
             Required = true,
         };
         var seed = new Option<long>("--seed") { Description = "Seed of every random number; the same seed gives the same bytes.", Required = true };
-        var output = new Option<string>("--out") { Description = "The flight log to write (.log or .log.gz).", Required = true };
+        var output = new Option<string>("--out") { Description = "The flight log to write (.log or .log.gz).", HelpName = "FILE", Required = true };
         var command = new Command("spoil", "Put faults into a flight log: unplugged boards, noise on lines, blocked tubes.") { input, plan, seed, output };
         command.SetAction(parsed =>
         {
-            Run(parsed.GetRequiredValue(input), ReadPlan(parsed.GetRequiredValue(plan)), parsed.GetRequiredValue(seed), parsed.GetRequiredValue(output));
+            Run(parsed.GetRequiredValue(input), parsed.GetRequiredValue(plan), parsed.GetRequiredValue(seed), parsed.GetRequiredValue(output));
             return (int)ExitStatus.Done;
         });
         return command;
@@ -37,17 +39,15 @@ internal static class SpoilCommand
         return result.Plan ?? throw new DeskFailure(ExitStatus.BadData, [.. result.Problems.Select(problem => problem.ToString())]);
     }
 
-    private static void Run(string input, FaultPlan plan, long seed, string output)
+    private static void Run(string input, string planName, long seed, string output)
     {
+        var plan = ReadPlan(planName);
         if (!File.Exists(input))
         {
-            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a file, found no '{input}'");
+            throw new DeskFailure(ExitStatus.NoInput, $"LOG: expected a file, found {InputFile.Found(input)}");
         }
 
-        if (Path.GetFullPath(input) == Path.GetFullPath(output))
-        {
-            throw new DeskFailure(ExitStatus.Usage, $"--out: expected another file than LOG, found '{output}'");
-        }
+        DeskOutput.Check("--out", output, new InputFile("the log", input), new InputFile("the plan", File.Exists(planName) ? planName : null));
 
         Console.Error.WriteLine(FormattableString.Invariant($"seed {seed}, plan {plan.Name}, {plan.Faults.Count} faults"));
         try

@@ -13,8 +13,10 @@ internal static class ReplayedLines
         var settings = flight.ReadSettings(recording.GliderFile, recording.Flown, out var streams);
         using var buffer = new MemoryStream();
         var replay = recording.Start(settings, new PictureLines(buffer), streams);
-        while (replay.Step())
+        for (var isFlying = true; isFlying;)
         {
+            // The last step, which finds the recording's end, may give a picture too.
+            isFlying = replay.Step();
             if (buffer.Length == 0)
             {
                 continue;

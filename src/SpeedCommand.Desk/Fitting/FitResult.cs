@@ -30,6 +30,24 @@ internal sealed record FitResult
     /// <summary>Every stretch of every flight, used or not.</summary>
     public required IReadOnlyList<GlideSegment> Segments { get; init; }
 
+    /// <summary>Why the fit is no better than the handbook, so that no glider file should be made of it; null when something was learnt.</summary>
+    public string? ReasonNotToTrust
+    {
+        get
+        {
+            if (!Segments.Any(one => one.Verdict == SegmentVerdict.Used))
+            {
+                return "expected straight, steady glides to learn from, found none";
+            }
+
+            // What the fit takes as given, such as the shape for bugs, counts neither way.
+            var unknown = PolarBelief.Numbers.Select(number => (Before: Before.Of(number.Of), After: After.Of(number.Of))).Where(pair => !pair.Before.IsGiven);
+            return unknown.All(pair => Credible.IsHardlyTold(pair.Before, pair.After))
+                ? "expected glides that tell something of the polar, found that every number is hardly told by them"
+                : null;
+        }
+    }
+
     /// <summary>Fits.</summary>
     /// <param name="handbook">The polar known before.</param>
     /// <param name="isBugsOnly">Whether only an extra sink at every speed is in doubt.</param>

@@ -7,9 +7,6 @@ namespace SpeedCommand.Desk.Fitting;
 /// <summary>A fit as text: the polar with its intervals, what the flights could not tell, the segments.</summary>
 internal static class FitTable
 {
-    /// <summary>An interval that keeps more than this share of its width before the flights was hardly learnt from them.</summary>
-    private const double HardlyLearnt = 0.8;
-
     public static string Of(FitResult fit, DisplayUnits units)
     {
         var text = new StringBuilder();
@@ -38,7 +35,7 @@ internal static class FitTable
             text.Append(CultureInfo.InvariantCulture,
                 $"{number.Name,-16}{Number(number.Of(fit.Handbook), unit, format),10}{Number(number.Of(fit.Polar), unit, format),10}   "
                 + $"{Number(after.Low, unit, format) + " to " + Number(after.High, unit, format),-22}{Number(before.Low, unit, format) + " to " + Number(before.High, unit, format),-20}"
-                + $"{unit?.Label}{(IsLearnt(before, after) ? "" : "  hardly told by these flights")}\n");
+                + $"{unit?.Label}{(Credible.IsHardlyTold(before, after) ? "  hardly told by these flights" : "")}\n");
         }
 
         text.Append("Sink and speeds in the polar's own scale: equivalent airspeed at reference mass and sea level.\n");
@@ -55,7 +52,7 @@ internal static class FitTable
         {
             text.Append("The flights tell nothing: no glide could be used. What is called fitted is the handbook's polar, and the interval is what was believed before.\n");
         }
-        else if (PolarBelief.Numbers.Any(number => !IsLearnt(fit.Before.Of(number.Of), fit.After.Of(number.Of))))
+        else if (PolarBelief.Numbers.Any(number => Credible.IsHardlyTold(fit.Before.Of(number.Of), fit.After.Of(number.Of))))
         {
             text.Append("Where the flights hardly tell, the interval is the one believed before: fly steady glides at more speeds, in quieter air.\n");
         }
@@ -81,9 +78,6 @@ internal static class FitTable
             }
         }
     }
-
-    /// <summary>What the fit takes as given, such as the shape for bugs, is nothing to be learnt.</summary>
-    private static bool IsLearnt(Credible before, Credible after) => after.Width <= HardlyLearnt * before.Width || before.Width < 1e-6;
 
     private static (DisplayUnit? Unit, string Format) Look(PolarNumberKind kind, DisplayUnits units) => kind switch
     {

@@ -3,16 +3,18 @@ using System.Text;
 using System.Text.RegularExpressions;
 using SkiaSharp;
 using SpeedCommand.Desk.Commands;
+using SpeedCommand.Replay.Files;
 
 namespace SpeedCommand.Desk.Plots;
 
 /// <summary>A picture, page or text to write; the kind is in the file's name.</summary>
 internal sealed partial class PictureFile
 {
+    private readonly string _option;
     private readonly string _path;
     private readonly string _ending;
 
-    private PictureFile(string path, string ending) => (_path, _ending) = (path, ending);
+    private PictureFile(string option, string path, string ending) => (_option, _path, _ending) = (option, path, ending);
 
     /// <summary>Checks the name an option gave before any work is done.</summary>
     /// <exception cref="DeskFailure">The name's ending is none of those that can be written.</exception>
@@ -20,7 +22,15 @@ internal sealed partial class PictureFile
     {
         var ending = endings.FirstOrDefault(ending => path.EndsWith(ending, StringComparison.OrdinalIgnoreCase))
             ?? throw new DeskFailure(ExitStatus.Usage, $"{option}: expected a file name ending in {string.Join(" or ", endings)}, found '{path}'");
-        return new PictureFile(path, ending);
+        return new PictureFile(option, path, ending);
+    }
+
+    /// <summary>Checks before any work is done that it can be written, over none of the files that are read.</summary>
+    /// <exception cref="DeskFailure">It must not, or cannot, be written.</exception>
+    public PictureFile Checked(params IEnumerable<InputFile> inputs)
+    {
+        DeskOutput.Check(_option, _path, inputs);
+        return this;
     }
 
     public bool IsText => _ending == ".txt";

@@ -5,6 +5,9 @@ namespace SpeedCommand.Replay.Logs;
 /// <summary>Opens flight logs on disk, plain (.log) or packed (.log.gz).</summary>
 public static class FlightLogFile
 {
+    /// <summary>The first two bytes of a gzip file (RFC 1952, 2.3.1).</summary>
+    private static ReadOnlySpan<byte> GzipMagic => [0x1F, 0x8B];
+
     /// <summary>Opens a log for reading; a name that ends in .gz is unpacked on the way.</summary>
     /// <param name="path">Path of the log.</param>
     /// <returns>The reader, standing before the first record.</returns>
@@ -14,13 +17,14 @@ public static class FlightLogFile
     public static FlightLogReader Open(string path)
     {
         Stream stream = new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite, 1);
-        if (path.EndsWith(".gz", StringComparison.OrdinalIgnoreCase))
-        {
-            stream = new GZipStream(stream, CompressionMode.Decompress);
-        }
-
         try
         {
+            if (path.EndsWith(".gz", StringComparison.OrdinalIgnoreCase))
+            {
+                CheckPacked(stream);
+                stream = new GZipStream(stream, CompressionMode.Decompress);
+            }
+
             return FlightLogReader.Open(stream);
         }
         catch
@@ -45,5 +49,22 @@ public static class FlightLogFile
         }
 
         return new FlightLogWriter(stream, header);
+    }
+
+    /// <summary>Without this, a file that is no packed one would look like a packed log that lost everything.</summary>
+    private static void CheckPacked(Stream stream)
+    {
+        if (!stream.CanSeek)
+        {
+            return;
+        }
+
+        Span<byte> start = stackalloc byte[2];
+        var length = stream.ReadAtLeast(start, start.Length, throwOnEndOfStream: false);
+        stream.Position = 0;
+        if (!GzipMagic.StartsWith(start[..length]))
+        {
+            throw new FormatException($"expected a file packed by gzip, as its name says, found one that begins with {Convert.ToHexString(start[..length])}");
+        }
     }
 }

@@ -27,15 +27,23 @@ public static class GliderFiles
             }
         }
 
-        return new GliderFileResult(null, [new JsonProblem(name, 0, "",
-            $"expected a glider file, found none by that path, beside the settings or among {string.Join(", ", Bundled())}")]);
+        return new GliderFileResult(null, [new JsonProblem(name, 0, "", Directory.Exists(name)
+            ? "expected a glider file, found a folder"
+            : $"expected a glider file, found none by that path, beside the settings or among {string.Join(", ", Bundled())}")]);
     }
 
     /// <summary>Whether there is a glider file of that name in any of the places searched.</summary>
     /// <param name="name">Path or bare file name.</param>
     /// <param name="besideFile">A file whose folder is searched next; empty for none.</param>
     /// <returns>Whether there is a file, readable or not.</returns>
-    public static bool Exists(string name, string besideFile) => Candidates(name, besideFile).Any(File.Exists);
+    public static bool Exists(string name, string besideFile) => PathOf(name, besideFile) is not null;
+
+    /// <summary>The glider file that a name stands for.</summary>
+    /// <param name="name">Path or bare file name; null or empty for none.</param>
+    /// <param name="besideFile">A file whose folder is searched next; empty for none.</param>
+    /// <returns>The path of the file, readable or not; null when there is none.</returns>
+    public static string? PathOf(string? name, string besideFile) =>
+        string.IsNullOrEmpty(name) ? null : Candidates(name, besideFile).FirstOrDefault(File.Exists);
 
     /// <summary>The text of a glider file.</summary>
     /// <param name="name">Path or bare file name.</param>
@@ -45,7 +53,7 @@ public static class GliderFiles
     {
         try
         {
-            return Candidates(name, besideFile).FirstOrDefault(File.Exists) is { } path ? File.ReadAllText(path) : null;
+            return PathOf(name, besideFile) is { } path ? File.ReadAllText(path) : null;
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {

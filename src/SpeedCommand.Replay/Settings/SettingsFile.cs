@@ -5,6 +5,14 @@ namespace SpeedCommand.Replay.Settings;
 /// <summary>Opens the settings file and lays environment and command line over it.</summary>
 public static class SettingsFile
 {
+    private static readonly Dictionary<string, string> Nothing = [];
+
+    /// <summary>The glider that a settings file names, found out in silence: its faults are told when it is read in earnest.</summary>
+    /// <param name="path">The file; null for none.</param>
+    /// <returns>Path or bare file name of the glider; null when none is named.</returns>
+    public static string? GliderOf(string? path) =>
+        File.Exists(path) && TryOpen(path, Nothing, Nothing, out var source, out _) ? source.Text("glider")?.Text : null;
+
     /// <summary>Reads a settings file.</summary>
     /// <param name="path">The file; null for none.</param>
     /// <param name="environment">All environment variables.</param>

@@ -19,11 +19,11 @@ internal static class CommandTree
     public static async Task<int> InvokeAsync(this RootCommand root, string[] args)
     {
         var parsed = root.Parse(args);
-        if (parsed.Errors.Count > 0)
+        if (ParseFaults.Of(parsed) is { Count: > 0 } faults)
         {
-            foreach (var error in parsed.Errors)
+            foreach (var fault in faults)
             {
-                await Console.Error.WriteLineAsync(error.Message).ConfigureAwait(false);
+                await Console.Error.WriteLineAsync(fault).ConfigureAwait(false);
             }
 
             return ExitStatus.Usage;

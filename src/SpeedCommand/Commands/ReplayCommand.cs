@@ -49,17 +49,15 @@ internal static class ReplayCommand
             return Fail(fault);
         }
 
+        if (ReplayOutputs.Fault(request) is { } outputFault)
+        {
+            Console.Error.WriteLine(outputFault.Message);
+            return outputFault.IsUsage ? ExitStatus.Usage : ExitStatus.InputOutput;
+        }
+
         if (request.HasFolder)
         {
-            try
-            {
-                return new FlightBatch(request).Run(cancel);
-            }
-            catch (Exception failure) when (failure is IOException or UnauthorizedAccessException)
-            {
-                Console.Error.WriteLine($"--out-dir: {failure.Message}");
-                return ExitStatus.InputOutput;
-            }
+            return new FlightBatch(request).Run(cancel);
         }
 
         var job = new FlightJob(request, Console.Error);
@@ -94,7 +92,7 @@ internal static class ReplayCommand
             return $"--out: expected one log, found {request.Recordings.Length}; --out-dir takes many";
         }
 
-        return ReplayOutputs.Fault(request);
+        return null;
     }
 
     private static int Fail(string message)

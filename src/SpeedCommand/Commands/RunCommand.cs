@@ -1,5 +1,6 @@
 using System.CommandLine;
 using SpeedCommand.Bench;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Settings;
 using SpeedCommand.Service;
 using SpeedCommand.Settings;
@@ -61,7 +62,7 @@ internal static class RunCommand
         var log = benchLog?.ToString() ?? Path.Combine(AppContext.BaseDirectory, "demo.log");
         if (isBench && !File.Exists(log))
         {
-            return Fail(ExitStatus.NoInput, $"--bench: expected a flight log, found no file '{log}'");
+            return Fail(ExitStatus.NoInput, $"--bench: expected a flight log, found {InputFile.Found(log)}");
         }
 
         try

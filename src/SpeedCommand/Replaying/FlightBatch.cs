@@ -14,7 +14,6 @@ internal sealed class FlightBatch(ReplayRequest request)
 
     public int Run(CancellationToken cancel)
     {
-        Directory.CreateDirectory(request.Folder!);
         var count = request.Recordings.Length;
         var results = new FlightResult[count];
         var messages = new string[count];

@@ -2,9 +2,11 @@ using SpeedCommand.Commands;
 using SpeedCommand.Displaying;
 using SpeedCommand.Displays.Sound;
 using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Igc;
 using SpeedCommand.Replay.Pictures;
 using SpeedCommand.Replay.Replaying;
+using SpeedCommand.Replay.Settings;
 using SpeedCommand.Settings;
 
 namespace SpeedCommand.Replaying;
@@ -21,7 +23,7 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
     {
         if (!File.Exists(path))
         {
-            return Failed(path, ExitStatus.NoInput, "expected a flight log, found no such file");
+            return Failed(path, ExitStatus.NoInput, $"expected a flight log, found {(Directory.Exists(path) ? "a folder" : "no such file")}");
         }
 
         try
@@ -35,9 +37,19 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
             source.Recorded = recording.Flown;
             var settings = CockpitSettingsReader.Read(source, request.Glider, recording.GliderFile, needsPorts: false);
             SettingsOptions.Tell(source, errors);
-            return settings is null
-                ? new FlightResult(path, ExitStatus.BadSettings, null, 0, 0)
-                : Play(path, recording, settings, cancel);
+            if (settings is null)
+            {
+                return new FlightResult(path, ExitStatus.BadSettings, null, 0, 0);
+            }
+
+            // The log names a glider too, and only now is it known which.
+            if (GliderFault(path, new InputFile("the glider file", GliderFiles.PathOf(recording.GliderFile, source.File))) is { } fault)
+            {
+                errors.WriteLine(fault.Message);
+                return new FlightResult(path, fault.IsUsage ? ExitStatus.Usage : ExitStatus.InputOutput, null, 0, 0);
+            }
+
+            return Play(path, recording, settings, cancel);
         }
         catch (FormatException fault)
         {
@@ -48,6 +60,11 @@ internal sealed class FlightJob(ReplayRequest request, TextWriter errors)
             return Failed(path, ExitStatus.InputOutput, fault.Message);
         }
     }
+
+    private OutputFault? GliderFault(string path, InputFile glider) =>
+        ReplayOutputs.Of(path, request) is { } output and not ReplayRequest.StandardOutput
+            ? OutputFile.FaultOf(ReplayOutputs.OptionOf(request), output, glider)
+            : null;
 
     private FlightResult Play(string path, IRecording recording, CockpitSettings settings, CancellationToken cancel)
     {

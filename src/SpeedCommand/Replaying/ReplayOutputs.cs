@@ -1,4 +1,7 @@
+using SpeedCommand.Replay.Files;
 using SpeedCommand.Replay.Replaying;
+using SpeedCommand.Replay.Settings;
+using SpeedCommand.Settings;
 
 namespace SpeedCommand.Replaying;
 
@@ -16,29 +19,45 @@ internal static class ReplayOutputs
         return request.Out ?? (request.IsShown || request.Sound is not null ? null : ReplayRequest.StandardOutput);
     }
 
-    /// <summary>A recording is not to be written over, by its own replay or by another's; null when all is well.</summary>
-    public static string? Fault(ReplayRequest request)
+    /// <summary>Nothing that is read is to be written over, by its own replay or by another's; null when all is well.</summary>
+    public static OutputFault? Fault(ReplayRequest request)
     {
-        var option = request.HasFolder ? "--out-dir" : "--out";
+        var option = OptionOf(request);
         if (request.Folder is not null && File.Exists(request.Folder))
         {
-            return $"{option}: expected a folder, found the file '{request.Folder}'";
+            return new OutputFault(true, $"{option}: expected a folder, found the file '{request.Folder}'");
         }
 
         var outputs = request.Recordings.Select(recording => Of(recording, request)).OfType<string>()
             .Where(output => output != ReplayRequest.StandardOutput).ToArray();
-        var inputs = request.Recordings.Select(Path.GetFullPath).ToHashSet(StringComparer.Ordinal);
-        if (request.Sound is not null && (inputs.Contains(Path.GetFullPath(request.Sound)) || outputs.Contains(request.Sound)))
+        if (outputs.GroupBy(output => output, StringComparer.Ordinal).FirstOrDefault(group => group.Count() > 1) is { } twice)
         {
-            return $"--sound: expected a file of its own, found '{request.Sound}'";
+            return new OutputFault(true, $"{option}: expected logs of different names, found two that both give '{twice.Key}'");
         }
 
-        if (outputs.FirstOrDefault(output => inputs.Contains(Path.GetFullPath(output))) is { } overwritten)
+        if (request.Folder is not null && OutputFile.MakeFolder(option, request.Folder) is { } noFolder)
         {
-            return $"{option}: expected another file than the log, found '{overwritten}'";
+            return noFolder;
         }
 
-        var twice = outputs.GroupBy(output => output, StringComparer.Ordinal).FirstOrDefault(group => group.Count() > 1);
-        return twice is null ? null : $"{option}: expected logs of different names, found two that both give '{twice.Key}'";
+        var inputs = OutputFile.Known(InputsOf(request));
+        return outputs.Select(output => OutputFile.FaultOf(option, output, inputs)).FirstOrDefault(fault => fault is not null)
+            ?? (request.Sound is null ? null : OutputFile.FaultOf("--sound", request.Sound,
+                OutputFile.Known([.. InputsOf(request), .. outputs.Select(output => new InputFile($"that of {option}", output))])));
+    }
+
+    /// <summary>The option that says where pictures go.</summary>
+    public static string OptionOf(ReplayRequest request) => request.HasFolder ? "--out-dir" : "--out";
+
+    private static IEnumerable<InputFile> InputsOf(ReplayRequest request)
+    {
+        var settings = request.Settings?.ToString() ?? StateFolder.DefaultSettings;
+        return
+        [
+            .. request.Recordings.Select(recording => new InputFile("the log", recording)),
+            new("the settings", settings),
+            new("the glider file", GliderFiles.PathOf(request.Glider, settings ?? "")),
+            new("the glider file", GliderFiles.PathOf(SettingsFile.GliderOf(settings), settings ?? "")),
+        ];
     }
 }

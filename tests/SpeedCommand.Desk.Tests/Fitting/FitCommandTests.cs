@@ -47,9 +47,12 @@ public sealed class FitCommandTests : IDisposable
     {
         var log = PathOf("empty.log");
         File.WriteAllText(log, "#speedcommand-log 1\n#start 2026-06-14T10:00:00.000Z\n#glider marram-15.json\n0.000000 end\n");
-        var (status, output, _) = DeskConsole.RunToText("fit", log, "--glider", "marram-15.json");
-        Assert.Equal(0, status);
+        var (fitted, picture) = (PathOf("fitted.json"), PathOf("fit.svg"));
+        File.WriteAllText(fitted, "older");
+        var (status, output, errors) = DeskConsole.RunToText("fit", log, "--glider", "marram-15.json", "--out", fitted, "--plot", picture);
+        Assert.Equal((65, $"speedcommand-desk: expected straight, steady glides to learn from, found none: '{fitted}' was not written\n"), (status, errors));
         Assert.Contains("The flights tell nothing: no glide could be used.", output, StringComparison.Ordinal);
+        Assert.Equal(("older", false), (File.ReadAllText(fitted), File.Exists(picture)));
     }
 
     [Theory]
