@@ -115,7 +115,7 @@ public sealed class BrowserTests(Browser browser) : IClassFixture<Browser>
                 LastChangedUs = long.MaxValue / 2,
             },
         };
-        await browser.WaitForAsync("document.getElementById('speed').textContent === '~125'");
+        await browser.WaitForAsync("document.getElementById('speed').textContent === '125~'");
         await LookAsync("set");
         await browser.WaitForAsync("document.getElementById('answer').textContent === 'expected climb auto 2.5 m/s ±0.6'");
         Assert.Equal(
