@@ -24,8 +24,8 @@ public class DisplayBenchmarks
         var stream = pipeline.AddStream("board", ChecksumRule.Required);
         for (var timeUs = 0; timeUs < 5_000_000; timeUs += 50_000)
         {
-            pipeline.Accept(timeUs, stream, BenchFlightData.Static);
-            pipeline.Accept(timeUs, stream, BenchFlightData.Impact);
+            pipeline.Accept(timeUs, stream, BenchFlightData.Static[timeUs / 50_000]);
+            pipeline.Accept(timeUs, stream, BenchFlightData.Impact[timeUs / 50_000]);
         }
 
         _picture = newest.Picture;

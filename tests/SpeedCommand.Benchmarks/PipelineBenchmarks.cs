@@ -15,6 +15,7 @@ public class PipelineBenchmarks
     private readonly NewestPicture _newest = new();
     private FlightPipeline _pipeline = null!;
     private long _timeUs;
+    private int _next;
     private int _static;
     private int _pitot;
     private bool _isStaticNext;
@@ -45,15 +46,17 @@ public class PipelineBenchmarks
     public void Reading()
     {
         _isStaticNext = !_isStaticNext;
-        _pipeline.Accept(_timeUs += ReadingStepUs, _isStaticNext ? _static : _pitot, _isStaticNext ? BenchFlightData.Static : BenchFlightData.Impact);
+        _next = (_next + 1) % BenchFlightData.Static.Length;
+        _pipeline.Accept(_timeUs += ReadingStepUs, _isStaticNext ? _static : _pitot, (_isStaticNext ? BenchFlightData.Static : BenchFlightData.Impact)[_next]);
     }
 
     [Benchmark(Description = "picture and three readings")]
     public void OnePicture()
     {
-        _pipeline.Accept(_timeUs, _static, BenchFlightData.Static);
-        _pipeline.Accept(_timeUs, _pitot, BenchFlightData.Impact);
-        _pipeline.Accept(_timeUs, _static, BenchFlightData.Temperature);
+        _next = (_next + 1) % BenchFlightData.Static.Length;
+        _pipeline.Accept(_timeUs, _static, BenchFlightData.Static[_next]);
+        _pipeline.Accept(_timeUs, _pitot, BenchFlightData.Impact[_next]);
+        _pipeline.Accept(_timeUs, _static, BenchFlightData.Temperature[_next]);
         _pipeline.AdvanceTo(_timeUs += PipelineBounds.PicturePeriodUs);
     }
 }
