@@ -3,6 +3,7 @@ using Microsoft.Extensions.Logging.Abstractions;
 using SpeedCommand.Bench;
 using SpeedCommand.Displaying;
 using SpeedCommand.Pipeline.Picture;
+using SpeedCommand.Ports.Linux;
 using SpeedCommand.Service;
 using SpeedCommand.Settings;
 
@@ -39,6 +40,33 @@ public sealed class DisplayTests
         var frame = await NextFrameAsync(screen, "no static");
         Assert.DoesNotContain("144", frame, StringComparison.Ordinal);
         await display.StopAsync(CancellationToken.None);
+    }
+
+    [LinuxTheory]
+    [InlineData("Poll")]
+    [InlineData("Portable")]
+    public async Task StuckForFiveSeconds_ThenShowsTheNewestPicture_AndNoOldOne(string reader)
+    {
+        using var screen = new PseudoTerminal();
+        var holder = SystemCalls.Open(screen.DevicePath, SystemCalls.ReadWrite | SystemCalls.NoControllingTerminal | SystemCalls.CloseOnExec);
+        Assert.Equal(0, TerminalFlow.Set(holder, TerminalFlow.Off));
+        var latest = new LatestPicture([]);
+        var settings = TestSettings.For(null) with { Serial = SerialSettings.Standard with { Reader = Enum.Parse<PortReaderKind>(reader) } };
+        using var display = new SerialTextService(
+            new SerialTextSettings(screen.DevicePath, 9600), latest, settings, TimeProvider.System, NullLogger<SerialTextService>.Instance);
+        await display.StartAsync(CancellationToken.None);
+        for (var i = 1; i <= 50; i++)
+        {
+            // 108 km/h, then 126: the frame under way when the display wakes up may be half a second old, but not two.
+            latest.OnPicture(Known(i * 100_000) with { HoldIndicatedMps = new Gauge(i < 25 ? 30 : 35, double.NaN, 0) });
+            await Task.Delay(100);
+        }
+
+        latest.OnPicture(Known(5_100_000) with { HoldIndicatedMps = new Gauge(40, double.NaN, 0) });
+        Assert.Equal(0, TerminalFlow.Set(holder, TerminalFlow.On));
+        Assert.DoesNotContain("108", await NextFrameAsync(screen, "144"), StringComparison.Ordinal);
+        await display.StopAsync(CancellationToken.None);
+        Assert.Equal(0, SystemCalls.Close(holder));
     }
 
     private static async Task<string> NextFrameAsync(PseudoTerminal screen, string expected)

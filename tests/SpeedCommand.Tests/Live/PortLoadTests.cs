@@ -1,4 +1,3 @@
-using System.Runtime.InteropServices;
 using SpeedCommand.Bench;
 using SpeedCommand.Pipeline.Picture;
 using SpeedCommand.Ports.Linux;
@@ -8,7 +7,7 @@ namespace SpeedCommand.Tests.Live;
 
 /// <summary>More than the boards should send, and displays that take nothing: neither delays the pilot's numbers.</summary>
 [Collection(LiveTests.Name)]
-public sealed partial class PortLoadTests
+public sealed class PortLoadTests
 {
     [LinuxTheory]
     [InlineData("Poll")]
@@ -39,7 +38,7 @@ public sealed partial class PortLoadTests
     {
         using var screen = new PseudoTerminal();
         var holder = SystemCalls.Open(screen.DevicePath, SystemCalls.ReadWrite | SystemCalls.NoControllingTerminal | SystemCalls.CloseOnExec);
-        Assert.Equal(0, Stop(holder, OutputOff));
+        Assert.Equal(0, TerminalFlow.Set(holder, TerminalFlow.Off));
         await using (var cockpit = new LiveCockpit(reader, new SerialTextSettings(screen.DevicePath, 9600)))
         {
             cockpit.Static.PlugIn();
@@ -61,9 +60,4 @@ public sealed partial class PortLoadTests
         Assert.Equal(0, SystemCalls.Close(holder));
         Assert.Equal(0, screen.Read(new byte[1]));
     }
-
-    private const int OutputOff = 0;
-
-    [LibraryImport("libc", EntryPoint = "tcflow")]
-    private static partial int Stop(int file, int action);
 }
